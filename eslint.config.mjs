@@ -1,0 +1,19 @@
+import next from 'eslint-config-next/core-web-vitals';
+import typescript from 'eslint-config-next/typescript';
+
+export default [
+  { ignores: ['.next*/**', '.data/**', 'node_modules/**', 'public/**', 'next-env.d.ts', 'test-results/**'] },
+  ...next,
+  ...typescript,
+  {
+    rules: {
+      '@typescript-eslint/no-explicit-any': 'error',
+      '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
+      '@typescript-eslint/consistent-type-imports': 'error',
+      'no-console': ['error', { allow: ['warn', 'error'] }],
+      eqeqeq: ['error', 'smart'],
+    },
+  },
+  { files: ['scripts/**', 'tests/**', 'db/seeds/**'], rules: { 'no-console': 'off' } },
+  { files: ['lib/concrete/**', 'lib/inspection/**'], rules: { 'no-restricted-globals': ['error', 'Date', 'window', 'document', 'fetch', 'process', 'crypto'] } },
+];

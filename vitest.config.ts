@@ -1,0 +1,37 @@
+import { fileURLToPath } from 'node:url';
+import { defineConfig } from 'vitest/config';
+
+const root = fileURLToPath(new URL('.', import.meta.url));
+const resolve = { alias: { '@': root.replace(/\/$/, '') } };
+
+export default defineConfig({
+  resolve,
+  test: {
+    projects: [
+      { resolve, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'] } },
+      { resolve, test: { name: 'unit', include: ['tests/unit/**/*.test.ts'] } },
+      {
+        resolve,
+        test: {
+          name: 'integration',
+          include: ['tests/integration/**/*.test.ts'],
+          globalSetup: ['tests/integration/global-setup.ts'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+          maxWorkers: 2,
+        },
+      },
+      {
+        resolve,
+        test: {
+          name: 'faults',
+          include: ['tests/faults/**/*.test.ts'],
+          globalSetup: ['tests/integration/global-setup.ts'],
+          testTimeout: 60_000,
+          hookTimeout: 60_000,
+          maxWorkers: 1,
+        },
+      },
+    ],
+  },
+});
