@@ -15,5 +15,12 @@ export default [
     },
   },
   { files: ['scripts/**', 'tests/**', 'db/seeds/**'], rules: { 'no-console': 'off' } },
-  { files: ['lib/concrete/**', 'lib/inspection/**'], rules: { 'no-restricted-globals': ['error', 'Date', 'window', 'document', 'fetch', 'process', 'crypto'] } },
+  {
+    files: ['lib/concrete/**', 'lib/inspection/**'],
+    rules: {
+      'no-restricted-globals': ['error', 'window', 'document', 'fetch', 'process', 'crypto'],
+      'no-restricted-properties': ['error', { object: 'Date', property: 'now' }, { object: 'Math', property: 'random' }],
+      'no-restricted-syntax': ['error', "NewExpression[callee.name='Date'][arguments.length=0]"],
+    },
+  },
 ];
