@@ -1,0 +1,245 @@
+import { z } from 'zod';
+import {
+  digest,
+  instant,
+  lengthUnit,
+  millimetres,
+  optionalText,
+  planKey,
+  positiveMillimetres,
+  requiredText,
+} from './primitives';
+
+export const elementTypes = [
+  'slab',
+  'wall',
+  'column',
+  'beam',
+  'footing',
+  'mat',
+  'pier',
+  'stair',
+  'deck',
+] as const;
+export const elementType = z.enum(elementTypes);
+export type ElementType = z.infer<typeof elementType>;
+
+export const meetings = ['formed', 'cast-against-ground', 'finished-top', 'prepared-ground'] as const;
+/** How the concrete of a face meets what is on the other side of it. */
+export const meeting = z.enum(meetings);
+export type Meeting = z.infer<typeof meeting>;
+
+export const bases = ['aci-318-19', 'en-1992', 'is-456', 'as-3600', 'csa-a23.1', 'contract'] as const;
+export const acceptanceBasis = z.enum(bases);
+export type AcceptanceBasis = z.infer<typeof acceptanceBasis>;
+
+/** Simple acceptance, or guarded acceptance with guard band g (JCGM 106:2012); g is U unless the project sets it. */
+export const decisionRule = z.discriminatedUnion('kind', [
+  z.object({ kind: z.literal('simple') }),
+  z.object({ kind: z.literal('guarded'), guardMm: z.number().nonnegative().max(50).optional() }),
+]);
+export type DecisionRule = z.infer<typeof decisionRule>;
+
+export const trailStep = z.object({
+  rule: z.string(),
+  clause: z.string(),
+  edition: z.string(),
+  value: z.string(),
+  provenance: z.enum(['contract', 'seen', 'partly-seen', 'memory', 'computed', 'common-practice']),
+  note: z.string().optional(),
+});
+
+/** What a reading to one steel of a face is judged by; frozen when the plan is issued. */
+export const requirement = z.object({
+  id: planKey,
+  /** The steel it is for, in the words of the trade: "outermost bar B1", "ties", "main bars of layer 2". */
+  steel: requiredText(80),
+  barDesignation: requiredText(20),
+  barDiameterMm: positiveMillimetres,
+  specifiedMm: positiveMillimetres,
+  leastAcceptedMm: millimetres,
+  mostAcceptedMm: millimetres.nullable(),
+  codeMinimumMm: millimetres.nullable(),
+  warnings: z.array(z.string()),
+  trail: z.array(trailStep),
+});
+export type Requirement = z.infer<typeof requirement>;
+
+/** A place where cover is to be read: drawn at random, or chosen where failures live. */
+export const readingPoint = z.object({
+  id: planKey,
+  label: requiredText(20),
+  kind: z.enum(['drawn', 'chosen']),
+  xMm: millimetres,
+  yMm: millimetres,
+  /** Why a chosen point was chosen: "edge of opening", "traffic route". */
+  reason: optionalText(120).optional(),
+});
+export type ReadingPoint = z.infer<typeof readingPoint>;
+
+const rectangle = {
+  xMm: millimetres,
+  yMm: millimetres,
+  widthMm: positiveMillimetres,
+  heightMm: positiveMillimetres,
+};
+export const opening = z.object({ id: planKey, name: requiredText(80), ...rectangle });
+export const recess = z.object({
+  id: planKey,
+  name: requiredText(80),
+  depthMm: positiveMillimetres,
+  ...rectangle,
+});
+
+export const face = z.object({
+  id: planKey,
+  name: requiredText(80),
+  meeting,
+  soffit: z.boolean(),
+  exposure: optionalText(80),
+  widthMm: positiveMillimetres,
+  heightMm: positiveMillimetres,
+  openings: z.array(opening).max(50),
+  recesses: z.array(recess).max(50),
+  requirements: z.array(requirement).min(1).max(8),
+  points: z.array(readingPoint).max(500),
+});
+export type Face = z.infer<typeof face>;
+
+/** A set of parallel bars. `order` counts from the face that the layer belongs to, 1 is outermost. */
+export const layer = z.object({
+  id: planKey,
+  name: requiredText(40),
+  faceId: planKey,
+  order: z.number().int().min(1).max(12),
+  barDesignation: requiredText(20),
+  barDiameterMm: positiveMillimetres,
+  grade: optionalText(40),
+  coating: z.enum(['none', 'epoxy', 'galvanised', 'stainless', 'frp']),
+  spacingMm: positiveMillimetres.nullable(),
+  count: z.number().int().positive().max(10_000).nullable(),
+  direction: requiredText(40),
+});
+export type Layer = z.infer<typeof layer>;
+
+export const measurementKinds = [
+  'support-height',
+  'support-spacing',
+  'tie-share',
+  'bar-spacing',
+  'bar-count',
+  'bar-size',
+  'clear-distance',
+  'lap-length',
+  'embedment',
+  'coating-damage',
+  'tendon-height',
+] as const;
+export const measurementKind = z.enum(measurementKinds);
+export type MeasurementKind = z.infer<typeof measurementKind>;
+
+/** A measurement that the plan asks for, with the limits it is judged by. Lengths in mm, shares in per cent, counts as such. */
+export const measurementItem = z.object({
+  id: planKey,
+  kind: measurementKind,
+  title: requiredText(120),
+  elementId: planKey,
+  /** What the value is: a length, a count of bars, tied of total, or a bar mark. */
+  quantity: z.enum(['length', 'count', 'share', 'designation']),
+  least: z.number().finite().nullable(),
+  most: z.number().finite().nullable(),
+  expected: optionalText(40).nullable(),
+  /** How many places have to be measured. */
+  required: z.number().int().min(1).max(50),
+  /** Measured before, under and after a person's weight. */
+  loaded: z.boolean(),
+  trail: z.array(trailStep),
+});
+export type MeasurementItem = z.infer<typeof measurementItem>;
+
+export const element = z.object({
+  id: planKey,
+  type: elementType,
+  mark: requiredText(40),
+  location: requiredText(120),
+  level: optionalText(40),
+  thicknessMm: positiveMillimetres,
+  drawing: z.object({ number: requiredText(40), revision: requiredText(20) }),
+  faces: z.array(face).min(1).max(12),
+  layers: z.array(layer).max(24),
+});
+export type Element = z.infer<typeof element>;
+
+export const checkGroups = [
+  'documents',
+  'formwork',
+  'steel',
+  'placing',
+  'supports',
+  'cover',
+  'laps',
+  'embedded',
+  'cleanliness',
+  'access',
+  'sign-off',
+] as const;
+export const checkGroup = z.enum(checkGroups);
+export type CheckGroup = z.infer<typeof checkGroup>;
+
+/** One question of the checklist, with what it rests on and the evidence it needs. */
+export const checkItem = z.object({
+  id: planKey,
+  group: checkGroup,
+  question: requiredText(300),
+  basis: requiredText(200),
+  evidence: z.enum(['none', 'photo']),
+  critical: z.boolean(),
+  notApplicable: z.boolean(),
+  /** Work does not go on past a hold point; a witness point asks somebody to be there. */
+  attendance: z.enum(['none', 'hold-point', 'witness-point']),
+  /** The contractor's own items (housekeeping) may be closed by the superintendent. */
+  closedBy: z.enum(['inspector', 'superintendent']),
+  elementId: planKey.nullable(),
+});
+export type CheckItem = z.infer<typeof checkItem>;
+
+export const mix = z.object({ id: planKey, name: requiredText(80), aggregateMm: positiveMillimetres });
+
+/** What must be in the form: a dated revision, never edited, its numbers frozen when it was issued. */
+export const plan = z.object({
+  schema: z.literal(1),
+  pourId: z.uuid(),
+  revision: z.number().int().positive(),
+  issuedAt: instant,
+  authorId: z.uuid(),
+  reason: requiredText(300),
+  units: lengthUnit,
+  basis: acceptanceBasis,
+  decisionRule,
+  /** Hours that a release stands until the start of placing. */
+  validityHours: z.number().positive().max(168),
+  /** Rain at or over this depth voids a release; rain of unknown amount always does. */
+  rainLimitMm: z.number().nonnegative().max(100),
+  mix: mix.nullable(),
+  elements: z.array(element).min(1).max(60),
+  measurements: z.array(measurementItem).max(200),
+  checklist: z.object({
+    template: requiredText(80),
+    version: z.number().int().positive(),
+    items: z.array(checkItem).max(200),
+  }),
+  /** The walk over traffic routes, openings and reworked places right before the release. */
+  lastWalk: z.boolean(),
+});
+export type Plan = z.infer<typeof plan>;
+
+/** Revision letters as drawings use them: 1 -> A, 26 -> Z, 27 -> AA. */
+export function revisionLetter(revision: number): string {
+  let letters = '';
+  for (let rest = revision; rest > 0; rest = Math.floor((rest - 1) / 26)) {
+    letters = String.fromCharCode(65 + ((rest - 1) % 26)) + letters;
+  }
+  return letters;
+}
+
+export const planDigest = digest;
