@@ -33,7 +33,7 @@ export const entryEnvelope = z.object({
   recordedAt: instant,
   /** Server's clock minus device's clock in ms, as last known; null when never known. */
   clockOffsetMs: z.number().int().nullable(),
-  /** The highest `seq` of this project that the author had seen when recording. */
+  /** The highest `seq` of this pour (of the project stream, where pourId is null) that the author had seen. */
   seenSeq: z.number().int().nonnegative(),
 });
 export type EntryEnvelope = z.infer<typeof entryEnvelope>;
