@@ -5,7 +5,7 @@ export default {
   forbidden: [
     { name: 'no-cycles', severity: 'error', from: {}, to: { circular: true, viaOnly: { dependencyTypesNot: ['type-only'] } } },
     { name: 'no-orphan-packages', severity: 'error', from: { path: '^(app|components|lib|db|service-worker)/' }, to: { dependencyTypes: ['npm-dev'], dependencyTypesNot: ['type-only'] } },
-    forbid('concrete-is-pure', '^lib/concrete/', '^(?!lib/concrete/)', 'the trade\'s computation imports nothing of the project'),
+    forbid('concrete-is-pure', '^lib/concrete/', '^(?!lib/concrete/|node_modules/@stdlib/)', 'the trade\'s computation imports nothing of the project, and of packages only the distributions'),
     forbid('inspection-is-pure', '^lib/inspection/', '^(?!lib/(concrete|inspection)/|node_modules/(zod|canonicalize)/)', 'plan, entries, sheet and holds import lib/concrete, zod and the canonical JSON only'),
     forbid('device-stays-on-device', '^lib/device/', '^(app|components|db|lib/server)/', 'the phone\'s side knows nothing of the server\'s'),
     forbid('server-draws-nothing', '^(lib/server|db)/', '^(app|components|lib/device|service-worker)/', 'the server\'s side never imports what the browser runs'),
