@@ -1,0 +1,143 @@
+import { inRecordOrder } from './causality';
+import {
+  readEntry,
+  type Entry,
+  type EntryEnvelope,
+  type EntryOf,
+  type EntryType,
+  type Receipt,
+  type UnknownEntry,
+} from './entry';
+import type { Role } from './roles';
+
+/** An entry as a store gives it back: with a receipt once the server has taken it in. */
+export type RecordedEntry = EntryEnvelope & Partial<Receipt> & { authorRole: Role };
+
+type Listed = { [T in EntryType]: EntryOf<T>[] };
+
+/** First pass of the fold: the facts of each subject, in the order of the record, nothing judged yet. */
+export interface Facts {
+  recorded: RecordedEntry[];
+  entries: Entry[];
+  unknown: UnknownEntry[];
+  byId: Map<string, Entry>;
+  listed: Partial<Listed>;
+  amendmentsByRoot: Map<string, EntryOf<'amendment'>[]>;
+  readingsByPoint: Map<string, EntryOf<'reading'>[]>;
+  answersByCheck: Map<string, EntryOf<'answer'>[]>;
+  measurementsByItem: Map<string, EntryOf<'measurement'>[]>;
+  photosBySubject: Map<string, EntryOf<'photo'>[]>;
+  /** Rises with each fact about a subject, so that only what changed is judged again. */
+  versions: Map<string, number>;
+}
+
+export const noFacts = (): Facts => ({
+  recorded: [],
+  entries: [],
+  unknown: [],
+  byId: new Map(),
+  listed: {},
+  amendmentsByRoot: new Map(),
+  readingsByPoint: new Map(),
+  answersByCheck: new Map(),
+  measurementsByItem: new Map(),
+  photosBySubject: new Map(),
+  versions: new Map(),
+});
+
+/** The key of the place that a reading is about: a point of the plan, or the place of a spot reading. */
+export function pointKeyOf(entry: EntryOf<'reading'>): string {
+  return entry.body.pointId ?? `spot:${entry.id}`;
+}
+
+export const subjectKey = (subject: { kind: string; id: string }): string => `${subject.kind}:${subject.id}`;
+
+/** All facts of one type, in the order of the record. */
+export function listOf<T extends EntryType>(facts: Facts, type: T): EntryOf<T>[] {
+  return (facts.listed[type] as EntryOf<T>[] | undefined) ?? [];
+}
+
+function push<K, V>(map: Map<K, V[]>, key: K, value: V) {
+  const list = map.get(key);
+  if (list) list.push(value);
+  else map.set(key, [value]);
+}
+
+/** Typing an entry is the costly part; it depends on nothing but the entry, so each object is typed once. */
+const typed = new WeakMap<RecordedEntry, ReturnType<typeof readEntry>>();
+
+function typedOnce(recorded: RecordedEntry): ReturnType<typeof readEntry> {
+  const known = typed.get(recorded);
+  if (known) return known;
+  const read = readEntry(recorded);
+  typed.set(recorded, read);
+  return read;
+}
+
+/** Adds one entry to the facts. The caller adds them in the order of the record. */
+export function addFact(facts: Facts, recorded: RecordedEntry): void {
+  facts.recorded.push(recorded);
+  const read = typedOnce(recorded);
+  if (read.kind !== 'known') {
+    // What cannot be read is never dropped in silence: it becomes an "update needed" hold.
+    facts.unknown.push({
+      ...recorded,
+      unknown: true,
+      seq: recorded.seq ?? null,
+      receivedAt: recorded.receivedAt ?? null,
+    });
+    return;
+  }
+  const entry = read.entry;
+  facts.entries.push(entry);
+  facts.byId.set(entry.id, entry);
+  ((facts.listed[entry.type] ??= []) as Entry[]).push(entry);
+  const subject = subjectOf(facts, entry);
+  facts.versions.set(subject, (facts.versions.get(subject) ?? 0) + 1);
+  switch (entry.type) {
+    case 'amendment':
+      push(facts.amendmentsByRoot, entry.body.rootId, entry);
+      break;
+    case 'reading':
+      push(facts.readingsByPoint, pointKeyOf(entry), entry);
+      break;
+    case 'answer':
+      push(facts.answersByCheck, entry.body.checkId, entry);
+      break;
+    case 'measurement':
+      push(facts.measurementsByItem, entry.body.itemId, entry);
+      break;
+    case 'photo':
+      push(facts.photosBySubject, subjectKey(entry.body.about), entry);
+      break;
+  }
+}
+
+/** The subject whose judgement an entry changes; entries of a wider reach share one subject per type. */
+function subjectOf(facts: Facts, entry: Entry): string {
+  switch (entry.type) {
+    case 'reading':
+      return subjectKey({ kind: 'point', id: pointKeyOf(entry) });
+    case 'answer':
+      return subjectKey({ kind: 'check', id: entry.body.checkId });
+    case 'measurement':
+      return subjectKey({ kind: 'measurement', id: entry.body.itemId });
+    case 'amendment': {
+      const root = facts.byId.get(entry.body.rootId);
+      return root && root.type !== 'amendment' ? subjectOf(facts, root) : entry.type;
+    }
+    default:
+      return entry.type;
+  }
+}
+
+/** The record's own order, with what waits on the device last; the same id is taken once. */
+export function inOrder(recorded: readonly RecordedEntry[]): RecordedEntry[] {
+  const once = new Map<string, RecordedEntry>();
+  for (const entry of recorded) {
+    const known = once.get(entry.id);
+    if (!known || (known.seq === undefined && entry.seq !== undefined)) once.set(entry.id, entry);
+  }
+  const placed = (entry: RecordedEntry) => ({ ...entry, seq: entry.seq ?? null });
+  return [...once.values()].sort((a, b) => inRecordOrder(placed(a), placed(b)));
+}

@@ -1,0 +1,42 @@
+import { acceptedAsSeen } from './acceptances';
+import { amended } from './amendments';
+import { headsOf, saw } from './causality';
+import type { EntryOf } from './entry';
+import { subjectKey } from './facts';
+import type { JudgingContext } from './judge-point';
+import type { CheckState } from './sheet-types';
+
+const favour = { 'not-met': 0, 'not-applicable': 1, met: 2 } as const;
+
+/** Judges every question of the checklist: what was said last, or the less favourable where people had not seen each other. */
+export function judgeChecks(context: JudgingContext): CheckState[] {
+  return context.plan.checklist.items.map((item) => {
+    let amendmentConflict = false;
+    const answers: EntryOf<'answer'>[] = [];
+    for (const entry of context.facts.answersByCheck.get(item.id) ?? []) {
+      const result = amended(context.facts, entry);
+      amendmentConflict ||= result.conflict;
+      const standing = result.rivals.filter((body): body is EntryOf<'answer'>['body'] => body !== null);
+      const least = standing.sort((a, b) => favour[a.answer] - favour[b.answer])[0];
+      if (least) answers.push({ ...entry, body: least });
+    }
+    const heads = headsOf(answers);
+    const governing =
+      heads.length === 0
+        ? null
+        : heads.reduce((least, one) => (favour[one.body.answer] < favour[least.body.answer] ? one : least));
+    const key = subjectKey({ kind: 'check', id: item.id });
+    const corrections = context.corrections.filter(({ keys }) => keys.has(key)).map(({ entry }) => entry);
+    const correctedSince =
+      corrections.findLast((correction) => governing !== null && !saw(governing, correction)) ?? null;
+    return {
+      item,
+      answers,
+      governing,
+      conflict: amendmentConflict || heads.length > 1,
+      photoIds: (context.facts.photosBySubject.get(key) ?? []).map((photo) => photo.body.photoId),
+      correctedSince,
+      acceptedBy: governing ? acceptedAsSeen(context.facts, governing, context.accepted) : null,
+    };
+  });
+}

@@ -1,0 +1,177 @@
+import { judgeReading, type JudgedReading } from '@/lib/concrete/judge-reading';
+import { acceptedAsSeen } from './acceptances';
+import { amended } from './amendments';
+import { headsOf, saw, type Placed } from './causality';
+import type { CorrectedSubjects } from './corrections';
+import type { EntryOf } from './entry';
+import { subjectKey, type Facts } from './facts';
+import { standingAt } from './instruments';
+import type { Element, Face, Plan, ReadingPoint } from './plan';
+import type { InstrumentState, MarkKind, PointState, ReadingState } from './sheet-types';
+
+type ReadingEntry = EntryOf<'reading'>;
+type ReadingBody = ReadingEntry['body'];
+
+/** What every point of a pour is judged with. */
+export interface JudgingContext {
+  plan: Plan;
+  facts: Facts;
+  instruments: Map<string, InstrumentState>;
+  corrections: CorrectedSubjects[];
+  accepted: Map<string, EntryOf<'disposition'>>;
+}
+
+export interface PointPlace {
+  element: Element;
+  face: Face;
+  point: ReadingPoint | null;
+  key: string;
+  label: string;
+  xMm: number;
+  yMm: number;
+}
+
+function judgeBody(
+  context: JudgingContext,
+  place: PointPlace,
+  entry: ReadingEntry,
+  body: ReadingBody,
+): JudgedReading {
+  const requirement =
+    place.face.requirements.find((candidate) => candidate.id === body.requirementId) ?? null;
+  const instrument = body.instrumentId === null ? undefined : context.instruments.get(body.instrumentId);
+  return judgeReading(
+    {
+      mm: body.value?.mm ?? null,
+      ...(body.goNoGo ? { goNoGo: body.goNoGo } : {}),
+      sectionMm: place.element.thicknessMm,
+      confirmed: body.measurer === null || body.measurer.confirmed,
+    },
+    requirement,
+    {
+      uncertaintyMm: instrument?.status?.body.uncertaintyMm ?? null,
+      status: standingAt(instrument, body.measuredAt, entry.clockOffsetMs),
+    },
+    context.plan.decisionRule,
+    context.plan.units,
+  );
+}
+
+/** Lower is less favourable; "not verified" counts neither way and never stands in for a verdict. */
+export function favour(judged: JudgedReading): number {
+  if (judged.verdict === 'not-met') return -1e9 + (judged.marginMm ?? 0);
+  if (judged.verdict === 'met') return judged.marginMm ?? 0;
+  return 1e9;
+}
+
+function correctionsOf(
+  context: JudgingContext,
+  place: PointPlace,
+  readings: ReadingState[],
+): EntryOf<'correction'>[] {
+  const own = subjectKey({ kind: 'point', id: place.key });
+  const whole = subjectKey({ kind: 'face', id: place.face.id });
+  return context.corrections
+    .filter(({ entry, keys }) => {
+      if (keys.has(own)) return true;
+      // A correction of a face puts right what its author could see failing there, and nothing else.
+      return (
+        keys.has(whole) &&
+        readings.some((reading) => reading.judged.verdict === 'not-met' && saw(entry, reading.entry))
+      );
+    })
+    .map(({ entry }) => entry);
+}
+
+/**
+ * Judges one place: every reading by the requirement of the steel it touched, rounds by the corrections it had seen,
+ * and per requirement the least favourable reading of the latest round that was verified.
+ */
+export function judgePoint(context: JudgingContext, place: PointPlace): PointState {
+  const entries = context.facts.readingsByPoint.get(place.key) ?? [];
+  let amendmentConflict = false;
+  const events: Placed[] = [];
+  const readings: ReadingState[] = entries
+    .filter((entry) => entry.body.phase === 'before')
+    .map((entry) => {
+      const result = amended(context.facts, entry, (before, after) => {
+        const was = judgeBody(context, place, entry, before).verdict;
+        return was === 'not-met' && judgeBody(context, place, entry, after).verdict !== 'not-met';
+      });
+      amendmentConflict ||= result.conflict;
+      events.push(entry, ...result.amendments.map((amendment) => amendment.entry));
+      const judgedRivals = result.rivals
+        .filter((body): body is ReadingBody => body !== null)
+        .map((body) => ({ body, judged: judgeBody(context, place, entry, body) }))
+        .sort((a, b) => favour(a.judged) - favour(b.judged));
+      const governing = judgedRivals[0];
+      return {
+        entry,
+        current: governing?.body ?? null,
+        amendments: result.amendments,
+        requirement:
+          place.face.requirements.find((one) => one.id === (governing?.body ?? entry.body).requirementId) ??
+          null,
+        judged: governing?.judged ?? judgeBody(context, place, entry, entry.body),
+        round: 1,
+        acceptedBy: acceptedAsSeen(context.facts, entry, context.accepted),
+        pending: entry.seq === null,
+      };
+    });
+
+  const corrections = correctionsOf(context, place, readings);
+  for (const reading of readings) {
+    if (reading.entry.authorRole !== 'inspector') continue;
+    reading.round = 1 + corrections.filter((correction) => saw(reading.entry, correction)).length;
+  }
+  const standing = readings.filter((reading) => reading.current !== null);
+  const governing = governingOf(standing);
+  const recheckDone = (correction: EntryOf<'correction'>) =>
+    standing.some((reading) => reading.judged.verdict !== 'not-verified' && saw(reading.entry, correction));
+  return {
+    elementId: place.element.id,
+    faceId: place.face.id,
+    point: place.point,
+    key: place.key,
+    label: place.label,
+    xMm: place.xMm,
+    yMm: place.yMm,
+    readings,
+    governing,
+    mark: markOf(governing, standing),
+    roundAsked: 1 + corrections.length,
+    recheck: corrections.every(recheckDone) ? null : 'failed',
+    conflict: amendmentConflict || (events.length > 1 && headsOf(events).length > 1),
+  };
+}
+
+function governingOf(standing: ReadingState[]): ReadingState[] {
+  const byRequirement = new Map<string, ReadingState[]>();
+  for (const reading of standing) {
+    if (reading.judged.verdict === 'not-verified') continue;
+    const key = reading.requirement?.id ?? '';
+    byRequirement.set(key, [...(byRequirement.get(key) ?? []), reading]);
+  }
+  return [...byRequirement.values()].map((group) => {
+    const latest = Math.max(...group.map((reading) => reading.round));
+    return group
+      .filter((reading) => reading.round === latest)
+      .reduce((least, reading) => (favour(reading.judged) < favour(least.judged) ? reading : least));
+  });
+}
+
+/** The mark of the drawing grammar for one reading. */
+export function markOfReading(judged: JudgedReading): MarkKind {
+  if (judged.verdict === 'not-verified') return 'not-verified';
+  if (judged.verdict === 'not-met') return judged.side === 'high' ? 'not-met-high' : 'not-met-low';
+  return judged.flags.length > 0 ? 'met-flagged' : 'met';
+}
+
+function markOf(governing: ReadingState[], standing: ReadingState[]): MarkKind {
+  const worst = governing.reduce<ReadingState | null>(
+    (least, one) => (!least || favour(one.judged) < favour(least.judged) ? one : least),
+    null,
+  );
+  if (worst) return markOfReading(worst.judged);
+  return standing.length > 0 ? 'not-verified' : 'unread';
+}
