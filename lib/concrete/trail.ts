@@ -1,0 +1,20 @@
+/** Where a number comes from: typed from the contract, read in a source, only remembered, worked out, or habit. */
+export type Provenance = 'contract' | 'seen' | 'partly-seen' | 'memory' | 'computed' | 'common-practice';
+
+/** One step by which a requirement was found: what was applied, from which clause, and the number it gave. */
+export interface TrailStep {
+  rule: string;
+  clause: string;
+  edition: string;
+  value: string;
+  provenance: Provenance;
+  note?: string;
+}
+
+/** What is written beside every number that was not read in its standard. */
+export const FROM_MEMORY = 'from memory, check against the edition in force';
+
+/** True where a screen has to show "verify against your edition" beside the result. */
+export function needsEditionCheck(trail: readonly { provenance: string }[]): boolean {
+  return trail.some((step) => step.provenance === 'memory');
+}
