@@ -1,0 +1,278 @@
+import type { CheckItem, DecisionRule, ElementType, Meeting, Plan } from '@/lib/inspection/plan';
+import type { PlanInput } from '@/lib/inspection/plan-input';
+import { exactText } from './length-words';
+
+/**
+ * The form as it was typed. Names follow `planInput` without "Mm": a length here is text, with or without its unit, so
+ * that nothing typed is ever lost or changed while it is not valid yet.
+ */
+export interface RequirementDraft {
+  id: string;
+  steel: string;
+  barDesignation: string;
+  contractSpecified: string;
+  deviation: 'basis' | 'contract' | 'never-less';
+  contractMinus: string;
+  contractPlus: string;
+}
+
+export interface RectangleDraft {
+  id: string;
+  name: string;
+  x: string;
+  y: string;
+  width: string;
+  height: string;
+  /** Of a recess; empty for an opening. */
+  depth: string;
+}
+
+export interface ChosenPointDraft {
+  id: string;
+  x: string;
+  y: string;
+  reason: string;
+}
+
+export interface FaceDraft {
+  id: string;
+  name: string;
+  meeting: Meeting;
+  soffit: boolean;
+  exposure: string;
+  width: string;
+  height: string;
+  openings: RectangleDraft[];
+  recesses: RectangleDraft[];
+  requirements: RequirementDraft[];
+  drawnPoints: string;
+  chosenPoints: ChosenPointDraft[];
+}
+
+export interface LayerDraft {
+  id: string;
+  name: string;
+  faceId: string;
+  order: string;
+  barDesignation: string;
+  grade: string;
+  coating: 'none' | 'epoxy' | 'galvanised' | 'stainless' | 'frp';
+  spacing: string;
+  count: string;
+  direction: string;
+}
+
+export interface ElementDraft {
+  id: string;
+  type: ElementType;
+  mark: string;
+  location: string;
+  level: string;
+  thickness: string;
+  effectiveDepth: string;
+  drawing: { number: string; revision: string };
+  faces: FaceDraft[];
+  layers: LayerDraft[];
+}
+
+export interface PlanDraft {
+  number: string;
+  title: string;
+  location: string;
+  /** `datetime-local` text in the project's time zone; empty while not planned. */
+  plannedAt: string;
+  reason: string;
+  units: 'mm' | 'in';
+  basis: PlanInput['basis'];
+  rule: 'simple' | 'guarded';
+  guard: string;
+  validityHours: string;
+  rainLimit: string;
+  mixName: string;
+  mixAggregate: string;
+  lastWalk: boolean;
+  elements: ElementDraft[];
+  /** Checks of the templates that are left out, by id. */
+  leftOut: string[];
+  /** The checklist of an earlier revision or pour; null: by the types of the elements. */
+  checklist: { template: string; version: number; items: CheckItem[] } | null;
+  measurements: PlanInput['measurements'];
+}
+
+/** A key that stays with a face or an element over revisions. */
+export const newKey = (prefix: string): string =>
+  `${prefix}-${globalThis.crypto.randomUUID().replaceAll('-', '').slice(0, 12)}`;
+
+export const emptyRequirement = (): RequirementDraft => ({
+  id: newKey('req'),
+  steel: 'outermost bar',
+  barDesignation: '',
+  contractSpecified: '',
+  deviation: 'basis',
+  contractMinus: '',
+  contractPlus: '',
+});
+
+export const emptyFace = (name = ''): FaceDraft => ({
+  id: newKey('face'),
+  name,
+  meeting: 'formed',
+  soffit: false,
+  exposure: '',
+  width: '',
+  height: '',
+  openings: [],
+  recesses: [],
+  requirements: [emptyRequirement()],
+  drawnPoints: '',
+  chosenPoints: [],
+});
+
+export const emptyLayer = (faceId: string, order: number): LayerDraft => ({
+  id: newKey('layer'),
+  name: '',
+  faceId,
+  order: String(order),
+  barDesignation: '',
+  grade: '',
+  coating: 'none',
+  spacing: '',
+  count: '',
+  direction: '',
+});
+
+export const emptyElement = (): ElementDraft => ({
+  id: newKey('el'),
+  type: 'slab',
+  mark: '',
+  location: '',
+  level: '',
+  thickness: '',
+  effectiveDepth: '',
+  drawing: { number: '', revision: '' },
+  faces: [emptyFace()],
+  layers: [],
+});
+
+export const emptyPlanDraft = (): PlanDraft => ({
+  number: '',
+  title: '',
+  location: '',
+  plannedAt: '',
+  reason: 'First issue',
+  units: 'mm',
+  basis: 'contract',
+  rule: 'simple',
+  guard: '',
+  validityHours: '24',
+  rainLimit: '5',
+  mixName: '',
+  mixAggregate: '',
+  lastWalk: true,
+  elements: [emptyElement()],
+  leftOut: [],
+  checklist: null,
+  measurements: [],
+});
+
+const ruleDraft = (rule: DecisionRule): Pick<PlanDraft, 'rule' | 'guard'> =>
+  rule.kind === 'simple'
+    ? { rule: 'simple', guard: '' }
+    : { rule: 'guarded', guard: rule.guardMm === undefined ? '' : String(rule.guardMm) };
+
+/**
+ * The form filled from an issued plan. Ids are kept, so that a revision's points keep theirs; a copy for another pour
+ * keeps them too, since they are unique within a plan only. A requirement comes back as the contract's: its specified
+ * cover, and its deviations where the trail says that they were the contract's.
+ */
+export function draftOfPlan(plan: Plan): PlanDraft {
+  const shown = (mm: number) => exactText(mm, plan.units);
+  return {
+    ...emptyPlanDraft(),
+    reason: '',
+    units: plan.units,
+    basis: plan.basis,
+    ...ruleDraft(plan.decisionRule),
+    validityHours: String(plan.validityHours),
+    rainLimit: exactText(plan.rainLimitMm, 'mm'),
+    mixName: plan.mix?.name ?? '',
+    mixAggregate: plan.mix ? shown(plan.mix.aggregateMm) : '',
+    lastWalk: plan.lastWalk,
+    checklist: plan.checklist,
+    measurements: plan.measurements.map(({ trail: _trail, ...item }) => item),
+    elements: plan.elements.map((element) => ({
+      id: element.id,
+      type: element.type,
+      mark: element.mark,
+      location: element.location,
+      level: element.level,
+      thickness: shown(element.thicknessMm),
+      effectiveDepth: '',
+      drawing: element.drawing,
+      layers: element.layers.map((layer) => ({
+        id: layer.id,
+        name: layer.name,
+        faceId: layer.faceId,
+        order: String(layer.order),
+        barDesignation: layer.barDesignation,
+        grade: layer.grade,
+        coating: layer.coating,
+        spacing: layer.spacingMm === null ? '' : shown(layer.spacingMm),
+        count: layer.count === null ? '' : String(layer.count),
+        direction: layer.direction,
+      })),
+      faces: element.faces.map((face) => ({
+        id: face.id,
+        name: face.name,
+        meeting: face.meeting,
+        soffit: face.soffit,
+        exposure: face.exposure,
+        width: shown(face.widthMm),
+        height: shown(face.heightMm),
+        openings: face.openings.map((one) => ({
+          id: one.id,
+          name: one.name,
+          x: shown(one.xMm),
+          y: shown(one.yMm),
+          width: shown(one.widthMm),
+          height: shown(one.heightMm),
+          depth: '',
+        })),
+        recesses: face.recesses.map((one) => ({
+          id: one.id,
+          name: one.name,
+          x: shown(one.xMm),
+          y: shown(one.yMm),
+          width: shown(one.widthMm),
+          height: shown(one.heightMm),
+          depth: shown(one.depthMm),
+        })),
+        drawnPoints: String(face.points.filter((point) => point.kind === 'drawn').length || ''),
+        chosenPoints: face.points
+          .filter((point) => point.kind === 'chosen')
+          .map((point) => ({
+            id: point.id,
+            x: shown(point.xMm),
+            y: shown(point.yMm),
+            reason: point.reason ?? '',
+          })),
+        requirements: face.requirements.map((one) => {
+          const minus = one.specifiedMm - one.leastAcceptedMm;
+          const byContract = one.trail.some(
+            (step) => step.provenance === 'contract' && /deviation|never/i.test(step.rule),
+          );
+          return {
+            id: one.id,
+            steel: one.steel,
+            barDesignation: one.barDesignation,
+            contractSpecified: shown(one.specifiedMm),
+            deviation: !byContract ? 'basis' : minus < 1e-6 ? 'never-less' : 'contract',
+            contractMinus: byContract && minus >= 1e-6 ? shown(minus) : '',
+            contractPlus:
+              byContract && one.mostAcceptedMm !== null ? shown(one.mostAcceptedMm - one.specifiedMm) : '',
+          };
+        }),
+      })),
+    })),
+  };
+}

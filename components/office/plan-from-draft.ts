@@ -1,0 +1,226 @@
+import { parseLength } from '@/lib/concrete/length';
+import { pourInput, planInput, type PlanInput, type PourInput } from '@/lib/inspection/plan-input';
+import { checklistTemplate } from '@/lib/inspection/checklist-templates';
+import type { FieldProblem } from '@/lib/inspection/app-error';
+import type { ElementDraft, FaceDraft, PlanDraft } from './plan-draft';
+import { instantFromField } from './project-time';
+
+/** Collects problems under the draft's own field names while text becomes numbers. */
+class Reader {
+  readonly problems: FieldProblem[] = [];
+  constructor(private readonly units: 'mm' | 'in') {}
+
+  /** Millimetres of a typed length; `NaN` after its problem is noted, so that the schema adds none of its own. */
+  length(path: string, text: string): number {
+    const read = parseLength(text, this.units);
+    if (read.ok && read.length.mm !== null) return read.length.mm;
+    this.problems.push({ path, message: read.ok ? 'Write the unit too.' : read.problem });
+    return Number.NaN;
+  }
+
+  optionalLength(path: string, text: string): number | null {
+    return text.trim() === '' ? null : this.length(path, text);
+  }
+
+  number(path: string, text: string): number {
+    const value = text.trim() === '' ? Number.NaN : Number(text.trim().replace(',', '.'));
+    if (!Number.isFinite(value)) this.problems.push({ path, message: 'Write a number.' });
+    return value;
+  }
+
+  optionalNumber(path: string, text: string): number | null {
+    return text.trim() === '' ? null : this.number(path, text);
+  }
+}
+
+function readFace(
+  reader: Reader,
+  at: string,
+  face: FaceDraft,
+): PlanInput['elements'][number]['faces'][number] {
+  const rectangle = (path: string, one: FaceDraft['openings'][number]) => ({
+    id: one.id,
+    name: one.name,
+    xMm: reader.length(`${path}.x`, one.x),
+    yMm: reader.length(`${path}.y`, one.y),
+    widthMm: reader.length(`${path}.width`, one.width),
+    heightMm: reader.length(`${path}.height`, one.height),
+  });
+  return {
+    id: face.id,
+    name: face.name,
+    meeting: face.meeting,
+    soffit: face.soffit,
+    exposure: face.exposure,
+    widthMm: reader.length(`${at}.width`, face.width),
+    heightMm: reader.length(`${at}.height`, face.height),
+    openings: face.openings.map((one, index) => rectangle(`${at}.openings.${index}`, one)),
+    recesses: face.recesses.map((one, index) => ({
+      ...rectangle(`${at}.recesses.${index}`, one),
+      depthMm: reader.length(`${at}.recesses.${index}.depth`, one.depth),
+    })),
+    drawnPoints: reader.optionalNumber(`${at}.drawnPoints`, face.drawnPoints),
+    chosenPoints: face.chosenPoints.map((one, index) => ({
+      id: one.id,
+      xMm: reader.length(`${at}.chosenPoints.${index}.x`, one.x),
+      yMm: reader.length(`${at}.chosenPoints.${index}.y`, one.y),
+      reason: one.reason,
+    })),
+    requirements: face.requirements.map((one, index) => {
+      const path = `${at}.requirements.${index}`;
+      const contract = one.deviation === 'contract';
+      return {
+        id: one.id,
+        steel: one.steel,
+        barDesignation: one.barDesignation,
+        contractSpecifiedMm: reader.optionalLength(`${path}.contractSpecified`, one.contractSpecified),
+        contractMinusMm: contract ? reader.length(`${path}.contractMinus`, one.contractMinus) : null,
+        contractPlusMm: contract ? reader.optionalLength(`${path}.contractPlus`, one.contractPlus) : null,
+        neverLess: one.deviation === 'never-less',
+      };
+    }),
+  };
+}
+
+function readElement(reader: Reader, at: string, element: ElementDraft): PlanInput['elements'][number] {
+  return {
+    id: element.id,
+    type: element.type,
+    mark: element.mark,
+    location: element.location,
+    level: element.level,
+    thicknessMm: reader.length(`${at}.thickness`, element.thickness),
+    effectiveDepthMm: reader.optionalLength(`${at}.effectiveDepth`, element.effectiveDepth),
+    drawing: element.drawing,
+    faces: element.faces.map((face, index) => readFace(reader, `${at}.faces.${index}`, face)),
+    layers: element.layers.map((layer, index) => {
+      const path = `${at}.layers.${index}`;
+      return {
+        id: layer.id,
+        name: layer.name,
+        faceId: layer.faceId,
+        order: reader.number(`${path}.order`, layer.order),
+        barDesignation: layer.barDesignation,
+        grade: layer.grade,
+        coating: layer.coating,
+        spacingMm: reader.optionalLength(`${path}.spacing`, layer.spacing),
+        count: reader.optionalNumber(`${path}.count`, layer.count),
+        direction: layer.direction,
+      };
+    }),
+  };
+}
+
+/** The checks that the plan carries: an earlier revision's own, or the templates of its element types put together. */
+export function draftChecklist(
+  draft: Pick<PlanDraft, 'checklist' | 'elements' | 'leftOut'>,
+): PlanInput['checklist'] {
+  if (draft.checklist) {
+    return {
+      ...draft.checklist,
+      items: draft.checklist.items.filter((item) => !draft.leftOut.includes(item.id)),
+    };
+  }
+  const templates = [...new Set(draft.elements.map((element) => element.type))].map(checklistTemplate);
+  const items = new Map(templates.flatMap((one) => one.items.map((item) => [item.id, item] as const)));
+  return {
+    template: templates
+      .map((one) => one.template)
+      .join(' + ')
+      .slice(0, 80),
+    version: Math.max(1, ...templates.map((one) => one.version)),
+    items: [...items.values()].filter((item) => !draft.leftOut.includes(item.id)),
+  };
+}
+
+function readPlan(reader: Reader, draft: PlanDraft): PlanInput {
+  const guardMm = draft.rule === 'guarded' ? reader.optionalLength('guard', draft.guard) : null;
+  return {
+    units: draft.units,
+    basis: draft.basis,
+    decisionRule:
+      draft.rule === 'simple'
+        ? { kind: 'simple' }
+        : { kind: 'guarded', ...(guardMm === null ? {} : { guardMm }) },
+    validityHours: reader.number('validityHours', draft.validityHours),
+    rainLimitMm: reader.number('rainLimit', draft.rainLimit),
+    mix:
+      draft.mixName.trim() === ''
+        ? null
+        : {
+            id: 'mix-1',
+            name: draft.mixName,
+            aggregateMm: reader.length('mixAggregate', draft.mixAggregate),
+          },
+    elements: draft.elements.map((element, index) => readElement(reader, `elements.${index}`, element)),
+    measurements: draft.measurements,
+    checklist: draftChecklist(draft),
+    lastWalk: draft.lastWalk,
+  };
+}
+
+/** Where a schema's path is in the draft: no "Mm", no "plan." in front, and the mix's two fields by name. */
+export function draftPath(path: string): string {
+  return path
+    .replace(/^plan\./, '')
+    .replace(/^mix\.name$/, 'mixName')
+    .replace(/^mix\.aggregateMm$/, 'mixAggregate')
+    .replace(/^decisionRule\b.*$/, 'guard')
+    .replace(/Mm(?=\.|$)/g, '');
+}
+
+const mergeProblems = (reader: Reader, found: FieldProblem[]): FieldProblem[] => {
+  const named = new Set(reader.problems.map((problem) => problem.path));
+  return [...reader.problems, ...found.filter((problem) => !named.has(problem.path))];
+};
+
+export type ReadDraft<T> = { ok: true; input: T } | { ok: false; problems: FieldProblem[] };
+
+/** What the form says of a new pour, or what is wrong with it, by the draft's own field names. */
+export function pourFromDraft(draft: PlanDraft, projectId: string, timeZone: string): ReadDraft<PourInput> {
+  const reader = new Reader(draft.units);
+  const plannedAt = draft.plannedAt === '' ? null : instantFromField(draft.plannedAt, timeZone);
+  if (draft.plannedAt !== '' && plannedAt === null) {
+    reader.problems.push({
+      path: 'plannedAt',
+      message: "That time does not exist in the project's time zone.",
+    });
+  }
+  const parsed = pourInput.safeParse({
+    projectId,
+    number: draft.number,
+    title: draft.title,
+    location: draft.location,
+    plannedAt,
+    reason: draft.reason,
+    plan: readPlan(reader, draft),
+  });
+  if (parsed.success && reader.problems.length === 0) return { ok: true, input: parsed.data };
+  return {
+    ok: false,
+    problems: mergeProblems(
+      reader,
+      (parsed.error?.issues ?? []).map((issue) => ({
+        path: draftPath(issue.path.join('.')),
+        message: issue.message,
+      })),
+    ),
+  };
+}
+
+/** What the form says of a plan alone (a revision, or one face for the preview). */
+export function planFromDraft(draft: PlanDraft): ReadDraft<PlanInput> {
+  const reader = new Reader(draft.units);
+  const parsed = planInput.safeParse(readPlan(reader, draft));
+  if (parsed.success && reader.problems.length === 0) return { ok: true, input: parsed.data };
+  return {
+    ok: false,
+    problems: mergeProblems(
+      reader,
+      (parsed.error?.issues ?? []).map((issue) => ({
+        path: draftPath(issue.path.join('.')),
+        message: issue.message,
+      })),
+    ),
+  };
+}
