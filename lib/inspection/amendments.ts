@@ -1,5 +1,5 @@
 import { headsOf } from './causality';
-import type { Entry, EntryOf } from './entry';
+import type { EntryOf } from './entry';
 import { siteBodies } from './entry-bodies';
 import type { Facts } from './facts';
 import type { AppliedAmendment } from './sheet-types';
@@ -44,7 +44,7 @@ export function amended<T extends AmendableType>(
   const bodies = new Map<string, EntryOf<T>['body'] | null>();
   let current: EntryOf<T>['body'] | null = root.body;
   for (const entry of list) {
-    const outcome = bodyAfter(facts, root as unknown as Entry & EntryOf<T>, entry, current, needsPhoto);
+    const outcome: Outcome<T> = bodyAfter(facts, root, entry, current, needsPhoto);
     applied.push({ entry, counts: outcome.problem === null, problem: outcome.problem });
     if (outcome.problem !== null) continue;
     current = outcome.body;
@@ -56,13 +56,18 @@ export function amended<T extends AmendableType>(
   return { current, amendments: applied, rivals, conflict: heads.length > 1 };
 }
 
+interface Outcome<T extends AmendableType> {
+  body: EntryOf<T>['body'] | null;
+  problem: string | null;
+}
+
 function bodyAfter<T extends AmendableType>(
   facts: Facts,
   root: EntryOf<T>,
   amendment: EntryOf<'amendment'>,
   before: EntryOf<T>['body'] | null,
   needsPhoto: (before: EntryOf<T>['body'], after: EntryOf<T>['body']) => boolean,
-): { body: EntryOf<T>['body'] | null; problem: string | null } {
+): Outcome<T> {
   if (amendment.authorId !== root.authorId)
     return { body: before, problem: 'Only the person who recorded it can amend it.' };
   if (amendment.body.replacement === null) return { body: null, problem: null };

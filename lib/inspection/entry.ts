@@ -33,7 +33,7 @@ export const entryEnvelope = z.object({
   recordedAt: instant,
   /** Server's clock minus device's clock in ms, as last known; null when never known. */
   clockOffsetMs: z.number().int().nullable(),
-  /** The highest `seq` of this pour (of the project stream, where pourId is null) that the author had seen. */
+  /** Everything of this pour and of the project's own stream up to this `seq` had reached the author. */
   seenSeq: z.number().int().nonnegative(),
 });
 export type EntryEnvelope = z.infer<typeof entryEnvelope>;

@@ -89,7 +89,6 @@ function spotPlaces({ plan, facts }: JudgingContext): Map<string, PointPlace[]> 
  */
 function askNeighbours(context: JudgingContext, points: PointState[]): PointState[] {
   if (context.corrections.length === 0) return points;
-  const placed = points.map((state) => ({ id: state.key, xMm: state.xMm, yMm: state.yMm }));
   const asked = new Set<string>();
   for (const { entry, keys } of context.corrections) {
     const reached = points.filter(
@@ -102,9 +101,8 @@ function askNeighbours(context: JudgingContext, points: PointState[]): PointStat
     );
     const reachedKeys = new Set(reached.map((state) => state.key));
     for (const state of reached) {
-      for (const neighbour of neighboursOf({ id: state.key, xMm: state.xMm, yMm: state.yMm }, placed)) {
-        const other = points.find((candidate) => candidate.key === neighbour.id);
-        if (!other || reachedKeys.has(other.key)) continue;
+      for (const other of neighboursOf(state, points)) {
+        if (reachedKeys.has(other.key)) continue;
         const readSince = other.readings.some(
           (reading) =>
             reading.current !== null &&

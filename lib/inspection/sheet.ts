@@ -1,0 +1,173 @@
+import { acceptances, dispositionsInForce } from './acceptances';
+import { amended } from './amendments';
+import { saw } from './causality';
+import { correctedSubjects } from './corrections';
+import type { EntryOf } from './entry';
+import { addFact, inOrder, listOf, noFacts, type Facts, type RecordedEntry } from './facts';
+import { instrumentStates } from './instruments';
+import { judgeChecks } from './judge-checks';
+import { judgeFaces, type PointMemo } from './judge-faces';
+import { judgeMeasurements } from './judge-measurements';
+import { judgeNonconformances, withdrawnNonconformances } from './judge-nonconformances';
+import type { JudgingContext } from './judge-point';
+import { judgeSignatures } from './judge-signatures';
+import type { Plan } from './plan';
+import type { Sheet } from './sheet-types';
+
+export type { RecordedEntry } from './facts';
+
+/** Raised whenever the same plan and entries would fold into another sheet: cached sheets of another version are thrown away. */
+export const FOLD_VERSION = 1;
+
+/** What one fold leaves for the next of the same pour: facts already collected and places already judged. */
+export interface FoldMemo {
+  facts: Facts;
+  points: PointMemo;
+  planRevision: number;
+}
+export const newFoldMemo = (): FoldMemo => ({ facts: noFacts(), points: new Map(), planRevision: 0 });
+
+/** Facts of the memo when the given entries only add to them at the end; otherwise collected afresh. */
+function collect(recorded: readonly RecordedEntry[], memo: FoldMemo): Facts {
+  const ordered = inOrder(recorded);
+  const known = memo.facts.recorded;
+  const extendsKnown =
+    known.length <= ordered.length && known.every((entry, index) => entry === ordered[index]);
+  if (!extendsKnown) {
+    memo.facts = noFacts();
+    memo.points = new Map();
+  }
+  for (const entry of ordered.slice(memo.facts.recorded.length)) addFact(memo.facts, entry);
+  return memo.facts;
+}
+
+/**
+ * The state of a pour's inspection: the plan with all entries applied.
+ * @param recorded the pour's own stream and the project's, in any order; entries without `seq` still wait on the device
+ * @param memo kept by the caller between folds of one pour: only what changed is judged again
+ */
+export function foldSheet(
+  plan: Plan,
+  recorded: readonly RecordedEntry[],
+  memo: FoldMemo = newFoldMemo(),
+): Sheet {
+  const facts = collect(recorded, memo);
+  memo.planRevision = plan.revision;
+
+  const withdrawn = withdrawnNonconformances(facts);
+  const inForce = dispositionsInForce(facts, (id) => withdrawn.has(id));
+  const instruments = instrumentStates(facts);
+  const corrections = correctedSubjects(facts);
+  const context: JudgingContext = { plan, facts, instruments, corrections, accepted: acceptances(inForce) };
+
+  const faces = judgeFaces(context, memo.points);
+  const checks = judgeChecks(context);
+  const measurements = judgeMeasurements(context);
+  const nonconformances = judgeNonconformances(facts, corrections, withdrawn, inForce);
+  return {
+    pourId: plan.pourId,
+    plan,
+    headSeq: facts.recorded.reduce((head, entry) => Math.max(head, entry.seq ?? 0), 0),
+    entries: [...facts.entries],
+    unknown: [...facts.unknown],
+    faces,
+    checks,
+    measurements,
+    nonconformances,
+    conditions: nonconformances.filter((state) => !state.withdrawn).flatMap((state) => state.conditions),
+    signatures: judgeSignatures(facts, plan),
+    photos: photoStates(facts),
+    instruments: [...instruments.values()],
+    queries: listOf(facts, 'query')
+      .filter((entry) => amended(facts, entry).current !== null)
+      .map((entry) => ({
+        entry,
+        answer: listOf(facts, 'query-answered').find((one) => one.body.queryId === entry.id) ?? null,
+      })),
+    manualHolds: listOf(facts, 'hold').map((entry) => ({
+      entry,
+      lifted: listOf(facts, 'hold-lifted').find((one) => one.body.holdId === entry.id) ?? null,
+    })),
+    verbalInstructions: listOf(facts, 'verbal-instruction'),
+    corrections: corrections.map(({ entry }) => entry),
+    lastWalk: standingLastWalk(facts),
+    siteEvents: listOf(facts, 'site-event'),
+    conflicts: conflictsOf(faces, checks, measurements),
+    supersededDrawings: supersededDrawings(facts, plan),
+    releases: listOf(facts, 'release').map((entry) => ({
+      entry,
+      voided: listOf(facts, 'release-void').find((one) => one.body.releaseId === entry.id) ?? null,
+    })),
+    refusals: listOf(facts, 'release-refused'),
+    inspectionAsked: listOf(facts, 'inspection-asked').at(-1) ?? null,
+    placing: {
+      started: listOf(facts, 'placement').find((entry) => entry.body.event === 'started') ?? null,
+      finished: listOf(facts, 'placement').findLast((entry) => entry.body.event === 'finished') ?? null,
+      withoutRelease: listOf(facts, 'placing-without-release').length > 0,
+    },
+  };
+}
+
+function photoStates(facts: Facts): Sheet['photos'] {
+  const stored = new Map(listOf(facts, 'photo-stored').map((entry) => [entry.body.photoId, entry]));
+  const refused = new Map(listOf(facts, 'photo-refused').map((entry) => [entry.body.photoId, entry]));
+  return listOf(facts, 'photo').map((entry) => ({
+    entry,
+    stored: stored.get(entry.body.photoId) ?? null,
+    refused: refused.get(entry.body.photoId) ?? null,
+  }));
+}
+
+/** The last walk that still stands: nothing was reworked, moved or voided that its walker had not seen. */
+function standingLastWalk(facts: Facts): EntryOf<'last-walk'> | null {
+  const walk = listOf(facts, 'last-walk').findLast((entry) => amended(facts, entry).current !== null);
+  if (!walk || walk.body.outcome !== 'met') return null;
+  const unsettling = [
+    ...listOf(facts, 'correction'),
+    ...listOf(facts, 'site-event'),
+    ...listOf(facts, 'release-void'),
+  ];
+  return unsettling.every((entry) => saw(walk, entry)) ? walk : null;
+}
+
+function conflictsOf(
+  faces: Sheet['faces'],
+  checks: Sheet['checks'],
+  measurements: Sheet['measurements'],
+): Sheet['conflicts'] {
+  return [
+    ...faces
+      .flatMap((face) => [...face.points, ...face.spots])
+      .filter((point) => point.conflict)
+      .map((point) => ({
+        about: { kind: 'point' as const, id: point.key },
+        label: point.label,
+        entries: point.readings.map((one) => one.entry),
+      })),
+    ...checks
+      .filter((check) => check.conflict)
+      .map((check) => ({
+        about: { kind: 'check' as const, id: check.item.id },
+        label: check.item.question,
+        entries: check.answers,
+      })),
+    ...measurements
+      .filter((state) => state.conflict)
+      .map((state) => ({
+        about: { kind: 'measurement' as const, id: state.item.id },
+        label: state.item.title,
+        entries: state.places.map((one) => one.entry),
+      })),
+  ];
+}
+
+function supersededDrawings(facts: Facts, plan: Plan): Sheet['supersededDrawings'] {
+  const latest = new Map(listOf(facts, 'drawing-received').map((entry) => [entry.body.number, entry]));
+  return plan.elements.flatMap((element) => {
+    const received = latest.get(element.drawing.number);
+    if (!received || received.body.revision === element.drawing.revision) return [];
+    return [
+      { elementId: element.id, number: element.drawing.number, planned: element.drawing.revision, received },
+    ];
+  });
+}
