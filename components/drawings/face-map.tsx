@@ -1,0 +1,159 @@
+import { useId } from 'react';
+import { DimensionLine } from './dimension-line';
+import { faceProportion, gridSteps, type FaceRectangle } from './face-map-geometry';
+import { Mark } from './mark';
+import { markWords, type MarkKind } from './mark-words';
+
+export interface FaceMapPoint {
+  id: string;
+  label: string;
+  xMm: number;
+  yMm: number;
+  mark: MarkKind;
+  /** Chosen by the planner where failures live: drawn with a corner mark. */
+  chosen?: boolean;
+  /** A spot reading taken elsewhere: its label is set in slanted letters. */
+  spot?: boolean;
+}
+
+export interface FaceMapProps {
+  name?: string;
+  /** Size of the face in mm; y counts upwards from its lower edge. */
+  widthMm: number;
+  heightMm: number;
+  points: readonly FaceMapPoint[];
+  openings?: readonly FaceRectangle[];
+  recesses?: readonly (FaceRectangle & { depthMm?: number })[];
+  selectedId?: string | null;
+  /** Writes a length: `(mm) => '7 200'`. */
+  format?: (mm: number) => string;
+  /** Labels at the points; by default where there are at most 60. */
+  labels?: boolean;
+}
+
+const share = (part: number, whole: number) => `${((part / whole) * 100).toFixed(3)}%`;
+
+/**
+ * Where on a face its readings were taken, to scale, as wide as what holds it; marks keep their size at any width.
+ * The picture has a text of its own; give it a FaceMapTable beside it.
+ */
+export function FaceMap(props: FaceMapProps) {
+  const { name = 'Face', widthMm, heightMm, points, format = (mm) => String(Math.round(mm)) } = props;
+  const { aspect, toScale } = faceProportion(widthMm, heightMm);
+  const counts = new Map<MarkKind, number>();
+  for (const point of points) counts.set(point.mark, (counts.get(point.mark) ?? 0) + 1);
+  const summary = [...counts].map(([kind, count]) => `${count} ${markWords[kind]}`).join(', ');
+  return (
+    <figure className="grid grid-cols-[minmax(0,1fr)_auto] gap-1.5 p-2">
+      <div className="relative w-full self-start" style={{ aspectRatio: String(aspect) }}>
+        <svg
+          width="100%"
+          height="100%"
+          className="absolute inset-0 overflow-visible"
+          role="img"
+          aria-label={`${name}, ${format(widthMm)} by ${format(heightMm)}: ${points.length} points, ${summary || 'none placed'}.`}
+        >
+          <FaceMapContent {...props} />
+        </svg>
+      </div>
+      <DimensionLine text={format(heightMm)} upright />
+      <DimensionLine text={`${format(widthMm)}${toScale ? '' : ' (not to scale)'}`} />
+    </figure>
+  );
+}
+
+function FaceMapContent({
+  widthMm,
+  heightMm,
+  points,
+  openings = [],
+  recesses = [],
+  selectedId,
+  labels = points.length <= 60,
+}: FaceMapProps) {
+  const hatch = useId();
+  const x = (mm: number) => share(mm, widthMm);
+  const y = (mm: number) => share(heightMm - mm, heightMm);
+  const box = (rectangle: FaceRectangle) => ({
+    x: x(rectangle.xMm),
+    y: y(rectangle.yMm + rectangle.heightMm),
+    width: share(rectangle.widthMm, widthMm),
+    height: share(rectangle.heightMm, heightMm),
+  });
+  const r = points.length > 60 ? 4.5 : 6;
+  return (
+    <>
+      <defs>
+        <pattern id={hatch} width="6" height="6" patternUnits="userSpaceOnUse">
+          <path d="M0 6 6 0" stroke="var(--rule)" />
+        </pattern>
+      </defs>
+      <rect width="100%" height="100%" fill="var(--sheet)" />
+      <g stroke="var(--rule)" strokeWidth="1">
+        {gridSteps(widthMm).map((mm) => (
+          <line key={`x${mm}`} x1={x(mm)} x2={x(mm)} y1="0" y2="100%" />
+        ))}
+        {gridSteps(heightMm).map((mm) => (
+          <line key={`y${mm}`} y1={y(mm)} y2={y(mm)} x1="0" x2="100%" />
+        ))}
+      </g>
+      {recesses.map((recess) => (
+        <g key={recess.id}>
+          <rect {...box(recess)} fill="var(--sheet)" />
+          <rect {...box(recess)} fill={`url(#${hatch})`} stroke="var(--pencil)" strokeDasharray="5 3" />
+          <title>{recess.name}</title>
+        </g>
+      ))}
+      {openings.map((opening) => (
+        <g key={opening.id}>
+          <rect {...box(opening)} fill="var(--paper)" stroke="var(--ink)" strokeWidth="1.5" />
+          <svg {...box(opening)} viewBox="0 0 1 1" preserveAspectRatio="none">
+            <path d="M0 0 1 1M1 0 0 1" stroke="var(--pencil)" vectorEffect="non-scaling-stroke" />
+          </svg>
+          <title>{opening.name}</title>
+        </g>
+      ))}
+      <rect width="100%" height="100%" fill="none" stroke="var(--ink)" strokeWidth="3" />
+      {points.map((point) => {
+        const selected = point.id === selectedId;
+        const nearRight = point.xMm > widthMm * 0.9;
+        return (
+          <svg key={point.id} x={x(point.xMm)} y={y(point.yMm)} overflow="visible" width="1" height="1">
+            {selected && (
+              <g fill="none" stroke="var(--chalk)">
+                <circle r={r + 11} fill="var(--sheet)" fillOpacity="0.8" strokeWidth="3" />
+                <path d={`M${-r - 17} 0h6M${r + 11} 0h6M0 ${-r - 17}v6M0 ${r + 11}v6`} strokeWidth="3" />
+              </g>
+            )}
+            {point.chosen && (
+              <path
+                d={`M${-r - 4} ${-r}v-4h4M${r + 4} ${r}v4h-4`}
+                fill="none"
+                stroke="var(--ink)"
+                strokeWidth="1.4"
+              />
+            )}
+            <Mark kind={point.mark} r={r} />
+            {(labels || selected) && (
+              <text
+                x={nearRight ? -r - 4 : r + 4}
+                y={-r - 1}
+                textAnchor={nearRight ? 'end' : 'start'}
+                className="font-label font-medium"
+                fontStyle={point.spot ? 'italic' : undefined}
+                fontSize={selected ? 15 : 12}
+                fontWeight={selected ? 600 : 500}
+                fill={selected ? 'var(--chalk)' : 'var(--ink)'}
+                stroke="var(--sheet)"
+                strokeWidth="3"
+                paintOrder="stroke"
+              >
+                {point.label}
+              </text>
+            )}
+          </svg>
+        );
+      })}
+    </>
+  );
+}
