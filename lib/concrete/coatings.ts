@@ -1,0 +1,308 @@
+import { notNegative, positive, whole } from '@/lib/concrete/check-input';
+import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { atMost } from '@/lib/concrete/length';
+import { worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
+import { apartText, numberText } from '@/lib/concrete/number-text';
+import { MM_PER_FOOT } from '@/lib/concrete/stress-units';
+import type { TrailStep } from '@/lib/concrete/trail';
+import { arithmetic, trailSource } from '@/lib/concrete/trail-source';
+
+/** A damaged or patched spot: where it begins along the bar, how long it is (0 for a nick), and its area. */
+export interface CoatingSpot {
+  kind: 'damaged' | 'patched';
+  fromMm: number;
+  lengthMm: number;
+  areaMm2: number;
+}
+
+/** A stretch of bar and the share of its surface that is damaged or patched. */
+export interface WorstStretch {
+  percent: number;
+  areaMm2: number;
+  /** Where the worst stretch begins along the bar, mm; null where there is no such spot. */
+  fromMm: number | null;
+}
+
+function overlapArea(spot: CoatingSpot, from: number, to: number): number {
+  const end = spot.fromMm + spot.lengthMm;
+  if (spot.lengthMm === 0) return spot.fromMm >= from - 1e-9 && spot.fromMm <= to + 1e-9 ? spot.areaMm2 : 0;
+  const length = Math.max(0, Math.min(end, to) - Math.max(spot.fromMm, from));
+  return (spot.areaMm2 * length) / spot.lengthMm;
+}
+
+/**
+ * The worst stretch of the given length. The area in a sliding window is piecewise linear in the window's place, so its
+ * greatest value lies where an end of the window meets an end of a spot: only those places are tried.
+ */
+function worstStretch(
+  bar: { diameterMm: number; lengthMm: number },
+  spots: readonly CoatingSpot[],
+  stretchMm: number,
+): WorstStretch {
+  // A bar shorter than the stretch is judged on its own length, never on surface that it does not have.
+  const windowMm = Math.min(stretchMm, bar.lengthMm);
+  const surface = Math.PI * bar.diameterMm * windowMm;
+  const edges = spots.flatMap((spot) => [spot.fromMm, spot.fromMm + spot.lengthMm]);
+  const starts = edges
+    .flatMap((edge) => [edge, edge - windowMm])
+    .map((start) => Math.min(Math.max(start, 0), bar.lengthMm - windowMm));
+  let worst: WorstStretch = { percent: 0, areaMm2: 0, fromMm: null };
+  for (const start of starts) {
+    const areaMm2 = spots.reduce((sum, spot) => sum + overlapArea(spot, start, start + windowMm), 0);
+    if (areaMm2 > worst.areaMm2) worst = { percent: (100 * areaMm2) / surface, areaMm2, fromMm: start };
+  }
+  return worst;
+}
+
+function checkedSpots(bar: { diameterMm: number; lengthMm: number }, spots: readonly CoatingSpot[]): void {
+  positive('bar diameter', bar.diameterMm);
+  positive('bar length', bar.lengthMm);
+  for (const [index, spot] of spots.entries()) {
+    const name = `spot ${index + 1}`;
+    notNegative(`${name}, place`, spot.fromMm);
+    notNegative(`${name}, length`, spot.lengthMm);
+    positive(`${name}, area`, spot.areaMm2);
+    if (!atMost(spot.fromMm + spot.lengthMm, bar.lengthMm)) {
+      throw new ConcreteError(`${name}, place`, 'It lies beyond the end of the bar.');
+    }
+    if (spot.lengthMm > 0 && !atMost(spot.areaMm2, Math.PI * bar.diameterMm * spot.lengthMm)) {
+      throw new ConcreteError(`${name}, area`, 'It is more than the surface of the bar over that length.');
+    }
+  }
+}
+
+/** What has to happen to a coated bar before it may be placed over. */
+export type CoatingOutcome = 'sound' | 'repair' | 'more-than-repair';
+
+/** What was found on a coated bar, with the reasons. */
+export interface CoatingFinding {
+  outcome: CoatingOutcome;
+  damaged: WorstStretch;
+  patched: WorstStretch;
+  reasons: string[];
+  trail: TrailStep[];
+}
+
+/** Limits of an epoxy coating, in % of the surface of any one foot. */
+export interface EpoxyLimits {
+  damagedMostPercent: number;
+  patchedMostPercent: number;
+}
+
+/** ASTM D3963 limits, from memory, check against the edition in force: 2 % damaged before repair, 5 % patched. */
+export const D3963_LIMITS: EpoxyLimits = { damagedMostPercent: 2, patchedMostPercent: 5 };
+
+const d3963 = trailSource('ASTM D3963/D3963M, damage and repair', '01/-15/-21', 'memory');
+const noFlame = trailSource('Maryland SHA 421.03.03', '', 'seen');
+
+/**
+ * Epoxy-coated bar: damage and patches on the worst foot (304.8 mm), never averaged over more; cut ends apart. Any damage
+ * or bare cut end holds until it is repaired and read again; over a limit it is more than simple rework. A flame-cut end
+ * is always more than rework. Limits by default ASTM D3963, from memory, check against the edition in force; where the
+ * contract sets its own, they are passed in.
+ * @throws ConcreteError where a spot lies off the bar or is larger than the bar's surface
+ */
+export function judgeEpoxyCoating(
+  bar: { diameterMm: number; lengthMm: number },
+  found: { spots: readonly CoatingSpot[]; bareCutEnds: number; flameCutEnds: number },
+  limits: EpoxyLimits = D3963_LIMITS,
+): CoatingFinding {
+  checkedSpots(bar, found.spots);
+  const most = {
+    damaged: positive('damage limit', limits.damagedMostPercent),
+    patched: positive('patch limit', limits.patchedMostPercent),
+  };
+  const bare = whole('bare cut ends', found.bareCutEnds, 0);
+  const flame = whole('flame-cut ends', found.flameCutEnds, 0);
+  const damaged = worstStretch(bar, spotsOf(found.spots, 'damaged'), MM_PER_FOOT);
+  const patched = worstStretch(bar, spotsOf(found.spots, 'patched'), MM_PER_FOOT);
+  const over: string[] = [];
+  const toRepair: string[] = [];
+  if (!atMost(damaged.percent, most.damaged)) over.push(overText('damaged', damaged.percent, most.damaged));
+  else if (damaged.areaMm2 > 0)
+    toRepair.push(`${numberText(damaged.percent)} % of the worst foot is damaged.`);
+  if (!atMost(patched.percent, most.patched)) over.push(overText('patched', patched.percent, most.patched));
+  if (bare > 0) toRepair.push(`Bare cut ends: ${bare}.`);
+  if (flame > 0) over.push(`Flame-cut ends: ${flame}. Coated bars are sawn or sheared.`);
+  return {
+    outcome: over.length > 0 ? 'more-than-repair' : toRepair.length > 0 ? 'repair' : 'sound',
+    damaged,
+    patched,
+    reasons: [...over, ...toRepair],
+    trail: [
+      arithmetic(
+        'Surface of one foot = π d × 304.8 mm',
+        `${numberText(Math.PI * bar.diameterMm * MM_PER_FOOT, 0)} mm²`,
+      ),
+      d3963(
+        'Damaged in any foot, before repair, at most',
+        `${numberText(damaged.percent)} of ${most.damaged} %`,
+      ),
+      d3963('Patched in any foot, at most', `${numberText(patched.percent)} of ${most.patched} %`),
+      noFlame('Cut ends: sawn or sheared, then patched', `bare ${bare}, flame-cut ${flame}`),
+    ],
+  };
+}
+
+function spotsOf(spots: readonly CoatingSpot[], kind: CoatingSpot['kind']): CoatingSpot[] {
+  return spots.filter((spot) => spot.kind === kind);
+}
+
+function overText(what: string, percent: number, most: number, stretch = 'foot'): string {
+  const [is, limit] = apartText(percent, most, 2);
+  return `${is} % of the worst ${stretch} is ${what}, more than ${limit} %.`;
+}
+
+/** FRP limit: unrepaired visible damage, % of the surface of any metre, ACI 440.5M-08 1.5.1. */
+export const FRP_DAMAGE_MOST_PERCENT = 2;
+
+const frpDamage = trailSource('ACI 440.5M, 1.5.1', '2008', 'seen');
+
+/**
+ * FRP bar: visible damage on its worst metre. Within the limit the bar stays; over it, it goes out, because FRP is not
+ * repaired like a coating. A depth limit also applies, which this rule does not know.
+ */
+export function judgeFrpDamage(
+  bar: { diameterMm: number; lengthMm: number },
+  spots: readonly Omit<CoatingSpot, 'kind'>[],
+  mostPercent: number = FRP_DAMAGE_MOST_PERCENT,
+): LimitFinding & { worst: WorstStretch; trail: TrailStep[] } {
+  const damage = spots.map((spot): CoatingSpot => ({ ...spot, kind: 'damaged' }));
+  checkedSpots(bar, damage);
+  positive('damage limit', mostPercent);
+  const worst = worstStretch(bar, damage, 1000);
+  const value = `${numberText(worst.percent)} of ${numberText(mostPercent)} %`;
+  const trail = [
+    frpDamage('Visible damage in any metre, at most', value, 'A depth limit also applies: see the contract.'),
+  ];
+  return atMost(worst.percent, mostPercent)
+    ? { verdict: 'met', side: null, reason: 'Damage is within its limit.', worst, trail }
+    : {
+        verdict: 'not-met',
+        side: 'high',
+        reason: overText('damaged', worst.percent, mostPercent, 'metre'),
+        worst,
+        trail,
+      };
+}
+
+export type BarMaterial = 'epoxy' | 'frp' | 'stainless';
+
+/**
+ * What a material asks for beside its damage rule, as questions for the checklist, each with where it comes from.
+ */
+export function materialRules(material: BarMaterial): TrailStep[] {
+  switch (material) {
+    case 'epoxy': {
+      const provisions = trailSource('CRSI suggested provisions; Maryland SHA 421', '', 'seen');
+      return [
+        provisions('Ties', 'nylon, epoxy- or plastic-coated wire'),
+        provisions('Supports', 'coated or non-metallic'),
+        noFlame('Cutting', 'saw or shear, then patch; no flame cutting'),
+      ];
+    }
+    case 'frp': {
+      const aci = trailSource('ACI 440.5, 2.1.3 and 3.2', '2008', 'partly-seen');
+      const bending = trailSource('ACI 440.5, 3.2', '2008', 'seen');
+      const flotation = trailSource('ACI 440.5, 3.2', '2008', 'memory');
+      const meter = trailSource('Florida DOT, FRP reinforcing', '', 'seen');
+      return [
+        bending('Field bending', 'none; bends are made in the factory before the bar cures, no heating'),
+        aci('Ties', 'plastic, nylon or coated wire'),
+        aci('Supports', 'non-metallic or coated'),
+        flotation('Flotation', 'the mat is tied down'),
+        meter(
+          'Cover meter',
+          'magnetic and radar meters do not see FRP: cover is read before the pour, or never',
+        ),
+      ];
+    }
+    case 'stainless': {
+      const practice = trailSource('state agencies’ practice', '', 'memory');
+      return [
+        practice('Ties', 'stainless, coated or non-metallic'),
+        practice('Supports', 'stainless or non-metallic'),
+        practice('Contact with carbon steel', 'none where specified: 1 in apart, or a sleeve'),
+      ];
+    }
+    default:
+      throw new ConcreteError('material', `"${String(material)}" is not one of the choices.`);
+  }
+}
+
+/** Whether an instrument sees a bar at all: a magnetic meter reads nothing over FRP and little over stainless steel. */
+export function instrumentSees(
+  instrument: 'tape' | 'gauge-block' | 'magnetic' | 'radar',
+  material: 'steel' | 'epoxy' | 'galvanised' | 'stainless' | 'frp',
+): { sees: boolean; reason: string } {
+  if (instrument === 'tape' || instrument === 'gauge-block')
+    return { sees: true, reason: 'Read by hand before the pour.' };
+  if (material === 'frp') return { sees: false, reason: 'This kind of meter does not see FRP.' };
+  if (material === 'stainless' && instrument === 'magnetic') {
+    return { sees: false, reason: 'A magnetic meter does not see austenitic stainless steel reliably.' };
+  }
+  return { sees: true, reason: 'The meter sees this bar.' };
+}
+
+/** Contact of stainless with carbon steel, counted on the site, where the contract forbids it. */
+export function judgeStainlessContact(found: { contactsFound: number; forbidden: boolean }): LimitFinding {
+  const contacts = whole('contacts', found.contactsFound, 0);
+  if (!found.forbidden)
+    return { verdict: 'met', side: null, reason: 'The contract does not forbid contact.' };
+  return contacts === 0
+    ? { verdict: 'met', side: null, reason: 'No carbon steel touches stainless steel.' }
+    : {
+        verdict: 'not-met',
+        side: 'high',
+        reason: `Carbon steel touches stainless steel at ${contacts} places.`,
+      };
+}
+
+const c1116 = trailSource('ASTM C1116/C1116M, batch ticket', '', 'memory');
+
+/**
+ * Fibres by the batch ticket: type as specified, and the dosage at least what is specified less what the plan permits.
+ * A ticket without type or dosage is not verified. Dosages in kg/m³.
+ */
+export function judgeFibreTicket(
+  ticket: { fibreType: string | null; fibreKgPerM3: number | null },
+  specified: { fibreType: string; fibreKgPerM3: number; minusPercent: number },
+): LimitFinding & { trail: TrailStep[] } {
+  const dosage = positive('specified dosage', specified.fibreKgPerM3);
+  const minus = notNegative('dosage tolerance', specified.minusPercent);
+  if (minus >= 100) throw new ConcreteError('dosage tolerance', 'It is as large as the dosage.');
+  if (specified.fibreType.trim() === '') throw new ConcreteError('specified fibre', 'It has no type.');
+  const least = dosage * (1 - minus / 100);
+  const findings: LimitFinding[] = [];
+  if (ticket.fibreType === null || ticket.fibreType.trim() === '') {
+    findings.push({ verdict: 'not-verified', side: null, reason: 'The ticket does not name the fibre.' });
+  } else if (ticket.fibreType.trim().toLowerCase() !== specified.fibreType.trim().toLowerCase()) {
+    const reason = `The ticket names "${ticket.fibreType}", specified is "${specified.fibreType}".`;
+    findings.push({ verdict: 'not-met', side: null, reason });
+  }
+  if (ticket.fibreKgPerM3 === null) {
+    findings.push({ verdict: 'not-verified', side: null, reason: 'The ticket does not give the dosage.' });
+  } else if (!atMost(least, notNegative('dosage on the ticket', ticket.fibreKgPerM3))) {
+    const [is, limit] = apartText(ticket.fibreKgPerM3, least, 2);
+    findings.push({
+      verdict: 'not-met',
+      side: 'low',
+      reason: `Dosage is ${is} kg/m³, less than ${limit} kg/m³.`,
+    });
+  }
+  findings.push({ verdict: 'met', side: null, reason: 'Fibre and dosage as specified.' });
+  return {
+    ...worstFinding(findings),
+    trail: [
+      c1116('Fibre type and quantity per volume stand on the ticket', ticket.fibreType ?? 'no type'),
+      arithmetic('Least dosage = specified less tolerance', `${numberText(least, 3)} kg/m³`),
+    ],
+  };
+}
+
+/** Fibre dosage from the mass added to a load and the load's volume. */
+export function fibreDosage(massKg: number, volumeM3: number): { kgPerM3: number; trail: TrailStep[] } {
+  const kgPerM3 = positive('mass of fibres', massKg) / positive('volume of the load', volumeM3);
+  const value = `${numberText(massKg)} kg / ${numberText(volumeM3)} m³ = ${numberText(kgPerM3, 3)} kg/m³`;
+  return { kgPerM3, trail: [arithmetic('Dosage = mass / volume', value)] };
+}

@@ -1,0 +1,18 @@
+/** A number for people: at most `digits` decimals, no trailing zeros, never "-0". */
+export function numberText(value: number, digits = 2): string {
+  const text = value.toFixed(digits);
+  const trimmed = text.includes('.') ? text.replace(/0+$/, '').replace(/\.$/, '') : text;
+  return trimmed === '-0' ? '0' : trimmed;
+}
+
+/**
+ * Two numbers side by side, with as many decimals as it takes to tell them apart: rounding never makes a failure look
+ * like the limit. Numbers within 1e-6 of each other count as the same and are shown the same.
+ */
+export function apartText(value: number, limit: number, digits = 1): [string, string] {
+  for (let decimals = digits; decimals <= 7; decimals += 1) {
+    const pair: [string, string] = [numberText(value, decimals), numberText(limit, decimals)];
+    if (pair[0] !== pair[1] || Math.abs(value - limit) <= 1e-6) return pair;
+  }
+  return [String(value), String(limit)];
+}
