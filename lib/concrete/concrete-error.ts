@@ -27,10 +27,3 @@ export function requirePositive(field: string, value: number | undefined | null)
   if (value <= 0) throw new ConcreteError(field, 'This has to be more than zero.');
   return value;
 }
-
-/** The number, or a typed error where it is not finite or below zero. */
-export function requireNotNegative(field: string, value: number): number {
-  if (!Number.isFinite(value)) throw new ConcreteError(field, 'This is not a finite number.');
-  if (value < 0) throw new ConcreteError(field, 'This cannot be less than zero.');
-  return value;
-}

@@ -1,5 +1,5 @@
-import { ConcreteError } from './concrete-error';
-import { atLeast, atMost, formatLength, LENGTH_SLACK_MM, type LengthUnit } from './length';
+import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { atLeast, atMost, formatLength, LENGTH_SLACK_MM, type LengthUnit } from '@/lib/concrete/length';
 
 /** The three verdicts. Not verified counts neither way. */
 export type Verdict = 'met' | 'not-met' | 'not-verified';

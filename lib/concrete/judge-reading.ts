@@ -1,8 +1,8 @@
-import { ConcreteError } from './concrete-error';
-import { metReason, type Verdict } from './judge-measurement';
-import { atLeast, atMost, LENGTH_SLACK_MM, withUnit, type LengthUnit } from './length';
+import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { metReason, type Verdict } from '@/lib/concrete/judge-measurement';
+import { atLeast, atMost, LENGTH_SLACK_MM, withUnit, type LengthUnit } from '@/lib/concrete/length';
 
-export type { Verdict } from './judge-measurement';
+export type { Verdict } from '@/lib/concrete/judge-measurement';
 export type VerdictFlag = 'at-limit' | 'inside-uncertainty' | 'indicative';
 
 export interface JudgedReading {

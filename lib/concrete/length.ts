@@ -1,4 +1,4 @@
-import { ConcreteError } from './concrete-error';
+import { ConcreteError } from '@/lib/concrete/concrete-error';
 
 /** The two units that fields and sheets are shown in. */
 export type LengthUnit = 'mm' | 'in';

@@ -1,5 +1,5 @@
-import { ConcreteError, requirePositive } from './concrete-error';
-import { seededRandom } from './seeded-random';
+import { ConcreteError, requirePositive } from '@/lib/concrete/concrete-error';
+import { seededRandom } from '@/lib/concrete/seeded-random';
 
 interface Rectangle {
   xMm: number;

@@ -11,9 +11,6 @@ export interface TrailStep {
   note?: string;
 }
 
-/** What is written beside every number that was not read in its standard. */
-export const FROM_MEMORY = 'from memory, check against the edition in force';
-
 /** True where a screen has to show "verify against your edition" beside the result. */
 export function needsEditionCheck(trail: readonly { provenance: string }[]): boolean {
   return trail.some((step) => step.provenance === 'memory');
