@@ -1,18 +1,17 @@
+import type { Tone } from '@/components/ui/tone';
 import type { NonconformanceStatus, PourState } from '@/lib/inspection/sheet-types';
-import type { ElementType, Meeting, AcceptanceBasis, CheckGroup, DecisionRule } from '@/lib/inspection/plan';
+import type { ElementType, Meeting, AcceptanceBasis, DecisionRule } from '@/lib/inspection/plan';
 
-/** The four colours of meaning; shape and word come first. */
-export type Tone = 'met' | 'watch' | 'hold' | 'quiet';
-
-export const pourStateWords: Record<PourState, { word: string; tone: Tone }> = {
-  'no-plan': { word: 'plan missing', tone: 'quiet' },
-  'not-read': { word: 'not read yet', tone: 'quiet' },
-  held: { word: 'held', tone: 'hold' },
-  ready: { word: 'no holds', tone: 'watch' },
-  released: { word: 'released', tone: 'met' },
-  placing: { word: 'placing', tone: 'met' },
-  placed: { word: 'placed', tone: 'quiet' },
-  'placed-without-release': { word: 'placed without release', tone: 'hold' },
+/** The tone of each state; its word is in lib/inspection/pour-state. */
+export const pourStateTones: Record<PourState, Tone> = {
+  'no-plan': 'plain',
+  'not-read': 'plain',
+  held: 'hold',
+  ready: 'watch',
+  released: 'met',
+  placing: 'met',
+  placed: 'plain',
+  'placed-without-release': 'hold',
 };
 
 export const nonconformanceWords: Record<NonconformanceStatus, { word: string; tone: Tone }> = {
@@ -71,20 +70,6 @@ export const basisWords: Record<AcceptanceBasis, string> = {
   'as-3600': 'AS 3600',
   'csa-a23.1': 'CSA A23.1',
   contract: 'Contract only',
-};
-
-export const checkGroupWords: Record<CheckGroup, string> = {
-  documents: 'Documents and drawings',
-  formwork: 'Formwork',
-  steel: 'Steel',
-  placing: 'Placing of bars',
-  supports: 'Supports and ties',
-  cover: 'Cover',
-  laps: 'Laps and couplers',
-  embedded: 'Embedded items',
-  cleanliness: 'Cleanliness',
-  access: 'Access and weather',
-  'sign-off': "Trades' sign-off",
 };
 
 /** The decision rule as every certificate names it. */

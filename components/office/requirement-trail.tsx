@@ -1,0 +1,69 @@
+import { formatLength, type LengthUnit } from '@/lib/concrete/length';
+import { needsEditionCheck } from '@/lib/concrete/trail';
+import type { Requirement } from '@/lib/inspection/plan';
+import { provenanceWords } from './state-words';
+
+/** How a requirement was found, step by step, with the code's minimum beside it and what to be careful about. */
+export function RequirementTrail({
+  requirement,
+  units,
+  open = false,
+  onToggle,
+}: {
+  requirement: Requirement;
+  units: LengthUnit;
+  open?: boolean;
+  onToggle?: (open: boolean) => void;
+}) {
+  return (
+    <details
+      open={open || undefined}
+      onToggle={onToggle ? (event) => onToggle(event.currentTarget.open) : undefined}
+      className="text-body"
+    >
+      <summary className="min-h-6 w-fit font-label text-label font-semibold text-chalk">
+        Where these limits come from
+      </summary>
+      <TrailBody requirement={requirement} units={units} />
+    </details>
+  );
+}
+
+/** The trail itself: rule, clause and edition, value, provenance. */
+export function TrailBody({ requirement, units }: { requirement: Requirement; units: LengthUnit }) {
+  return (
+    <div className="grid gap-2 py-2">
+      {requirement.warnings.map((warning) => (
+        <p key={warning} className="border-l-[6px] border-watch pl-3 text-watch">
+          {warning}
+        </p>
+      ))}
+      <ol className="grid gap-1">
+        {requirement.trail.map((step, index) => (
+          <li
+            key={`${index}-${step.rule}`}
+            className="grid gap-x-4 border-b border-rule pb-1 sm:grid-cols-[1fr_auto]"
+          >
+            <span>
+              {step.rule}
+              <span className="block text-label text-pencil">
+                {[step.clause, step.edition, provenanceWords[step.provenance]].filter(Boolean).join(', ')}
+                {step.note ? `. ${step.note}` : ''}
+              </span>
+            </span>
+            <span className="font-figure font-medium sm:text-right">{step.value}</span>
+          </li>
+        ))}
+      </ol>
+      {requirement.codeMinimumMm !== null && (
+        <p className="text-pencil">
+          Code minimum for comparison: {formatLength(requirement.codeMinimumMm, units)} {units}. The contract
+          documents and the local code govern.
+        </p>
+      )}
+      {needsEditionCheck(requirement.trail) && (
+        <p className="text-pencil">Verify the steps marked as from memory against your edition.</p>
+      )}
+    </div>
+  );
+}
