@@ -10,7 +10,7 @@ import { judgeFaces, type PointMemo } from './judge-faces';
 import { judgeMeasurements } from './judge-measurements';
 import { judgeNonconformances, withdrawnNonconformances } from './judge-nonconformances';
 import type { JudgingContext } from './judge-point';
-import { judgeSignatures } from './judge-signatures';
+import { isMaterial, judgeSignatures } from './judge-signatures';
 import type { Plan } from './plan';
 import type { Sheet } from './sheet-types';
 
@@ -90,7 +90,7 @@ export function foldSheet(
     })),
     verbalInstructions: listOf(facts, 'verbal-instruction'),
     corrections: corrections.map(({ entry }) => entry),
-    lastWalk: standingLastWalk(facts),
+    lastWalk: standingLastWalk(facts, plan),
     siteEvents: listOf(facts, 'site-event'),
     conflicts: conflictsOf(faces, checks, measurements),
     supersededDrawings: supersededDrawings(facts, plan),
@@ -119,12 +119,12 @@ function photoStates(facts: Facts): Sheet['photos'] {
 }
 
 /** The last walk that still stands: nothing was reworked, moved or voided that its walker had not seen. */
-function standingLastWalk(facts: Facts): EntryOf<'last-walk'> | null {
+function standingLastWalk(facts: Facts, plan: Plan): EntryOf<'last-walk'> | null {
   const walk = listOf(facts, 'last-walk').findLast((entry) => amended(facts, entry).current !== null);
   if (!walk || walk.body.outcome !== 'met') return null;
   const unsettling = [
     ...listOf(facts, 'correction'),
-    ...listOf(facts, 'site-event'),
+    ...listOf(facts, 'site-event').filter((event) => isMaterial(event, plan)),
     ...listOf(facts, 'release-void'),
   ];
   return unsettling.every((entry) => saw(walk, entry)) ? walk : null;
