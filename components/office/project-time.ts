@@ -1,3 +1,5 @@
+import { formatInstant } from '@/components/ui/format-instant';
+
 /** People see the project's time, wherever their own screen is. */
 
 const partsOf = (at: Date, timeZone: string) => {
@@ -22,34 +24,11 @@ const partsOf = (at: Date, timeZone: string) => {
   };
 };
 
-const format = (iso: string, timeZone: string, options: Intl.DateTimeFormatOptions) =>
-  new Intl.DateTimeFormat('en-GB', { timeZone, hourCycle: 'h23', ...options })
-    .format(new Date(iso))
-    .replaceAll(',', '');
-
 /** "Wed 2 Dec 06:30" in the project's time zone. */
-export const dayAndTime = (iso: string, timeZone: string): string =>
-  format(iso, timeZone, {
-    weekday: 'short',
-    day: 'numeric',
-    month: 'short',
-    hour: '2-digit',
-    minute: '2-digit',
-  });
+export const dayAndTime = (iso: string, timeZone: string): string => formatInstant(iso, timeZone, 'short');
 
-/** "2 Dec 2026 06:30", for records that are read years later. */
-export const fullTime = (iso: string, timeZone: string): string =>
-  format(iso, timeZone, {
-    day: 'numeric',
-    month: 'short',
-    year: 'numeric',
-    hour: '2-digit',
-    minute: '2-digit',
-  });
-
-/** "2 Dec 2026". */
-export const dayOnly = (iso: string, timeZone: string): string =>
-  format(iso, timeZone, { day: 'numeric', month: 'short', year: 'numeric' });
+/** "Wed 2 Dec 2026, 06:30", for records that are read years later. */
+export const fullTime = (iso: string, timeZone: string): string => formatInstant(iso, timeZone, 'full');
 
 /** The value of a `datetime-local` field that shows an instant in the project's time zone. */
 export function localFieldText(iso: string, timeZone: string): string {

@@ -1,0 +1,84 @@
+import { MarkIcon } from '@/components/drawings/mark';
+import type { MarkKind } from '@/components/drawings/mark-words';
+import { checkGroupWords } from '@/lib/inspection/holds-work';
+import { checkGroups } from '@/lib/inspection/plan';
+import type { CheckState, Sheet } from '@/lib/inspection/sheet-types';
+import { personName } from './entry-words';
+import type { OfficeViewer } from './office-viewer';
+import { dayAndTime } from './project-time';
+
+const answered: Record<'met' | 'not-met' | 'not-applicable', { mark: MarkKind; word: string }> = {
+  met: { mark: 'met', word: 'met' },
+  'not-met': { mark: 'not-met-low', word: 'not met' },
+  'not-applicable': { mark: 'not-verified', word: 'not applicable' },
+};
+
+/** The checklist as it stands, by group; what each item rests on and who answered it. */
+export function ChecksList({ sheet, viewer }: { sheet: Sheet; viewer: OfficeViewer }) {
+  if (sheet.checks.length === 0) return <p className="text-pencil">The plan asks for no checks.</p>;
+  return (
+    <div className="grid gap-x-8 gap-y-4 lg:grid-cols-2">
+      {checkGroups.map((group) => {
+        const checks = sheet.checks.filter((check) => check.item.group === group);
+        if (checks.length === 0) return null;
+        const done = checks.filter((check) => check.governing !== null).length;
+        return (
+          <section key={group} aria-label={checkGroupWords[group]}>
+            <h3 className="flex items-baseline justify-between border-b border-ink pb-0.5 text-lead">
+              {checkGroupWords[group]}
+              <span className="font-figure text-label font-medium text-pencil">
+                {done} of {checks.length}
+              </span>
+            </h3>
+            <ul>
+              {checks.map((check) => (
+                <Check key={check.item.id} {...{ check, viewer }} />
+              ))}
+            </ul>
+          </section>
+        );
+      })}
+    </div>
+  );
+}
+
+function Check({ check, viewer }: { check: CheckState; viewer: OfficeViewer }) {
+  const answer = check.governing?.body ?? null;
+  const shown = answer ? answered[answer.answer] : { mark: 'unread' as const, word: 'not answered' };
+  return (
+    <li className="grid grid-cols-[auto_1fr] gap-x-2.5 border-b border-rule py-1.5">
+      <MarkIcon kind={shown.mark} className="mt-0.5" />
+      <div>
+        <p>
+          {check.item.question}
+          {check.item.critical && <span className="font-label font-semibold"> (critical)</span>}
+        </p>
+        <p className="text-label text-pencil">
+          <span
+            className={answer?.answer === 'not-met' ? 'font-semibold text-hold' : 'font-semibold text-ink'}
+          >
+            {shown.word}
+          </span>
+          {check.governing &&
+            `, ${personName(check.governing.authorId, viewer.people)}, ${dayAndTime(check.governing.recordedAt, viewer.timeZone)}`}
+          {`. ${check.item.basis}`}
+          {check.item.attendance !== 'none' &&
+            `. ${check.item.attendance === 'hold-point' ? 'Hold point' : 'Witness point'}`}
+          {check.item.evidence === 'photo' &&
+            `. ${check.photoIds.length} ${check.photoIds.length === 1 ? 'photo' : 'photos'}`}
+        </p>
+        {answer?.reason && <p className="text-label">{answer.reason}</p>}
+        {answer?.note && <p className="text-label">{answer.note}</p>}
+        {check.conflict && (
+          <p className="text-label text-hold">
+            Two answers had not seen each other; the less favourable governs.
+          </p>
+        )}
+        {check.correctedSince && (
+          <p className="text-label">Corrected since: {check.correctedSince.body.text}</p>
+        )}
+        {check.acceptedBy && <p className="text-label">Accepted by a decision of the engineer.</p>}
+      </div>
+    </li>
+  );
+}

@@ -1,0 +1,129 @@
+import { MarkIcon } from '@/components/drawings/mark';
+import type { MarkKind } from '@/components/drawings/mark-words';
+import { formatLength } from '@/lib/concrete/length';
+import type { Verdict } from '@/lib/concrete/judge-reading';
+import type { MeasurementItem } from '@/lib/inspection/plan';
+import type { MeasurementState, Sheet } from '@/lib/inspection/sheet-types';
+import { personName } from './entry-words';
+import { asEntered } from './length-words';
+import type { OfficeViewer } from './office-viewer';
+import { dayAndTime } from './project-time';
+import { RuledTable } from './ruled-table';
+
+const marks: Record<Verdict, { mark: MarkKind; word: string }> = {
+  met: { mark: 'met', word: 'met' },
+  'not-met': { mark: 'not-met-low', word: 'not met' },
+  'not-verified': { mark: 'not-verified', word: 'not verified' },
+};
+
+type Measured = NonNullable<MeasurementState['places'][number]['current']>;
+
+const valueText = (value: Measured['value']): string => {
+  switch (value.quantity) {
+    case 'length':
+      return asEntered(value.length);
+    case 'count':
+      return String(value.count);
+    case 'share':
+      return `${value.tied} of ${value.of}`;
+    case 'designation':
+      return value.designation;
+  }
+};
+
+/** The limits of an item in its own quantity: "700 to 1200 mm", "at least 50 %". */
+export function limitText(item: MeasurementItem, units: 'mm' | 'in'): string {
+  if (item.expected) return item.expected;
+  const show = (value: number) =>
+    item.quantity === 'length' ? formatLength(value, units) : formatLength(value, 'mm');
+  const unit = item.quantity === 'length' ? ` ${units}` : item.quantity === 'share' ? ' %' : '';
+  if (item.least !== null && item.most !== null) return `${show(item.least)} to ${show(item.most)}${unit}`;
+  if (item.least !== null) return `at least ${show(item.least)}${unit}`;
+  if (item.most !== null) return `at most ${show(item.most)}${unit}`;
+  return 'as found';
+}
+
+/** What the plan asks to be measured, each place with its verdict. */
+export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: OfficeViewer }) {
+  return (
+    <RuledTable
+      caption="Measurements"
+      captionHidden
+      empty="The plan asks for no measurements."
+      columns={[
+        { key: 'what', head: 'What', className: 'min-w-48' },
+        { key: 'limit', head: 'Limits', figure: true },
+        { key: 'place', head: 'Place' },
+        { key: 'value', head: 'Measured', figure: true },
+        { key: 'verdict', head: 'Verdict', className: 'min-w-48' },
+        { key: 'by', head: 'By', className: 'whitespace-nowrap' },
+      ]}
+      rows={sheet.measurements.flatMap((state) => {
+        const head = {
+          what: (
+            <>
+              {state.item.title}
+              <span className="block text-label text-pencil">
+                {new Set(state.places.map((one) => one.current?.place ?? one.entry.body.place)).size} of{' '}
+                {state.item.required} places{state.item.loaded ? ', before, under and after load' : ''}
+              </span>
+            </>
+          ),
+          limit: limitText(state.item, sheet.plan.units),
+        };
+        if (state.places.length === 0) {
+          return [
+            {
+              key: state.item.id,
+              cells: { ...head, place: '–', value: '–', verdict: <Mark verdict={null} reason="" /> },
+            },
+          ];
+        }
+        return state.places.map((place, index) => ({
+          key: place.entry.id,
+          cells: {
+            ...(index === 0 ? head : {}),
+            place: [
+              place.entry.body.place || 'not named',
+              place.entry.body.stage === 'single' ? '' : `${place.entry.body.stage} load`,
+            ]
+              .filter(Boolean)
+              .join(', '),
+            value:
+              place.current === null ? (
+                <del>{valueText(place.entry.body.value)}</del>
+              ) : place.amendments.some((one) => one.counts) ? (
+                <span className="grid justify-items-end">
+                  <del>{valueText(place.entry.body.value)}</del>
+                  <ins className="no-underline">{valueText(place.current.value)}</ins>
+                </span>
+              ) : (
+                valueText(place.current.value)
+              ),
+            verdict: (
+              <Mark
+                verdict={place.current === null ? null : place.verdict}
+                reason={place.current === null ? 'withdrawn' : place.verdict === 'met' ? '' : place.reason}
+              />
+            ),
+            by: `${personName(place.entry.authorId, viewer.people)}, ${dayAndTime(place.entry.body.measuredAt, viewer.timeZone)}`,
+          },
+        }));
+      })}
+    />
+  );
+}
+
+function Mark({ verdict, reason }: { verdict: Verdict | null; reason: string }) {
+  const shown =
+    verdict === null ? { mark: 'unread' as const, word: reason || 'not measured' } : marks[verdict];
+  return (
+    <span className="grid grid-cols-[auto_1fr] gap-x-1.5">
+      <MarkIcon kind={shown.mark} className="mt-0.5" />
+      <span>
+        {shown.word}
+        {verdict !== null && reason && <span className="block text-label text-pencil">{reason}</span>}
+      </span>
+    </span>
+  );
+}

@@ -1,0 +1,32 @@
+'use client';
+
+import type { ButtonVariant } from '@/components/ui/button-classes';
+import { answerQueryAction, conditionAction, liftAction, queryAction } from './entry-actions';
+import { EntryButton } from './entry-button';
+
+/** What a row of a list can be answered with; ids only, so that a page drawn on the server can offer it. */
+export type RowActionKind = 'lift' | 'query' | 'answer-query' | 'verify';
+
+const actionOf = {
+  lift: liftAction,
+  query: queryAction,
+  'answer-query': answerQueryAction,
+  verify: conditionAction,
+};
+
+/** The button of one row, with its form. */
+export function RowAction({
+  kind,
+  id,
+  pourId,
+  about,
+  variant = 'quiet',
+}: {
+  kind: RowActionKind;
+  id: string;
+  pourId: string;
+  about: string;
+  variant?: ButtonVariant;
+}) {
+  return <EntryButton pourId={pourId} action={actionOf[kind](id)} about={about} variant={variant} />;
+}
