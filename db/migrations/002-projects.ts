@@ -78,5 +78,7 @@ export async function up(knex: Knex): Promise<void> {
 }
 
 export async function down(knex: Knex): Promise<void> {
-  await knex.raw('drop table mixes, instruments, drawings, invitations, memberships, project_counters, projects');
+  await knex.raw(
+    'drop table mixes, instruments, drawings, invitations, memberships, project_counters, projects',
+  );
 }
