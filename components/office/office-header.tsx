@@ -1,0 +1,54 @@
+import Link from 'next/link';
+import { PersonMenu } from './person-menu';
+import { NavLink } from './nav-link';
+import { ProjectSwitch } from './project-switch';
+
+export interface OfficeLink {
+  href: string;
+  label: string;
+}
+
+/** The head of every office page: the program's name, the project, where one can go, and who is signed in. */
+export function OfficeHeader({
+  projects,
+  currentProjectId,
+  links,
+  person,
+}: {
+  projects: { id: string; name: string }[];
+  currentProjectId: string | null;
+  links: OfficeLink[];
+  person: { id: string; name: string; email: string; roleWords: string };
+}) {
+  const current = projects.find((project) => project.id === currentProjectId);
+  return (
+    <header className="border-b-[1.5px] border-ink bg-sheet print:hidden">
+      <div className="mx-auto flex max-w-7xl flex-wrap items-center gap-x-5 gap-y-1 px-4 py-1.5">
+        <Link
+          href="/"
+          prefetch={false}
+          className="inline-flex min-h-target items-center font-label text-lead font-semibold"
+        >
+          Cagewright
+        </Link>
+        {projects.length > 1 && current ? (
+          <ProjectSwitch projects={projects} currentId={current.id} />
+        ) : (
+          current && <p className="font-label text-body font-medium text-pencil">{current.name}</p>
+        )}
+        <nav aria-label="Main" className="order-last -mx-1 w-full overflow-x-auto md:order-none md:w-auto">
+          <ul className="flex gap-1">
+            {links.map((link) => (
+              <li key={link.href}>
+                <NavLink {...link} />
+              </li>
+            ))}
+          </ul>
+        </nav>
+        <div className="ml-auto">
+          <PersonMenu person={person} />
+        </div>
+      </div>
+    </header>
+  );
+}
