@@ -137,6 +137,21 @@ export function findBar(designation: string, system?: BarSystem): Bar | null {
   return null;
 }
 
+/** The bar system that goes with a code; the contract alone names none. */
+const SYSTEM_OF_BASIS: Readonly<Record<string, BarSystem>> = {
+  'aci-318-19': 'astm',
+  'en-1992': 'en',
+  'csa-a23.1': 'csa',
+  'as-3600': 'as-nzs',
+  'is-456': 'is',
+};
+
+/** As `findBar`; a bare number ("16") is a size of the system that goes with the `basis`, where it has one. */
+export function findBarFor(designation: string, basis: string): Bar | null {
+  const system = SYSTEM_OF_BASIS[basis];
+  return findBar(designation) ?? (system ? findBar(designation, system) : null);
+}
+
 /** Mass in kg of `lengthMm` of a bar, by the mass of its table. */
 export function massOf(of: Bar, lengthMm: number): number {
   return (of.massKgPerM * lengthMm) / 1000;
