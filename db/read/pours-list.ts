@@ -25,6 +25,8 @@ export interface PoursListFilter {
   projectId: string;
   /** Only pours in one of these states. */
   states?: readonly PourState[];
+  /** Only pours with a hold that this role clears. */
+  clearedBy?: Role;
   /** Part of a number, title or location. */
   text?: string;
   plannedFrom?: string;
@@ -80,6 +82,7 @@ export async function readPoursList(
     filter.plannedBefore ? 'p.planned_order < :plannedBefore' : null,
     filter.text ? `(p.number || ' ' || p.title || ' ' || p.location) ilike :pattern` : null,
     filter.states ? `${stateNow} = any(:states)` : null,
+    filter.clearedBy ? `coalesce(cast(s.holds_by_role ->> :clearedBy as integer), 0) > 0` : null,
     filter.assignedTo
       ? `exists (select from assignments a
           where a.project_id = p.project_id and a.pour_id = p.id and a.person_id = :assignedTo)`
@@ -103,6 +106,7 @@ export async function readPoursList(
       plannedBefore: filter.plannedBefore ?? null,
       pattern: `%${(filter.text ?? '').replace(/[\\%_]/g, '\\$&')}%`,
       states: filter.states ? [...filter.states] : null,
+      clearedBy: filter.clearedBy ?? null,
       assignedTo: filter.assignedTo ?? null,
       more: limit + 1,
     },
