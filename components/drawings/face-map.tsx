@@ -1,4 +1,4 @@
-import { useId } from 'react';
+import { useId, type ReactNode } from 'react';
 import { DimensionLine } from './dimension-line';
 import { faceProportion, gridSteps, type FaceRectangle } from './face-map-geometry';
 import { Mark } from './mark';
@@ -29,6 +29,8 @@ export interface FaceMapProps {
   format?: (mm: number) => string;
   /** Labels at the points; by default where there are at most 60. */
   labels?: boolean;
+  /** Laid over the face, edge on edge: what makes it answer to touch (FaceMapInteractive). */
+  overlay?: ReactNode;
 }
 
 const share = (part: number, whole: number) => `${((part / whole) * 100).toFixed(3)}%`;
@@ -55,6 +57,7 @@ export function FaceMap(props: FaceMapProps) {
         >
           <FaceMapContent {...props} />
         </svg>
+        {props.overlay}
       </div>
       <DimensionLine text={format(heightMm)} upright />
       <DimensionLine text={`${format(widthMm)}${toScale ? '' : ' (not to scale)'}`} />
