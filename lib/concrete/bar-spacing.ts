@@ -1,8 +1,8 @@
 import { listOf, notNegative, positive, unknownChoice, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
+import { MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
-import { MM_PER_INCH } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
 
@@ -118,7 +118,7 @@ export function judgeBarCount(counted: number, specified: number): LimitFinding 
     'Bars across the bay',
     whole('bars counted', counted, 0),
     { least: whole('bars specified', specified, 1) },
-    '',
+    'count',
   );
 }
 

@@ -1,9 +1,8 @@
 import { positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { atMost } from '@/lib/concrete/length';
+import { atMost, MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
-import { MM_PER_INCH } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { FROM_MEMORY, trailSource } from '@/lib/concrete/trail-source';
 import { usBarNumber } from '@/lib/concrete/us-bar-number';

@@ -5,6 +5,12 @@ import { ConcreteError } from '@/lib/concrete/concrete-error';
  * reason, so that no computation ever answers with NaN or takes a silent default.
  */
 
+/** What was entered, or the refusal that says it is missing. */
+export function given<T>(field: string, value: T | undefined | null): T {
+  if (value === undefined || value === null) throw new ConcreteError(field, 'It is missing.', 'absent');
+  return value;
+}
+
 /** A finite number. */
 export function finite(field: string, value: number): number {
   if (typeof value !== 'number' || !Number.isFinite(value)) {
@@ -51,7 +57,8 @@ export function between(field: string, value: number, least: number, most: numbe
 /** A list that holds at least `least` entries, none of them a hole. */
 export function listOf<T>(field: string, list: readonly T[], least: number): readonly T[] {
   if (list.length < least) {
-    throw new ConcreteError(field, least === 1 ? 'It is empty.' : `It needs at least ${least} entries.`);
+    const reason = least === 1 ? 'It is empty.' : `It needs at least ${least} entries.`;
+    throw new ConcreteError(field, reason, 'absent');
   }
   return list;
 }

@@ -1,8 +1,8 @@
 import { notNegative, positive, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
-import { atLeast } from '@/lib/concrete/length';
+import { atLeast, MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
-import { mpaToPsi, MM_PER_INCH } from '@/lib/concrete/stress-units';
+import { mpaToPsi } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { FROM_MEMORY, trailSource } from '@/lib/concrete/trail-source';
 import { usBarNumber } from '@/lib/concrete/us-bar-number';

@@ -83,7 +83,7 @@ export function judgeCoupler(coupler: {
             'Threads in sight',
             whole('threads in sight', coupler.exposedThreads, 0),
             { most },
-            '',
+            'count',
           ),
     );
   }

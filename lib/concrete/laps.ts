@@ -1,10 +1,10 @@
 import { checkedAlphas, enBasicAnchorage, type EnAlphas, type EnBond } from '@/lib/concrete/anchorage-en';
-import { between, finite, positive, unknownChoice } from '@/lib/concrete/check-input';
+import { between, finite, given, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
-import type { AciBar, DevelopmentLength } from '@/lib/concrete/development';
-import { atLeast, atMost } from '@/lib/concrete/length';
+import type { DevelopmentLength } from '@/lib/concrete/development';
+import { atLeast, atMost, MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
-import { mpaToPsi, MM_PER_INCH } from '@/lib/concrete/stress-units';
+import { mpaToPsi } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
 import { usBarNumber } from '@/lib/concrete/us-bar-number';
@@ -137,7 +137,7 @@ export function aciCompressionLap(query: {
     trail.push(aciCompression('f’c below 3000 psi: one third more', inchText(inches * MM_PER_INCH)));
   }
   if (fy > 81_000) {
-    const tension = positive('tension lap', query.tensionLapMm ?? Number.NaN) / MM_PER_INCH;
+    const tension = positive('tension lap', given('tension lap', query.tensionLapMm)) / MM_PER_INCH;
     inches = Math.max(inches, tension);
     trail.push(
       aciCompression('fy above 80 000 psi: not less than the tension lap', inchText(inches * MM_PER_INCH)),

@@ -1,7 +1,7 @@
 import betaQuantile from '@stdlib/stats-base-dists-beta-quantile';
 import normalQuantile from '@stdlib/stats-base-dists-normal-quantile';
 import tQuantile from '@stdlib/stats-base-dists-t-quantile';
-import { finite, listOf, openShare, whole } from '@/lib/concrete/check-input';
+import { finite, given, listOf, openShare, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { noncentralTQuantile } from '@/lib/concrete/noncentral-t';
 import { numberText } from '@/lib/concrete/number-text';
@@ -202,8 +202,8 @@ export function rankQuantileOf(values: readonly number[], share: number): Statis
   openShare('share', share);
   const position = Math.min(Math.max(share * (ordered.length + 1), 1), ordered.length);
   const lower = Math.floor(position);
-  const low = ordered[lower - 1] ?? Number.NaN;
-  const high = ordered[Math.min(lower, ordered.length - 1)] ?? low;
+  const low = given('reading', ordered[lower - 1]);
+  const high = given('reading', ordered[Math.min(lower, ordered.length - 1)]);
   const value = low + (position - lower) * (high - low);
   const byRanks = trailSource(
     'R. J. Hyndman and Y. Fan, The American Statistician 50, type 6',

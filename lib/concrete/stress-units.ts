@@ -11,7 +11,5 @@ export function mpaToPsi(mpa: number): number {
   return mpa / MPA_PER_PSI;
 }
 
-/** Inches to millimetres, exact. */
-export const MM_PER_INCH = 25.4;
 /** Feet to millimetres, exact. */
 export const MM_PER_FOOT = 304.8;

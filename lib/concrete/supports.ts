@@ -1,4 +1,4 @@
-import { finite, listOf, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
+import { finite, given, listOf, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
 import { numberText } from '@/lib/concrete/number-text';
@@ -121,7 +121,10 @@ export function supportSpacingLimit(query: {
   const diameter = positive('bar diameter', query.diameterMm);
   switch (query.rule) {
     case 'plan': {
-      const mostMm = positive('support spacing in the plan', query.planLimitMm ?? Number.NaN);
+      const mostMm = positive(
+        'support spacing in the plan',
+        given('support spacing in the plan', query.planLimitMm),
+      );
       return { mostMm, trail: [fromContract('Greatest support spacing', `${numberText(mostMm)} mm`)] };
     }
     case 'common-practice': {

@@ -1,8 +1,8 @@
 import { between, finite, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
+import { MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
-import { MM_PER_INCH } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
 

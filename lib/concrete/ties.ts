@@ -1,4 +1,4 @@
-import { listOf, openShare, positive, unknownChoice, whole } from '@/lib/concrete/check-input';
+import { given, listOf, openShare, positive, unknownChoice, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { atLeast } from '@/lib/concrete/length';
 import type { LimitFinding } from '@/lib/concrete/limit-verdict';
@@ -146,8 +146,8 @@ export function requiredTies(sample: {
       );
     }
     case 'by-spacing': {
-      const x = positive('spacing in x', sample.spacingXMm ?? Number.NaN);
-      const y = positive('spacing in y', sample.spacingYMm ?? Number.NaN);
+      const x = positive('spacing in x', given('spacing in x', sample.spacingXMm));
+      const y = positive('spacing in y', given('spacing in y', sample.spacingYMm));
       const every = atLeast(x, EVERY_FROM_MM) || atLeast(y, EVERY_FROM_MM);
       return every
         ? answer(total, 'Bars 12 in or more apart: every intersection is tied')
