@@ -131,13 +131,19 @@ function subjectOf(facts: Facts, entry: Entry): string {
   }
 }
 
+const placed = (entry: RecordedEntry) => ({ ...entry, seq: entry.seq ?? null });
+
+/** Does this entry come after that one by seq alone? What still waits on a device is put in order the long way. */
+const follows = (entry: RecordedEntry, before: RecordedEntry | undefined): boolean =>
+  entry.seq !== undefined && (before === undefined || (before.seq !== undefined && before.seq < entry.seq));
+
 /** The record's own order, with what waits on the device last; the same id is taken once. */
-export function inOrder(recorded: readonly RecordedEntry[]): RecordedEntry[] {
+export function inOrder(recorded: readonly RecordedEntry[]): readonly RecordedEntry[] {
+  if (recorded.every((entry, index) => follows(entry, recorded[index - 1]))) return recorded;
   const once = new Map<string, RecordedEntry>();
   for (const entry of recorded) {
     const known = once.get(entry.id);
     if (!known || (known.seq === undefined && entry.seq !== undefined)) once.set(entry.id, entry);
   }
-  const placed = (entry: RecordedEntry) => ({ ...entry, seq: entry.seq ?? null });
   return [...once.values()].sort((a, b) => inRecordOrder(placed(a), placed(b)));
 }

@@ -8,6 +8,13 @@ import type { CheckState } from './sheet-types';
 
 const favour = { 'not-met': 0, 'not-applicable': 1, met: 2 } as const;
 
+/** The less favourable of two answers; equal ones by id, so that order of arrival decides nothing. */
+function lessFavourable(one: EntryOf<'answer'>, other: EntryOf<'answer'>): EntryOf<'answer'> {
+  const difference = favour[one.body.answer] - favour[other.body.answer];
+  if (difference !== 0) return difference < 0 ? one : other;
+  return one.id < other.id ? one : other;
+}
+
 /** Judges every question of the checklist: what was said last, or the less favourable where people had not seen each other. */
 export function judgeChecks(context: JudgingContext): CheckState[] {
   return context.plan.checklist.items.map((item) => {
@@ -21,10 +28,7 @@ export function judgeChecks(context: JudgingContext): CheckState[] {
       if (least) answers.push({ ...entry, body: least });
     }
     const heads = headsOf(answers);
-    const governing =
-      heads.length === 0
-        ? null
-        : heads.reduce((least, one) => (favour[one.body.answer] < favour[least.body.answer] ? one : least));
+    const governing = heads.length === 0 ? null : heads.reduce(lessFavourable);
     const key = subjectKey({ kind: 'check', id: item.id });
     const corrections = context.corrections.filter(({ keys }) => keys.has(key)).map(({ entry }) => entry);
     const correctedSince =

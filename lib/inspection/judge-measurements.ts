@@ -117,6 +117,13 @@ export function judgeMeasurements(context: JudgingContext): MeasurementState[] {
   });
 }
 
+/** The less favourable of two measurements; equal ones by id, so that order of arrival decides nothing. */
+function lessFavourable(one: Place, other: Place): Place {
+  const difference = favour[one.verdict] - favour[other.verdict];
+  if (difference !== 0) return difference < 0 ? one : other;
+  return one.entry.id < other.entry.id ? one : other;
+}
+
 function governingPlaces(places: Place[]): Place[] {
   const groups = new Map<string, Place[]>();
   for (const place of places) {
@@ -127,9 +134,7 @@ function governingPlaces(places: Place[]): Place[] {
   return [...groups.values()]
     .map((group) => {
       const latest = Math.max(...group.map((place) => place.round));
-      return group
-        .filter((place) => place.round === latest)
-        .reduce((least, one) => (favour[one.verdict] < favour[least.verdict] ? one : least));
+      return group.filter((place) => place.round === latest).reduce(lessFavourable);
     })
     .sort((a, b) => favour[a.verdict] - favour[b.verdict]);
 }

@@ -145,6 +145,13 @@ export function judgePoint(context: JudgingContext, place: PointPlace): PointSta
   };
 }
 
+/** The less favourable of two readings; equal ones by id, so that order of arrival decides nothing. */
+function lessFavourable(one: ReadingState, other: ReadingState): ReadingState {
+  const difference = favour(one.judged) - favour(other.judged);
+  if (difference !== 0) return difference < 0 ? one : other;
+  return one.entry.id < other.entry.id ? one : other;
+}
+
 function governingOf(standing: ReadingState[]): ReadingState[] {
   const byRequirement = new Map<string, ReadingState[]>();
   for (const reading of standing) {
@@ -154,9 +161,7 @@ function governingOf(standing: ReadingState[]): ReadingState[] {
   }
   return [...byRequirement.values()].map((group) => {
     const latest = Math.max(...group.map((reading) => reading.round));
-    return group
-      .filter((reading) => reading.round === latest)
-      .reduce((least, reading) => (favour(reading.judged) < favour(least.judged) ? reading : least));
+    return group.filter((reading) => reading.round === latest).reduce(lessFavourable);
   });
 }
 
@@ -168,10 +173,7 @@ export function markOfReading(judged: JudgedReading): MarkKind {
 }
 
 function markOf(governing: ReadingState[], standing: ReadingState[]): MarkKind {
-  const worst = governing.reduce<ReadingState | null>(
-    (least, one) => (!least || favour(one.judged) < favour(least.judged) ? one : least),
-    null,
-  );
+  const worst = governing.length > 0 ? governing.reduce(lessFavourable) : null;
   if (worst) return markOfReading(worst.judged);
   return standing.length > 0 ? 'not-verified' : 'unread';
 }
