@@ -8,7 +8,7 @@ import { personName } from './entry-words';
 import { asEntered } from './length-words';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
-import { RuledTable } from './ruled-table';
+import { RuledTable, type RuledRow } from './ruled-table';
 
 const marks: Record<Verdict, { mark: MarkKind; word: string }> = {
   met: { mark: 'met', word: 'met' },
@@ -58,7 +58,7 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
         { key: 'verdict', head: 'Verdict', className: 'min-w-48' },
         { key: 'by', head: 'By', className: 'whitespace-nowrap' },
       ]}
-      rows={sheet.measurements.flatMap((state) => {
+      rows={sheet.measurements.flatMap((state): RuledRow[] => {
         const head = {
           what: (
             <>
