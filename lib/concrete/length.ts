@@ -188,12 +188,28 @@ function inchFraction(mm: number): string | null {
   return null;
 }
 
-/** The shortest decimal that is exact within the slack and at most `most` places long, otherwise rounded. */
-function decimal(value: number, most: number, rounded: number, slack: number): string {
-  for (let places = 0; places <= most; places += 1) {
-    if (Math.abs(Number(value.toFixed(places)) - value) <= slack) return unsigned(value.toFixed(places));
+/** How decimals of a unit are written: places of an exact value at most, places of a rounded one at first. */
+const DECIMALS: Record<LengthUnit, { per: number; exact: number; rounded: number }> = {
+  mm: { per: 1, exact: 3, rounded: 2 },
+  in: { per: MM_PER_INCH, exact: 5, rounded: 3 },
+};
+
+/**
+ * The shortest decimal that is exact within the slack; otherwise rounded, with as many more places as keep it from
+ * looking like a rounder number, or a fraction of an inch, that it is not.
+ */
+function decimal(mm: number, unit: LengthUnit): string {
+  const { per, exact, rounded } = DECIMALS[unit];
+  const value = mm / per;
+  for (let places = 0; places <= exact; places += 1) {
+    const text = value.toFixed(places);
+    if (Math.abs(Number(text) * per - mm) <= LENGTH_SLACK_MM) return unsigned(text);
   }
-  return unsigned(value.toFixed(rounded).replace(/\.?0+$/, ''));
+  const looksExact = (text: string) =>
+    text.endsWith('0') || (unit === 'in' && inchFraction(Number(text) * per) !== null);
+  let text = value.toFixed(rounded);
+  for (let places = rounded + 1; places <= 9 && looksExact(text); places += 1) text = value.toFixed(places);
+  return unsigned(text);
 }
 
 function unsigned(text: string): string {
@@ -207,13 +223,9 @@ interface Shown {
 }
 
 function plain(mm: number, unit: LengthUnit): Shown {
-  if (unit === 'mm') {
-    const text = decimal(mm, 3, 2, LENGTH_SLACK_MM);
-    return { text, value: Number(text) };
-  }
-  const fraction = inchFraction(mm);
+  const fraction = unit === 'in' ? inchFraction(mm) : null;
   if (fraction !== null) return { text: fraction, value: mm / MM_PER_INCH };
-  const text = decimal(mm / MM_PER_INCH, 5, 3, LENGTH_SLACK_MM / MM_PER_INCH);
+  const text = decimal(mm, unit);
   return { text, value: Number(text) };
 }
 
@@ -229,9 +241,11 @@ export function formatLength(mm: number, unit: LengthUnit, beside?: number): str
   if (beside === undefined || !Number.isFinite(beside)) return own.text;
   if (Math.abs(mm - beside) <= LENGTH_SLACK_MM) return plain(beside, unit).text;
   const other = plain(beside, unit);
-  if (own.value !== other.value && own.value < other.value === mm < beside) return own.text;
+  // Values that differ by binary rounding only are the same to a reader.
+  const apart = Math.abs(own.value - other.value) > 1e-9;
+  if (apart && own.value < other.value === mm < beside) return own.text;
   if (unit === 'in' && inchFraction(mm) !== null) return own.text;
-  const per = unit === 'mm' ? 1 : MM_PER_INCH;
+  const { per } = DECIMALS[unit];
   for (let places = 3; places < 12; places += 1) {
     const text = (mm / per).toFixed(places);
     if (text !== (beside / per).toFixed(places)) return unsigned(text);

@@ -57,8 +57,15 @@ function bestRows(count: number, widthMm: number, heightMm: number): number {
   return best;
 }
 
-/** The parts of a cell that no opening covers, as rectangles. */
-function freeParts(cell: Rectangle, openings: readonly Rectangle[]): Rectangle[] {
+/** The parts of a cell that no opening covers, as rectangles; openings that lie elsewhere leave it whole. */
+function freeParts(cell: Rectangle, all: readonly Rectangle[]): Rectangle[] {
+  const openings = all.filter(
+    (o) =>
+      o.xMm < cell.xMm + cell.widthMm &&
+      o.xMm + o.widthMm > cell.xMm &&
+      o.yMm < cell.yMm + cell.heightMm &&
+      o.yMm + o.heightMm > cell.yMm,
+  );
   const right = cell.xMm + cell.widthMm;
   const bottom = cell.yMm + cell.heightMm;
   const cuts = (from: number, to: number, values: number[]) =>
