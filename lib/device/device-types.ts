@@ -97,6 +97,8 @@ export interface DeviceSnapshot {
   storage: { usedBytes: number | null; quotaBytes: number | null; persisted: boolean | null };
   /** A new version of the application waits to take over. */
   updateReady: boolean;
+  /** Others who have signed in on this device and whose work waits here for them. */
+  others?: { id: string; name: string; waiting: number }[];
 }
 
 /** The phone's side, as components/field uses it. Every promise of `record` resolves only once the entry is on disk. */
@@ -138,6 +140,10 @@ export interface Device {
   ): Promise<{ ok: true } | { ok: false; sentence: string }>;
   /** Signs in as somebody else's session ended or began: re-reads who is signed in. */
   refreshPerson(): Promise<void>;
+  /** Closes this person's work on the device. Whatever waits stays, hidden, until they sign in again. */
+  signOut?(): Promise<void>;
+  /** The person has read that entries were lost with a cleared store. */
+  acknowledgeLost?(): Promise<void>;
   applyUpdate(): void;
 }
 

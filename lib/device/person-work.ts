@@ -1,0 +1,341 @@
+import type { BodyOf } from '@/lib/inspection/entry';
+import type { RecordedEntry } from '@/lib/inspection/sheet';
+import type { DeviceIndex, PushOutcome } from '@/lib/inspection/wire';
+import type { DeviceEnvironment, TabChannel, TabMessage } from './device-environment';
+import { DeviceError, type DeviceEntryType, type DevicePerson } from './device-types';
+import { checkedBody, entryToRecord, type EntryPlace } from './entry-to-record';
+import { LossWatch } from './loss-watch';
+import { SheetMemory } from './sheet-memory';
+import { forgetPour } from './store/forget-pour';
+import {
+  isDeviceFull,
+  openPersonDatabase,
+  projectStream,
+  readMeta,
+  streamOf,
+  writeMeta,
+  type OutboxRecord,
+  type PersonDatabase,
+  type PhotoRecord,
+  type RefusedRecord,
+} from './store/person-database';
+import { settleOutcomes, type Settled } from './store/settle-outcomes';
+import { restartStream, storePage, type StreamPage } from './store/store-page';
+import { setRoomAside, writeEntry, type PhotoToStore } from './store/write-entry';
+
+/** What is kept in memory of an outbox record: enough to count and to say how old it is. */
+export interface Waiting {
+  deviceSeq: number;
+  stream: string;
+  recordedAt: string;
+}
+
+const KEPT_DAYS = 14;
+
+/**
+ * One person's work on this device while it is open: their store, and in memory what the screens show of it. Every
+ * change is written first and then taken into memory, and other tabs of the same person are told.
+ */
+export class PersonWork {
+  readonly memory = new SheetMemory();
+  readonly outbox = new Map<string, Waiting>();
+  readonly refused = new Map<string, RefusedRecord>();
+  readonly photos = new Map<string, PhotoRecord>();
+  index: DeviceIndex | null = null;
+  keep: Record<string, boolean> = {};
+  lastSuccessAt: string | null = null;
+  clockOffsetMs: number | null = null;
+  /** Revision of the plan kept here, by pour. */
+  readonly planRevisions = new Map<string, number>();
+  readonly loss: LossWatch;
+  readonly #opening = new Map<string, Promise<void>>();
+  readonly #channel: TabChannel;
+  #closed = false;
+
+  private constructor(
+    private readonly env: DeviceEnvironment,
+    readonly person: DevicePerson,
+    readonly deviceId: string,
+    readonly db: PersonDatabase,
+    private readonly changed: (wantsSending: boolean) => void,
+  ) {
+    this.loss = new LossWatch(env, db, { personId: person.id, deviceId });
+    this.#channel = env.channel(`cagewright-${person.id}`, (message) => void this.#heard(message));
+  }
+
+  /** Opens a person's store, tells an emptied one from a new one, and reads what the screens show first. */
+  static async open(
+    env: DeviceEnvironment,
+    person: DevicePerson,
+    deviceId: string,
+    changed: (wantsSending: boolean) => void,
+  ): Promise<PersonWork> {
+    const db = await openPersonDatabase(env.databaseName(`cagewright-${person.id}`));
+    const work = new PersonWork(env, person, deviceId, db, changed);
+    await work.#readAll();
+    await work.loss.compare();
+    work.#mark();
+    void setRoomAside(db);
+    return work;
+  }
+
+  get closed(): boolean {
+    return this.#closed;
+  }
+
+  close(): void {
+    this.#closed = true;
+    this.#channel.close();
+    this.db.close();
+  }
+
+  async #readAll(): Promise<void> {
+    const [outbox, refused, photos, cursors] = await Promise.all([
+      this.db.getAll('outbox'),
+      this.db.getAll('refused'),
+      this.db.getAll('photos'),
+      this.db.getAll('cursors'),
+    ]);
+    this.outbox.clear();
+    for (const record of outbox) this.#waits(record);
+    this.refused.clear();
+    for (const record of refused) this.refused.set(record.id, record);
+    this.photos.clear();
+    for (const photo of photos) this.photos.set(photo.photoId, photo);
+    this.index = (await readMeta(this.db, 'index')) ?? null;
+    this.keep = (await readMeta(this.db, 'keep')) ?? {};
+    this.lastSuccessAt = (await readMeta(this.db, 'lastSuccessAt')) ?? null;
+    this.clockOffsetMs = (await readMeta(this.db, 'clockOffsetMs')) ?? null;
+    this.planRevisions.clear();
+    for (const cursor of cursors) this.planRevisions.set(cursor.stream, cursor.planRevision);
+    await this.loss.read();
+  }
+
+  #waits(record: OutboxRecord): void {
+    const { deviceSeq, stream, envelope } = record;
+    this.outbox.set(record.id, { deviceSeq, stream, recordedAt: envelope.recordedAt });
+  }
+
+  #mark(): void {
+    this.loss.mark([...this.outbox.values(), ...this.refused.values()].map((one) => one.deviceSeq));
+  }
+
+  #tell(message: TabMessage): void {
+    this.#channel.post(message);
+    this.changed(message.send === true);
+  }
+
+  async #heard(message: TabMessage): Promise<void> {
+    if (this.#closed) return;
+    await this.#readAll();
+    for (const stream of message.streams) if (this.memory.has(stream)) await this.#loadStream(stream);
+    for (const stream of message.streams) {
+      const plan = this.memory.isOpen(stream) ? await this.db.get('plans', stream) : undefined;
+      if (plan) this.memory.setPlan(plan);
+    }
+    this.changed(false);
+  }
+
+  async #loadStream(stream: string): Promise<void> {
+    const [kept, cursor] = await Promise.all([
+      this.db.getAllFromIndex('entries', 'stream', stream),
+      this.db.get('cursors', stream),
+    ]);
+    this.memory.load(
+      stream,
+      kept.map((one) => one.entry),
+      cursor?.after ?? 0,
+    );
+  }
+
+  /** Reads a pour's two streams and its plan into memory. Asked twice, it reads once. */
+  openPour(pourId: string, projectId: string): Promise<void> {
+    if (this.memory.isOpen(pourId)) return Promise.resolve();
+    const known = this.#opening.get(pourId);
+    if (known) return known;
+    const opening = (async () => {
+      await Promise.all([this.#loadStream(pourId), this.#loadStream(projectStream(projectId))]);
+      this.memory.open(pourId, projectId, (await this.db.get('plans', pourId)) ?? null);
+    })().finally(() => this.#opening.delete(pourId));
+    this.#opening.set(pourId, opening);
+    return opening;
+  }
+
+  /** The project of a pour, as last heard from the server. */
+  projectOf(pourId: string): DeviceIndex['projects'][number] | undefined {
+    return this.index?.projects.find((project) => project.pours.some((pour) => pour.id === pourId));
+  }
+
+  isKept(pour: DeviceIndex['projects'][number]['pours'][number]): boolean {
+    const chosen = this.keep[pour.id];
+    if (chosen !== undefined) return chosen;
+    if (!pour.assigned) return false;
+    if (pour.plannedAt === null) return true;
+    return Math.abs(Date.parse(pour.plannedAt) - this.env.now()) <= KEPT_DAYS * 86_400_000;
+  }
+
+  /**
+   * Records an entry: on disk first, then in memory. (SPEC 1, 2, 3)
+   * @throws DeviceError `invalid`, `device-full` or `store-failed`; nothing was written then
+   */
+  async record<T extends DeviceEntryType>(
+    place: EntryPlace,
+    type: T,
+    body: BodyOf<T>,
+    photo?: PhotoToStore,
+  ): Promise<RecordedEntry> {
+    const checked = checkedBody(type, body);
+    const stream = streamOf(place);
+    if (place.pourId !== null) await this.openPour(place.pourId, place.projectId);
+    else if (!this.memory.has(stream)) await this.#loadStream(stream);
+    const moment = {
+      id: photo?.record.entryId ?? this.env.newId(),
+      authorId: this.person.id,
+      authorRole: this.index?.projects.find((one) => one.id === place.projectId)?.role ?? 'viewer',
+      deviceId: this.deviceId,
+      now: this.env.now(),
+      clockOffsetMs: this.clockOffsetMs,
+      planRevision: place.pourId === null ? 0 : (this.memory.planOf(place.pourId)?.revision ?? 0),
+      seenSeq: this.memory.headOf(stream) ?? 0,
+    };
+    try {
+      const written = await writeEntry(
+        this.db,
+        this.loss.made,
+        (deviceSeq) => entryToRecord(place, type, checked, moment, deviceSeq),
+        photo,
+      );
+      this.loss.made = Math.max(this.loss.made, written.entry.deviceSeq);
+      this.#waits(written.outbox);
+      if (photo) this.photos.set(photo.record.photoId, photo.record);
+      this.memory.merge(stream, [written.entry]);
+      this.#mark();
+      this.#tell({ streams: [stream], send: true });
+      return written.entry;
+    } catch (error) {
+      throw isDeviceFull(error)
+        ? new DeviceError(
+            'device-full',
+            'This device has no room left. This was not saved; everything saved before is kept. Send what waits or save it to a file, make room, and enter this again.',
+          )
+        : new DeviceError(
+            'store-failed',
+            'This could not be saved on the device. Everything saved before is kept. Load this page again and enter it once more.',
+          );
+    }
+  }
+
+  /** The next records to send, in the order in which they were made, at most `most`. */
+  outboxAfter(deviceSeq: number, most: number): Promise<OutboxRecord[]> {
+    return this.db.getAllFromIndex('outbox', 'deviceSeq', IDBKeyRange.lowerBound(deviceSeq, true), most);
+  }
+
+  async settle(sent: readonly OutboxRecord[], outcomes: readonly PushOutcome[]): Promise<Settled> {
+    const at = new Date(this.env.now()).toISOString();
+    const settled = await settleOutcomes(this.db, sent, outcomes, at);
+    const streams = new Set(sent.map((record) => record.stream));
+    for (const id of settled.confirmedIds) this.outbox.delete(id);
+    for (const record of settled.refused) {
+      this.outbox.delete(record.id);
+      this.refused.set(record.id, record);
+    }
+    for (const photo of settled.photos) this.photos.set(photo.photoId, photo);
+    for (const stream of streams) {
+      this.memory.merge(
+        stream,
+        settled.confirmed.filter((entry) => streamOf(entry) === stream),
+      );
+      const gone = settled.refused.filter((record) => streamOf(record.envelope) === stream);
+      if (gone.length > 0)
+        this.memory.remove(
+          stream,
+          gone.map((record) => record.id),
+        );
+    }
+    this.#mark();
+    this.#tell({ streams: [...streams] });
+    return settled;
+  }
+
+  /** Notes why an entry could not be sent, so that its author sees it. It stays in the outbox. */
+  async noteProblem(record: OutboxRecord, problem: string): Promise<void> {
+    await this.db.put('outbox', { ...record, problem });
+  }
+
+  async takePage(page: StreamPage): Promise<void> {
+    const stored = await storePage(this.db, page);
+    this.memory.merge(page.stream, page.entries, page.head);
+    if (page.plan) this.memory.setPlan(page.plan);
+    for (const photo of stored.photos) this.photos.set(photo.photoId, photo);
+    for (const record of stored.offeredAgain) this.#waits(record);
+    this.planRevisions.set(page.stream, stored.cursor.planRevision);
+    await this.loss.found(page.entries);
+    const news = page.entries.length > 0 || page.plan !== null || stored.offeredAgain.length > 0;
+    if (stored.offeredAgain.length > 0) this.#mark();
+    if (news) this.#tell({ streams: [page.stream] });
+  }
+
+  async restart(stream: string): Promise<void> {
+    const restarted = await restartStream(this.db, stream, {
+      personId: this.person.id,
+      deviceId: this.deviceId,
+    });
+    for (const record of restarted.offeredAgain) this.#waits(record);
+    this.memory.remove(stream, restarted.strays, 0);
+    this.memory.merge(stream, restarted.waiting);
+    this.#mark();
+    this.#tell({ streams: [stream] });
+  }
+
+  async setIndex(index: DeviceIndex): Promise<void> {
+    await writeMeta(this.db, 'index', index);
+    this.index = index;
+    this.#tell({ streams: [] });
+  }
+
+  async setClockOffset(offsetMs: number | null): Promise<void> {
+    if (offsetMs === null || offsetMs === this.clockOffsetMs) return;
+    this.clockOffsetMs = offsetMs;
+    await writeMeta(this.db, 'clockOffsetMs', offsetMs);
+  }
+
+  async setLastSuccess(at: string): Promise<void> {
+    this.lastSuccessAt = at;
+    await writeMeta(this.db, 'lastSuccessAt', at);
+  }
+
+  async choose(pourId: string, keep: boolean): Promise<void> {
+    this.keep = { ...this.keep, [pourId]: keep };
+    await writeMeta(this.db, 'keep', this.keep);
+    if (!keep) {
+      for (const photoId of await forgetPour(this.db, pourId)) this.photos.delete(photoId);
+      this.planRevisions.delete(pourId);
+      this.memory.close(pourId);
+    }
+    this.#tell({ streams: [] });
+  }
+
+  async setPhoto(photo: PhotoRecord): Promise<void> {
+    await this.db.put('photos', photo);
+    this.photos.set(photo.photoId, photo);
+    this.#tell({ streams: [] });
+  }
+
+  async forgetPhoto(photoId: string): Promise<void> {
+    const tx = this.db.transaction(['photos', 'photoBytes'], 'readwrite');
+    await Promise.all([
+      tx.objectStore('photos').delete(photoId),
+      tx.objectStore('photoBytes').delete(photoId),
+      tx.done,
+    ]);
+    this.photos.delete(photoId);
+    this.#tell({ streams: [] });
+  }
+
+  async forgetRefused(entryId: string): Promise<void> {
+    await this.db.delete('refused', entryId);
+    this.refused.delete(entryId);
+    this.#mark();
+    this.#tell({ streams: [] });
+  }
+}

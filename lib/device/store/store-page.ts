@@ -1,0 +1,166 @@
+import type { Plan } from '@/lib/inspection/plan';
+import type { RecordedEntry } from '@/lib/inspection/sheet';
+import type { StoredEntry } from '@/lib/inspection/wire';
+import { envelopeOf } from './envelope';
+import type { CursorRecord, OutboxRecord, PersonDatabase, PhotoRecord } from './person-database';
+
+/** One page of one stream, as pulled. */
+export interface StreamPage {
+  stream: string;
+  entries: StoredEntry[];
+  head: number;
+  headHash: string | null;
+  /** Nothing follows: the stream is complete up to `head`. */
+  complete: boolean;
+  plan: Plan | null;
+}
+
+export interface StoredPage {
+  cursor: CursorRecord;
+  photos: PhotoRecord[];
+  /** Sent and acknowledged before, but not in the complete stream: put back into the outbox. */
+  offeredAgain: OutboxRecord[];
+}
+
+/** How many answers of "this photo cannot be used" are met by sending the same bytes once more. */
+const REFUSALS_TO_RETRY = 1;
+
+/**
+ * Writes one pulled page and its cursor in one transaction, so that the cursor never runs ahead of what is kept.
+ * Entries that were acknowledged and are missing from a complete stream are offered again. (SPEC 20, 22, 24)
+ */
+export async function storePage(db: PersonDatabase, page: StreamPage): Promise<StoredPage> {
+  const tx = db.transaction(
+    ['entries', 'cursors', 'plans', 'acked', 'outbox', 'photos', 'strays'],
+    'readwrite',
+  );
+  tx.done.catch(() => undefined);
+  const [before, acked, photosNamed] = await Promise.all([
+    tx.objectStore('cursors').get(page.stream),
+    tx.objectStore('acked').index('stream').getAll(page.stream),
+    Promise.all(
+      page.entries.map((entry) => {
+        const photoId = photoNamedBy(entry);
+        return photoId === null ? undefined : tx.objectStore('photos').get(photoId);
+      }),
+    ),
+  ]);
+  const cursor: CursorRecord = {
+    stream: page.stream,
+    after: page.head,
+    headHash: page.headHash,
+    planRevision: page.plan?.revision ?? before?.planRevision ?? 0,
+  };
+  const pulled = new Set(page.entries.map((entry) => entry.id));
+  const missing = page.complete ? acked.filter((one) => !pulled.has(one.id)) : [];
+  const keptMissing = await Promise.all(missing.map((one) => tx.objectStore('entries').get(one.id)));
+
+  const writes: Promise<unknown>[] = [tx.objectStore('cursors').put(cursor)];
+  if (page.plan) writes.push(tx.objectStore('plans').put(page.plan));
+  for (const entry of page.entries) {
+    writes.push(
+      tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }),
+      tx.objectStore('strays').delete(entry.id),
+    );
+  }
+  for (const one of acked) {
+    if (pulled.has(one.id) || page.complete) writes.push(tx.objectStore('acked').delete(one.id));
+  }
+  const offeredAgain: OutboxRecord[] = [];
+  for (const kept of keptMissing) {
+    if (!kept) continue;
+    const record = offerAgain(kept.entry, kept.stream);
+    offeredAgain.push(record);
+    writes.push(tx.objectStore('outbox').put(record));
+  }
+  const photos = new Map<string, PhotoRecord>();
+  page.entries.forEach((entry, index) => {
+    const photo = photos.get(photoNamedBy(entry) ?? '') ?? photosNamed[index];
+    const next = photo && photoAfter(photo, entry);
+    if (next) photos.set(next.photoId, next);
+  });
+  for (const photo of photos.values()) writes.push(tx.objectStore('photos').put(photo));
+  await Promise.all([...writes, tx.done]);
+  return { cursor, photos: [...photos.values()], offeredAgain };
+}
+
+/** An entry that the server had taken in, as an outbox record once more. Its id is its own: nothing is doubled. */
+function offerAgain(entry: RecordedEntry, stream: string): OutboxRecord {
+  return {
+    id: entry.id,
+    deviceSeq: entry.deviceSeq,
+    stream,
+    envelope: envelopeOf(entry),
+    offeredAgain: true,
+    problem: null,
+  };
+}
+
+function photoNamedBy(entry: StoredEntry): string | null {
+  if (entry.type !== 'photo-stored' && entry.type !== 'photo-refused') return null;
+  return typeof entry.body.photoId === 'string' ? entry.body.photoId : null;
+}
+
+function photoAfter(photo: PhotoRecord, entry: StoredEntry): PhotoRecord | null {
+  if (entry.type === 'photo-stored') return { ...photo, progress: 'stored', problem: null };
+  if (photo.progress === 'stored' || photo.refusals.includes(entry.id)) return null;
+  const refusals = [...photo.refusals, entry.id];
+  const problem =
+    typeof entry.body.problem === 'string' ? entry.body.problem : 'The server could not use this photo.';
+  return refusals.length > REFUSALS_TO_RETRY
+    ? { ...photo, refusals, problem, progress: 'refused' }
+    : { ...photo, refusals, problem: null, progress: 'waiting', sentAt: null };
+}
+
+/** What starting a stream afresh has moved. */
+export interface RestartedStream {
+  offeredAgain: OutboxRecord[];
+  /** Own entries, waiting once more. */
+  waiting: RecordedEntry[];
+  /** Others' entries taken out of the sheet. */
+  strays: string[];
+}
+
+/**
+ * The server does not know this stream's head: it was restored from an older copy. What this device had sent is
+ * offered again; what others had sent is set aside until it comes back; the stream is pulled from its start. (SPEC 23)
+ */
+export async function restartStream(
+  db: PersonDatabase,
+  stream: string,
+  own: { personId: string; deviceId: string },
+): Promise<RestartedStream> {
+  const tx = db.transaction(['entries', 'cursors', 'acked', 'outbox', 'strays'], 'readwrite', {
+    durability: 'strict',
+  });
+  tx.done.catch(() => undefined);
+  const [kept, acked] = await Promise.all([
+    tx.objectStore('entries').index('stream').getAll(stream),
+    tx.objectStore('acked').index('stream').getAllKeys(stream),
+  ]);
+  const restarted: RestartedStream = { offeredAgain: [], waiting: [], strays: [] };
+  const writes: Promise<unknown>[] = [
+    // Revision 0 asks for the plan too: the restored one may be older than ours.
+    tx.objectStore('cursors').put({ stream, after: 0, headHash: null, planRevision: 0 }),
+    ...acked.map((id) => tx.objectStore('acked').delete(id)),
+  ];
+  for (const one of kept) {
+    const { entry } = one;
+    if (entry.seq === undefined) continue;
+    if (entry.authorId === own.personId && entry.deviceId === own.deviceId) {
+      const record = offerAgain(entry, stream);
+      const waiting: RecordedEntry = { ...envelopeOf(entry), authorRole: entry.authorRole };
+      restarted.offeredAgain.push(record);
+      restarted.waiting.push(waiting);
+      writes.push(
+        tx.objectStore('outbox').put(record),
+        tx.objectStore('entries').put({ ...one, entry: waiting }),
+      );
+    } else {
+      restarted.strays.push(one.id);
+      writes.push(tx.objectStore('strays').put(one), tx.objectStore('entries').delete(one.id));
+    }
+  }
+  await Promise.all([...writes, tx.done]);
+  return restarted;
+}

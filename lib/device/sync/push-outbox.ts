@@ -1,0 +1,108 @@
+import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL, pushResponse } from '@/lib/inspection/wire';
+import type { DeviceEnvironment } from '../device-environment';
+import type { PersonWork } from '../person-work';
+import type { OutboxRecord } from '../store/person-database';
+import { askServer, type Trouble } from './ask-server';
+
+/** A batch is cut before it grows beyond this, so that a slow line gets through one at all. */
+const MOST_CHARACTERS = 600_000;
+
+export type Pushed =
+  | { kind: 'all-offered'; sent: number; problem: string | null }
+  | { kind: 'other-person' }
+  | { kind: 'stopped' }
+  | Trouble;
+
+/**
+ * Offers the outbox, oldest first, in batches of one project. Ends at the first trouble with the line; what the server
+ * objects to as a whole is offered in halves until the one entry it is about is found. (SPEC 6 to 11)
+ * @param goOn asked before each batch: false once this person's work is no longer open
+ */
+export async function pushOutbox(
+  env: DeviceEnvironment,
+  work: PersonWork,
+  goOn: () => boolean,
+): Promise<Pushed> {
+  let after = 0;
+  let sent = 0;
+  let problem: string | null = null;
+  for (;;) {
+    const records = await work.outboxAfter(after, MOST_ENTRIES_IN_A_BATCH);
+    const last = records.at(-1);
+    if (!last) return { kind: 'all-offered', sent, problem };
+    after = last.deviceSeq;
+    const queue = batchesOf(records);
+    for (let batch = queue.shift(); batch; batch = queue.shift()) {
+      if (!goOn()) return { kind: 'stopped' };
+      const answer = await sendBatch(env, work, batch);
+      if (answer.kind === 'trouble') {
+        if (!answer.aboutRequest) return answer;
+        problem = answer.sentence;
+        if (batch.length > 1 && isAboutContent(answer)) {
+          const middle = Math.ceil(batch.length / 2);
+          queue.unshift(batch.slice(0, middle), batch.slice(middle));
+        } else {
+          for (const record of batch) await work.noteProblem(record, answer.sentence);
+        }
+        continue;
+      }
+      await work.setClockOffset(answer.clockOffsetMs);
+      const settled = await work.settle(batch, answer.data.outcomes);
+      if (settled.otherAuthor) return { kind: 'other-person' };
+      sent += settled.confirmedIds.length;
+    }
+  }
+}
+
+/** The request as such was not read: one entry in it may be why. */
+const isAboutContent = (trouble: Trouble): boolean =>
+  trouble.status === 400 || trouble.status === 413 || trouble.status === 422;
+
+function sendBatch(env: DeviceEnvironment, work: PersonWork, batch: readonly OutboxRecord[]) {
+  return askServer(
+    env,
+    {
+      method: 'POST',
+      path: '/api/sync/push',
+      json: {
+        protocol: PROTOCOL,
+        projectId: batch[0]?.envelope.projectId,
+        deviceId: work.deviceId,
+        sentAt: new Date(env.now()).toISOString(),
+        entries: batch.map((record) => record.envelope),
+      },
+      timeoutMs: 60_000,
+    },
+    pushResponse,
+  );
+}
+
+/** One project each, in the order in which they were made. */
+function batchesOf(records: readonly OutboxRecord[]): OutboxRecord[][] {
+  const byProject = new Map<string, OutboxRecord[]>();
+  for (const record of records) {
+    const list = byProject.get(record.envelope.projectId) ?? [];
+    list.push(record);
+    byProject.set(record.envelope.projectId, list);
+  }
+  return [...byProject.values()].flatMap(cutBySize);
+}
+
+function cutBySize(records: readonly OutboxRecord[]): OutboxRecord[][] {
+  const batches: OutboxRecord[][] = [];
+  let batch: OutboxRecord[] = [];
+  let characters = 0;
+  for (const record of records) {
+    // Only drawn signatures and long texts come near: the rest need not be measured to the letter.
+    const size = record.envelope.type === 'signature' ? JSON.stringify(record.envelope.body).length : 700;
+    if (batch.length > 0 && characters + size > MOST_CHARACTERS) {
+      batches.push(batch);
+      batch = [];
+      characters = 0;
+    }
+    batch.push(record);
+    characters += size;
+  }
+  if (batch.length > 0) batches.push(batch);
+  return batches;
+}
