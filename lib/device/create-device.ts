@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { readEntry, type BodyOf, type Entry } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { deviceIndex } from '@/lib/inspection/wire';
+import { browserEnvironment } from './browser-environment';
 import type { DeviceEnvironment } from './device-environment';
 import {
   DeviceError,
@@ -28,9 +29,10 @@ const anything = z.object({}).loose();
 
 /**
  * The phone's side: opens the work of whoever used this device last, at once and without a network, and then asks the
- * server who is signed in.
+ * server who is signed in. Only in a browser, never while a page is rendered.
+ * @param env another world than this browser, in tests
  */
-export function createDevice(env: DeviceEnvironment): RunningDevice {
+export function createDevice(env: DeviceEnvironment = browserEnvironment()): RunningDevice {
   return new FieldDevice(env).asDevice();
 }
 

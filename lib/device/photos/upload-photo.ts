@@ -16,7 +16,7 @@ const SLOWEST_BYTES_PER_MS = 6;
 
 /**
  * Sends one photo: asks for an address, puts the bytes there, says that they are there. The photo counts as stored
- * only once the server has read them and written so into the record. (SPEC 26, 27)
+ * only once the server has read them and written so into the record. (SPEC 27)
  */
 export async function uploadPhoto(
   env: Pick<DeviceEnvironment, 'fetch' | 'now' | 'after'>,

@@ -16,7 +16,7 @@ export interface PhotoToStore {
 
 /**
  * Writes an entry, its outbox record and (for a photo) the bytes in one strict transaction, and resolves once it is
- * complete: from then on the entry survives the browser being killed. (SPEC 1, 2)
+ * complete: from then on the entry survives the browser being killed. (SPEC 1, 2, 26)
  * @param floor the highest deviceSeq known from outside of the store
  * @param build makes the entry for the deviceSeq that it gets
  * @throws what the store throws, QuotaExceededError included; nothing is written then

@@ -10,7 +10,7 @@ export type Pulled =
   { kind: 'complete'; offeredAgain: boolean; problem: string | null } | { kind: 'stopped' } | Trouble;
 
 /**
- * Fetches what is new in the streams of every pour kept here, page by page, until each is complete. (SPEC 19 to 24)
+ * Fetches what is new in the streams of every pour kept here, page by page, until each is complete. (SPEC 20 to 24)
  * @param goOn asked before each page
  */
 export async function pullStreams(
