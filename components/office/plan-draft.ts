@@ -1,3 +1,4 @@
+import type { TemplateFor } from '@/lib/inspection/checklist-items';
 import type { CheckItem, DecisionRule, ElementType, Meeting, Plan } from '@/lib/inspection/plan';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import { exactText } from './length-words';
@@ -92,6 +93,8 @@ export interface PlanDraft {
   mixAggregate: string;
   lastWalk: boolean;
   elements: ElementDraft[];
+  /** The template to take; empty: by the types of the elements. */
+  template: '' | TemplateFor;
   /** Checks of the templates that are left out, by id. */
   leftOut: string[];
   /** The checklist of an earlier revision or pour; null: by the types of the elements. */
@@ -170,6 +173,7 @@ export const emptyPlanDraft = (): PlanDraft => ({
   mixAggregate: '',
   lastWalk: true,
   elements: [emptyElement()],
+  template: '',
   leftOut: [],
   checklist: null,
   measurements: [],
@@ -249,9 +253,10 @@ export function draftOfPlan(plan: Plan): PlanDraft {
         })),
         drawnPoints: String(face.points.filter((point) => point.kind === 'drawn').length || ''),
         chosenPoints: face.points
-          .filter((point) => point.kind === 'chosen')
+          .filter((point) => point.kind === 'chosen' && !point.id.startsWith(`${face.id}.recess-`))
           .map((point) => ({
-            id: point.id,
+            // Issuing puts the face's id in front; a revision has to give the planner's own key back.
+            id: point.id.startsWith(`${face.id}.`) ? point.id.slice(face.id.length + 1) : point.id,
             x: shown(point.xMm),
             y: shown(point.yMm),
             reason: point.reason ?? '',

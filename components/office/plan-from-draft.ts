@@ -111,17 +111,23 @@ function readElement(reader: Reader, at: string, element: ElementDraft): PlanInp
   };
 }
 
-/** The checks that the plan carries: an earlier revision's own, or the templates of its element types put together. */
+/** The checks that the plan carries: an earlier revision's own, a template, or those of its element types together. */
 export function draftChecklist(
-  draft: Pick<PlanDraft, 'checklist' | 'elements' | 'leftOut'>,
+  draft: Pick<PlanDraft, 'checklist' | 'elements' | 'leftOut' | 'template'>,
 ): PlanInput['checklist'] {
-  if (draft.checklist) {
-    return {
-      ...draft.checklist,
-      items: draft.checklist.items.filter((item) => !draft.leftOut.includes(item.id)),
-    };
-  }
-  const templates = [...new Set(draft.elements.map((element) => element.type))].map(checklistTemplate);
+  const whole = wholeChecklist(draft);
+  return { ...whole, items: whole.items.filter((item) => !draft.leftOut.includes(item.id)) };
+}
+
+/** The same, with what is left out. */
+export function wholeChecklist(
+  draft: Pick<PlanDraft, 'checklist' | 'elements' | 'template'>,
+): PlanInput['checklist'] {
+  if (draft.checklist) return draft.checklist;
+  const kinds = draft.template
+    ? [draft.template]
+    : [...new Set(draft.elements.map((element) => element.type))];
+  const templates = kinds.map((kind) => checklistTemplate(kind));
   const items = new Map(templates.flatMap((one) => one.items.map((item) => [item.id, item] as const)));
   return {
     template: templates
@@ -129,7 +135,7 @@ export function draftChecklist(
       .join(' + ')
       .slice(0, 80),
     version: Math.max(1, ...templates.map((one) => one.version)),
-    items: [...items.values()].filter((item) => !draft.leftOut.includes(item.id)),
+    items: [...items.values()],
   };
 }
 
