@@ -1,7 +1,7 @@
 import { notNegative, positive, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { atMost } from '@/lib/concrete/length';
-import { worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
+import type { LimitFinding } from '@/lib/concrete/limit-verdict';
 import { apartText, numberText } from '@/lib/concrete/number-text';
 import { MM_PER_FOOT } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
@@ -93,7 +93,8 @@ export interface EpoxyLimits {
 export const D3963_LIMITS: EpoxyLimits = { damagedMostPercent: 2, patchedMostPercent: 5 };
 
 const d3963 = trailSource('ASTM D3963/D3963M, damage and repair', '01/-15/-21', 'memory');
-const noFlame = trailSource('Maryland SHA 421.03.03', '', 'seen');
+/** Coated bars are sawn or sheared, never cut with a flame. */
+export const noFlameCutting = trailSource('Maryland SHA 421.03.03', '', 'seen');
 
 /**
  * Epoxy-coated bar: damage and patches on the worst foot (304.8 mm), never averaged over more; cut ends apart. Any damage
@@ -139,7 +140,7 @@ export function judgeEpoxyCoating(
         `${numberText(damaged.percent)} of ${most.damaged} %`,
       ),
       d3963('Patched in any foot, at most', `${numberText(patched.percent)} of ${most.patched} %`),
-      noFlame('Cut ends: sawn or sheared, then patched', `bare ${bare}, flame-cut ${flame}`),
+      noFlameCutting('Cut ends: sawn or sheared, then patched', `bare ${bare}, flame-cut ${flame}`),
     ],
   };
 }
@@ -184,125 +185,4 @@ export function judgeFrpDamage(
         worst,
         trail,
       };
-}
-
-export type BarMaterial = 'epoxy' | 'frp' | 'stainless';
-
-/**
- * What a material asks for beside its damage rule, as questions for the checklist, each with where it comes from.
- */
-export function materialRules(material: BarMaterial): TrailStep[] {
-  switch (material) {
-    case 'epoxy': {
-      const provisions = trailSource('CRSI suggested provisions; Maryland SHA 421', '', 'seen');
-      return [
-        provisions('Ties', 'nylon, epoxy- or plastic-coated wire'),
-        provisions('Supports', 'coated or non-metallic'),
-        noFlame('Cutting', 'saw or shear, then patch; no flame cutting'),
-      ];
-    }
-    case 'frp': {
-      const aci = trailSource('ACI 440.5, 2.1.3 and 3.2', '2008', 'partly-seen');
-      const bending = trailSource('ACI 440.5, 3.2', '2008', 'seen');
-      const flotation = trailSource('ACI 440.5, 3.2', '2008', 'memory');
-      const meter = trailSource('Florida DOT, FRP reinforcing', '', 'seen');
-      return [
-        bending('Field bending', 'none; bends are made in the factory before the bar cures, no heating'),
-        aci('Ties', 'plastic, nylon or coated wire'),
-        aci('Supports', 'non-metallic or coated'),
-        flotation('Flotation', 'the mat is tied down'),
-        meter(
-          'Cover meter',
-          'magnetic and radar meters do not see FRP: cover is read before the pour, or never',
-        ),
-      ];
-    }
-    case 'stainless': {
-      const practice = trailSource('state agencies’ practice', '', 'memory');
-      return [
-        practice('Ties', 'stainless, coated or non-metallic'),
-        practice('Supports', 'stainless or non-metallic'),
-        practice('Contact with carbon steel', 'none where specified: 1 in apart, or a sleeve'),
-      ];
-    }
-    default:
-      throw new ConcreteError('material', `"${String(material)}" is not one of the choices.`);
-  }
-}
-
-/** Whether an instrument sees a bar at all: a magnetic meter reads nothing over FRP and little over stainless steel. */
-export function instrumentSees(
-  instrument: 'tape' | 'gauge-block' | 'magnetic' | 'radar',
-  material: 'steel' | 'epoxy' | 'galvanised' | 'stainless' | 'frp',
-): { sees: boolean; reason: string } {
-  if (instrument === 'tape' || instrument === 'gauge-block')
-    return { sees: true, reason: 'Read by hand before the pour.' };
-  if (material === 'frp') return { sees: false, reason: 'This kind of meter does not see FRP.' };
-  if (material === 'stainless' && instrument === 'magnetic') {
-    return { sees: false, reason: 'A magnetic meter does not see austenitic stainless steel reliably.' };
-  }
-  return { sees: true, reason: 'The meter sees this bar.' };
-}
-
-/** Contact of stainless with carbon steel, counted on the site, where the contract forbids it. */
-export function judgeStainlessContact(found: { contactsFound: number; forbidden: boolean }): LimitFinding {
-  const contacts = whole('contacts', found.contactsFound, 0);
-  if (!found.forbidden)
-    return { verdict: 'met', side: null, reason: 'The contract does not forbid contact.' };
-  return contacts === 0
-    ? { verdict: 'met', side: null, reason: 'No carbon steel touches stainless steel.' }
-    : {
-        verdict: 'not-met',
-        side: 'high',
-        reason: `Carbon steel touches stainless steel at ${contacts} places.`,
-      };
-}
-
-const c1116 = trailSource('ASTM C1116/C1116M, batch ticket', '', 'memory');
-
-/**
- * Fibres by the batch ticket: type as specified, and the dosage at least what is specified less what the plan permits.
- * A ticket without type or dosage is not verified. Dosages in kg/m³.
- */
-export function judgeFibreTicket(
-  ticket: { fibreType: string | null; fibreKgPerM3: number | null },
-  specified: { fibreType: string; fibreKgPerM3: number; minusPercent: number },
-): LimitFinding & { trail: TrailStep[] } {
-  const dosage = positive('specified dosage', specified.fibreKgPerM3);
-  const minus = notNegative('dosage tolerance', specified.minusPercent);
-  if (minus >= 100) throw new ConcreteError('dosage tolerance', 'It is as large as the dosage.');
-  if (specified.fibreType.trim() === '') throw new ConcreteError('specified fibre', 'It has no type.');
-  const least = dosage * (1 - minus / 100);
-  const findings: LimitFinding[] = [];
-  if (ticket.fibreType === null || ticket.fibreType.trim() === '') {
-    findings.push({ verdict: 'not-verified', side: null, reason: 'The ticket does not name the fibre.' });
-  } else if (ticket.fibreType.trim().toLowerCase() !== specified.fibreType.trim().toLowerCase()) {
-    const reason = `The ticket names "${ticket.fibreType}", specified is "${specified.fibreType}".`;
-    findings.push({ verdict: 'not-met', side: null, reason });
-  }
-  if (ticket.fibreKgPerM3 === null) {
-    findings.push({ verdict: 'not-verified', side: null, reason: 'The ticket does not give the dosage.' });
-  } else if (!atMost(least, notNegative('dosage on the ticket', ticket.fibreKgPerM3))) {
-    const [is, limit] = apartText(ticket.fibreKgPerM3, least, 2);
-    findings.push({
-      verdict: 'not-met',
-      side: 'low',
-      reason: `Dosage is ${is} kg/m³, less than ${limit} kg/m³.`,
-    });
-  }
-  findings.push({ verdict: 'met', side: null, reason: 'Fibre and dosage as specified.' });
-  return {
-    ...worstFinding(findings),
-    trail: [
-      c1116('Fibre type and quantity per volume stand on the ticket', ticket.fibreType ?? 'no type'),
-      arithmetic('Least dosage = specified less tolerance', `${numberText(least, 3)} kg/m³`),
-    ],
-  };
-}
-
-/** Fibre dosage from the mass added to a load and the load's volume. */
-export function fibreDosage(massKg: number, volumeM3: number): { kgPerM3: number; trail: TrailStep[] } {
-  const kgPerM3 = positive('mass of fibres', massKg) / positive('volume of the load', volumeM3);
-  const value = `${numberText(massKg)} kg / ${numberText(volumeM3)} m³ = ${numberText(kgPerM3, 3)} kg/m³`;
-  return { kgPerM3, trail: [arithmetic('Dosage = mass / volume', value)] };
 }

@@ -67,8 +67,10 @@ export function aciTensionLap(query: {
   lapClass: LapClass;
   largerBar?: { diameterMm: number; development: DevelopmentLength };
 }): RequiredLap {
-  const largest = query.largerBar?.diameterMm ?? query.diameterMm;
-  if (usBarNumber(Math.max(largest, query.diameterMm)) > 11) {
+  const diameter = positive('bar diameter', query.diameterMm);
+  const larger = query.largerBar ? positive('larger bar', query.largerBar.diameterMm) : diameter;
+  if (larger < diameter) throw new ConcreteError('larger bar', 'It is the smaller one.');
+  if (usBarNumber(larger) > 11) {
     throw new ConcreteError('bar diameter', 'Bars larger than #11 are not lapped in tension: use couplers.');
   }
   const factor = query.lapClass === 'A' ? 1 : 1.3;
@@ -84,9 +86,9 @@ export function aciTensionLap(query: {
     ),
   ];
   if (!query.largerBar) return { lengthMm: lap, trail };
-  const larger = query.largerBar.development.lengthMm;
-  const lengthMm = Math.max(lap, larger);
-  const value = `${inchText(larger)} against ${inchText(lap)}: ${inchText(lengthMm)}`;
+  const largerLd = positive('development length of the larger bar', query.largerBar.development.lengthMm);
+  const lengthMm = Math.max(lap, largerLd);
+  const value = `${inchText(largerLd)} against ${inchText(lap)}: ${inchText(lengthMm)}`;
   trail.push(aciLapLimits('Two sizes: the greater of ld of the larger and the lap of the smaller', value));
   return { lengthMm, trail };
 }
@@ -144,7 +146,7 @@ export function aciCompressionLap(query: {
     );
   }
   if (query.largerBar) {
-    if (query.largerBar.diameterMm < query.diameterMm) {
+    if (positive('larger bar', query.largerBar.diameterMm) < query.diameterMm) {
       throw new ConcreteError('larger bar', 'It is the smaller one.');
     }
     const ldc = positive('compression development', query.largerBar.compressionDevelopmentMm) / MM_PER_INCH;

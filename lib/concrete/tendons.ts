@@ -105,11 +105,12 @@ export function tendonHeightTo(
   height: TendonDatum & { heightMm: number },
   to: TendonDatum['to'],
   ductDiameterMm: number,
-): number {
+): { heightMm: number; trail: TrailStep[] } {
   const diameter = positive('duct diameter', ductDiameterMm);
   const rank = { underside: 0, centre: 0.5, topside: 1 };
   const step = (rank[to] - rank[height.to]) * diameter;
-  const moved = finite('height', height.heightMm) + (height.from === 'soffit' ? step : -step);
+  const moved = positive('height', height.heightMm) + (height.from === 'soffit' ? step : -step);
   if (moved <= 0) throw new ConcreteError('height', 'The tendon would lie outside the member.');
-  return moved;
+  const value = `${numberText(height.heightMm, 2)} to ${numberText(moved, 2)} mm, duct ${numberText(diameter, 2)} mm`;
+  return { heightMm: moved, trail: [arithmetic(`From ${height.to} to ${to} of the tendon`, value)] };
 }

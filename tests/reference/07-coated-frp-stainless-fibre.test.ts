@@ -1,14 +1,13 @@
 import { describe, expect } from 'vitest';
+import { instrumentSees, materialRules } from '@/lib/concrete/bar-materials';
 import { judgeFieldBend } from '@/lib/concrete/bends';
 import {
   D3963_LIMITS,
   FRP_DAMAGE_MOST_PERCENT,
-  instrumentSees,
   judgeEpoxyCoating,
-  judgeFibreTicket,
   judgeFrpDamage,
-  materialRules,
 } from '@/lib/concrete/coatings';
+import { judgeFibreTicket } from '@/lib/concrete/fibres';
 import { numberAt, textAt, Topic } from './load-records';
 
 const topic = new Topic('07-coated-frp-stainless-fibre');
