@@ -108,11 +108,7 @@ function structuralClassFor(
     how.push(`${by > 0 ? '+' : '−'}${Math.abs(by)} ${why}`);
   };
   if (input.workingLifeYears === 100) move(2, 'for 100 years');
-  if (
-    input.strengthClass &&
-    cylinderStrength(input.strengthClass) >= STRENGTH_FOR_REDUCTION[exposure] &&
-    number > 0
-  ) {
+  if (input.strengthClass && cylinderStrength(input.strengthClass) >= STRENGTH_FOR_REDUCTION[exposure]) {
     move(-1, `for ${input.strengthClass}`);
   }
   if (input.slabGeometry) move(-1, 'for slab geometry');

@@ -19,7 +19,7 @@ const judge = (
   reading: ReadingToJudge,
   requirement: CoverLimits | null = atLeast38,
   instrument = good,
-  rule = simple,
+  rule: ReadingRule = simple,
 ) => judgeReading(reading, requirement, instrument, rule, 'mm');
 
 describe('limits', () => {
@@ -115,7 +115,7 @@ describe('guarded acceptance', () => {
 });
 
 describe('go/no-go', () => {
-  const block = (blockMm: number, passes: boolean, requirement = atLeast38, rule = simple) =>
+  const block = (blockMm: number, passes: boolean, requirement = atLeast38, rule: ReadingRule = simple) =>
     judge({ mm: null, goNoGo: { blockMm, passes } }, requirement, good, rule).verdict;
 
   test('proves "at least" or "less than" and nothing more', () => {
