@@ -83,6 +83,15 @@ export async function entriesByIds(tx: Tx, projectId: string, ids: string[]): Pr
   return rows.map((row) => sealedEntry(row as EntryRow));
 }
 
+/** The entry with this id, if it is in one of the projects opened to this transaction. */
+export async function findEntry(tx: Tx, entryId: string): Promise<SealedEntry | null> {
+  const row = await tx<EntryRow>('entries')
+    .whereRaw('project_id = any ((select app_projects())::uuid[])')
+    .where({ id: entryId })
+    .first('*');
+  return row ? sealedEntry(row as EntryRow) : null;
+}
+
 /** Adds entries with one statement; all values travel as one JSON parameter, which a batch of 500 needs to be quick. */
 export async function insertEntries(tx: Tx, entries: readonly SealedEntry[]): Promise<void> {
   if (entries.length === 0) return;
@@ -105,6 +114,14 @@ export interface StreamHead {
   hash: string | null;
 }
 export const EMPTY_STREAM: StreamHead = { seq: 0, hash: null };
+
+export async function streamHead(tx: Tx, projectId: string, pourId: string | null): Promise<StreamHead> {
+  const row = await tx<EntryRow>('entries')
+    .where({ project_id: projectId, pour_id: pourId })
+    .orderBy('seq', 'desc')
+    .first('seq', 'hash');
+  return row ? { seq: row.seq, hash: row.hash } : EMPTY_STREAM;
+}
 
 /** Which stream to read and from where: the entry at `from` itself comes along, so that its hash can be compared. */
 export interface StreamWanted {
@@ -141,21 +158,41 @@ export async function readStreams(
   return rows.map(sealedEntry);
 }
 
-/** One page of one stream after a cursor, in the order of the record. */
-export async function readPage(
+/**
+ * Pages of several streams after their cursors, in the order of the record, by pour (null: the project's own).
+ * @param most entries of a page; one more is read, which tells that there is a next page
+ */
+export async function readPages(
   tx: Tx,
   projectId: string,
-  pourId: string | null,
-  after: number,
+  wanted: readonly { pourId: string | null; after: number }[],
   most: number,
-): Promise<SealedEntry[]> {
-  const rows = await tx<EntryRow>('entries')
-    .where({ project_id: projectId, pour_id: pourId })
-    .where('seq', '>', after)
-    .orderBy('seq')
-    .limit(most)
-    .select('*');
-  return rows.map((row) => sealedEntry(row as EntryRow));
+): Promise<Map<string | null, SealedEntry[]>> {
+  const pours = wanted.filter((stream) => stream.pourId !== null);
+  const own = wanted.find((stream) => stream.pourId === null);
+  const { rows } = await tx.raw<{ rows: EntryRow[] }>(
+    `select page.* from unnest(cast(:pours as uuid[]), cast(:afters as bigint[])) as w(pour_id, after)
+       cross join lateral (select e.* from entries e where e.project_id = :projectId and e.pour_id = w.pour_id
+         and e.seq > w.after order by e.seq limit :more) as page
+     union all
+     select page.* from (select e.* from entries e where e.project_id = :projectId and e.pour_id is null
+       and e.seq > cast(:own as bigint) order by e.seq limit :more) as page`,
+    {
+      projectId,
+      pours: pours.map((stream) => stream.pourId),
+      afters: pours.map((stream) => stream.after),
+      own: own?.after ?? Number.MAX_SAFE_INTEGER,
+      more: most + 1,
+    },
+  );
+  const pages = new Map<string | null, SealedEntry[]>();
+  for (const row of rows) {
+    const page = pages.get(row.pour_id);
+    if (page) page.push(sealedEntry(row));
+    else pages.set(row.pour_id, [sealedEntry(row)]);
+  }
+  for (const page of pages.values()) page.sort((a, b) => a.seq - b.seq);
+  return pages;
 }
 
 /** Hashes of the entries at the given seqs, for comparing what devices hold with what the record holds. */

@@ -45,7 +45,7 @@ export async function poursByIds(tx: Tx, projectId: string, ids: readonly string
   if (ids.length === 0) return [];
   const rows = await tx('pours')
     .where({ project_id: projectId })
-    .whereRaw('id = any(?::uuid[])', [ids])
+    .whereRaw('id = any(?::uuid[])', [[...ids]])
     .select<PourRow[]>(...columns);
   return rows.map(pour);
 }
@@ -118,6 +118,27 @@ export async function insertPlan(tx: Tx, projectId: string, plan: Plan, digest: 
     .update({ plan_revision: plan.revision });
 }
 
+export interface PlanMark {
+  pourId: string;
+  revision: number;
+  digest: string;
+}
+
+/** Revision and digest of these pours' current plans; a pour without one is left out. */
+export async function currentPlanMarks(
+  tx: Tx,
+  projectId: string,
+  pourIds: readonly string[],
+): Promise<PlanMark[]> {
+  const { rows } = await tx.raw<{ rows: { pour_id: string; revision: number; digest: string }[] }>(
+    `select l.pour_id, l.revision, l.digest from pours p
+       join plans l on l.project_id = p.project_id and l.pour_id = p.id and l.revision = p.plan_revision
+     where p.project_id = ? and p.id = any(?::uuid[])`,
+    [projectId, [...pourIds]],
+  );
+  return rows.map((row) => ({ pourId: row.pour_id, revision: row.revision, digest: row.digest }));
+}
+
 /** The current plans of these pours; a pour without one is left out. */
 export async function currentPlans(
   tx: Tx,
@@ -129,7 +150,7 @@ export async function currentPlans(
     `select l.pour_id, l.document from pours p
        join plans l on l.project_id = p.project_id and l.pour_id = p.id and l.revision = p.plan_revision
      where p.project_id = ? and p.id = any(?::uuid[])`,
-    [projectId, pourIds],
+    [projectId, [...pourIds]],
   );
   return new Map(rows.map((row) => [row.pour_id, row.document]));
 }

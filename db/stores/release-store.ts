@@ -1,3 +1,4 @@
+import type { Role } from '@/lib/inspection/roles';
 import type { Tx } from '@/db/connection';
 
 export interface NewRelease {
@@ -40,6 +41,20 @@ export async function markVoids(tx: Tx, projectId: string, voids: readonly VoidM
      where r.project_id = ? and r.entry_id = v."releaseId" and r.void_entry_id is null`,
     [JSON.stringify(voids), projectId],
   );
+}
+
+/** Who gave the pour's release that is not void, with the role held then. */
+export async function standingReleaseAuthor(
+  tx: Tx,
+  projectId: string,
+  pourId: string,
+): Promise<{ id: string; role: Role } | null> {
+  const row = await tx('releases as r')
+    .join('entries as e', { 'e.project_id': 'r.project_id', 'e.id': 'r.entry_id' })
+    .where({ 'r.project_id': projectId, 'r.pour_id': pourId, 'r.void_entry_id': null })
+    .orderBy('r.number', 'desc')
+    .first<{ id: string; role: Role } | undefined>('e.author_id as id', 'e.author_role as role');
+  return row ?? null;
 }
 
 /** Project and pour of the release behind a token; the one question that needs no session. */
