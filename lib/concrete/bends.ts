@@ -4,7 +4,7 @@ import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
 import { atMost, MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
-import { FROM_MEMORY, trailSource } from '@/lib/concrete/trail-source';
+import { trailSource } from '@/lib/concrete/trail-source';
 import { usBarNumber } from '@/lib/concrete/us-bar-number';
 
 export type BendBasis = 'aci-318-19' | 'en-1992-1-1' | 'bs-8666';
@@ -12,6 +12,8 @@ export type BendBasis = 'aci-318-19' | 'en-1992-1-1' | 'bs-8666';
 export type BendUse = 'main' | 'tie';
 
 const aciMain = trailSource('ACI 318-19, Table 25.3.1', '2019', 'partly-seen');
+const aciMainDiameter = trailSource('ACI 318-19, Table 25.3.1', '2019', 'memory');
+const aciTieDiameter = trailSource('ACI 318-19, Table 25.3.2', '2019', 'memory');
 const aciTie = trailSource('ACI 318-19, Table 25.3.2', '2019', 'partly-seen');
 const en = trailSource('EN 1992-1-1, Table 8.1N', '2004', 'seen');
 const bs = trailSource('BS 8666, Table 2', '2005/2020', 'memory');
@@ -39,12 +41,12 @@ export function leastBendDiameter(query: { basis: BendBasis; use: BendUse; diame
     case 'aci-318-19': {
       const factor = aciFactor(query.use, usBarNumber(diameter));
       const leastMm = factor * diameter;
-      const source = query.use === 'main' ? aciMain : aciTie;
+      const source = query.use === 'main' ? aciMainDiameter : aciTieDiameter;
       const value = `${factor} × ${numberText(diameter, 3)} = ${numberText(leastMm, 2)} mm`;
       return {
         leastMm,
         factor,
-        trail: [source(`Least inside bend diameter ${factor} db`, value, FROM_MEMORY)],
+        trail: [source(`Least inside bend diameter ${factor} db`, value)],
       };
     }
     case 'en-1992-1-1': {

@@ -4,10 +4,11 @@ import { atLeast, MM_PER_INCH } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import { mpaToPsi } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
-import { FROM_MEMORY, trailSource } from '@/lib/concrete/trail-source';
+import { trailSource } from '@/lib/concrete/trail-source';
 import { usBarNumber } from '@/lib/concrete/us-bar-number';
 
 const factors = trailSource('ACI 318-19, Table 25.4.2.5', '2019', 'partly-seen');
+const factorsFromMemory = trailSource('ACI 318-19, Table 25.4.2.5', '2019', 'memory');
 const simple = trailSource('ACI 318-19, Table 25.4.2.3', '2019', 'seen');
 const general = trailSource('ACI 318-19, 25.4.2.4', '2019', 'partly-seen');
 const least = trailSource('ACI 318-19, 25.4.2.1', '2019', 'partly-seen');
@@ -30,7 +31,10 @@ export interface AciBar {
   clearSpacingMm: number;
 }
 
-/** The factors of ACI 318-19 Table 25.4.2.5, with √f'c in psi, capped at 100 (25.4.1.4). */
+/**
+ * The factors of ACI 318-19 Table 25.4.2.5, with √f'c in psi, capped at 100 (25.4.1.4). ψt, ψs, ψg and the cap of ψt ψe
+ * are from memory, check against the edition in force.
+ */
 interface AciFactors {
   psiT: number;
   psiE: number;
@@ -69,10 +73,10 @@ function aciFactors(bar: AciBar): AciFactors {
   const psiG = gradeFactor(fyPsi);
   const lambda = bar.lightweight ? 0.75 : 1;
   const steps = [
-    factors('Casting position ψt (more than 12 in of concrete below)', numberText(psiT)),
+    factorsFromMemory('Casting position ψt (more than 12 in of concrete below)', numberText(psiT)),
     factors('Coating ψe (cover below 3 db or clear spacing below 6 db)', numberText(psiE)),
-    factors('ψt ψe, at most 1.7', numberText(psiTE)),
-    factors('Grade ψg', numberText(psiG), FROM_MEMORY),
+    factorsFromMemory('ψt ψe, at most 1.7', numberText(psiTE)),
+    factorsFromMemory('Grade ψg', numberText(psiG)),
     factors('Concrete λ and √f’c, at most 100 psi', `${numberText(lambda)}; ${numberText(rootFcPsi, 3)} psi`),
   ];
   return { psiT, psiE, psiTE, psiS, psiG, lambda, rootFcPsi, fyPsi, dbIn: diameter / MM_PER_INCH, steps };
@@ -152,7 +156,7 @@ export function aciDevelopmentGeneral(
     (3 / 40) * (f.fyPsi / (f.lambda * f.rootFcPsi)) * ((f.psiTE * f.psiS * f.psiG) / ratio) * f.dbIn;
   return withLeast(inches, [
     ...f.steps,
-    factors('Size ψs (#6 and smaller 0.8)', numberText(f.psiS)),
+    factorsFromMemory('Size ψs (#6 and smaller 0.8)', numberText(f.psiS)),
     general(
       '(cb + Ktr)/db, Ktr = 40 Atr/(s n), at most 2.5',
       `(${numberText(cb, 3)} + ${numberText(ktr, 3)}) / ${numberText(f.dbIn, 3)}: ${numberText(ratio, 3)}`,
