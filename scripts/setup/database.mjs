@@ -16,7 +16,7 @@ export async function prepareDatabase(cluster, database, secrets) {
       const { rowCount } = await client.query('select 1 from pg_roles where rolname = $1', [name]);
       const verb = rowCount ? 'alter' : 'create';
       await client.query(
-        `${verb} role ${name} login nosuperuser nobypassrls noinherit password ${client.escapeLiteral(password)}`,
+        `${verb} role ${name} login nosuperuser nobypassrls inherit password ${client.escapeLiteral(password)}`,
       );
     }
     const { rowCount } = await client.query('select 1 from pg_database where datname = $1', [database]);
