@@ -36,6 +36,10 @@ function placeIn(parts: string[], draft: PlanDraft): string {
   if (ofFace.has(last)) return `${facePath}.${last}`;
   if (parts[4] === 'requirements') {
     const at = Math.max(0, indexOf(face.requirements, parts[5]));
+    // The field for the minus is there only once "by contract" is chosen.
+    if (last === 'contractMinus' && face.requirements[at]?.deviation === 'basis') {
+      return `${facePath}.requirements.${at}.deviation`;
+    }
     return `${facePath}.requirements.${at}.${renamed[last] ?? last}`;
   }
   return `${facePath}.${last === 'count' ? 'drawnPoints' : last}`;

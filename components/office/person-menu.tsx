@@ -22,8 +22,7 @@ export function PersonMenu({
     setBusy(true);
     setProblem(false);
     try {
-      await signOut({ redirect: false });
-      window.location.assign('/sign-in');
+      await signOut({ callbackUrl: '/sign-in' });
     } catch {
       setProblem(true);
       setBusy(false);

@@ -1,5 +1,5 @@
 import type { TemplateFor } from '@/lib/inspection/checklist-items';
-import type { CheckItem, DecisionRule, ElementType, Meeting, Plan } from '@/lib/inspection/plan';
+import type { CheckItem, DecisionRule, ElementType, Meeting, Plan, Requirement } from '@/lib/inspection/plan';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import { exactText } from './length-words';
 
@@ -111,7 +111,7 @@ export const emptyRequirement = (): RequirementDraft => ({
   steel: 'outermost bar',
   barDesignation: '',
   contractSpecified: '',
-  deviation: 'basis',
+  deviation: 'contract',
   contractMinus: '',
   contractPlus: '',
 });
@@ -183,6 +183,27 @@ const ruleDraft = (rule: DecisionRule): Pick<PlanDraft, 'rule' | 'guard'> =>
   rule.kind === 'simple'
     ? { rule: 'simple', guard: '' }
     : { rule: 'guarded', guard: rule.guardMm === undefined ? '' : String(rule.guardMm) };
+
+/**
+ * A requirement as it was typed: what the trail says came from the contract. What came from a code stays empty, so that
+ * issuing again works it out again. The words are those of lib/concrete/cover-contract; a test holds the two together.
+ */
+function requirementDraft(one: Requirement, shown: (mm: number) => string): RequirementDraft {
+  const byContract = (rule: RegExp) =>
+    one.trail.some((step) => step.provenance === 'contract' && rule.test(step.rule));
+  const neverLess = byContract(/^Never less/);
+  const minus = byContract(/^Permitted reduction/);
+  const plus = byContract(/^Permitted increase/) && one.mostAcceptedMm !== null;
+  return {
+    id: one.id,
+    steel: one.steel,
+    barDesignation: one.barDesignation,
+    contractSpecified: byContract(/^Specified cover/) ? shown(one.specifiedMm) : '',
+    deviation: neverLess ? 'never-less' : minus || plus ? 'contract' : 'basis',
+    contractMinus: minus ? shown(one.specifiedMm - one.leastAcceptedMm) : '',
+    contractPlus: plus ? shown((one.mostAcceptedMm ?? 0) - one.specifiedMm) : '',
+  };
+}
 
 /**
  * The form filled from an issued plan. Ids are kept, so that a revision's points keep theirs; a copy for another pour
@@ -261,22 +282,7 @@ export function draftOfPlan(plan: Plan): PlanDraft {
             y: shown(point.yMm),
             reason: point.reason ?? '',
           })),
-        requirements: face.requirements.map((one) => {
-          const minus = one.specifiedMm - one.leastAcceptedMm;
-          const byContract = one.trail.some(
-            (step) => step.provenance === 'contract' && /deviation|never/i.test(step.rule),
-          );
-          return {
-            id: one.id,
-            steel: one.steel,
-            barDesignation: one.barDesignation,
-            contractSpecified: shown(one.specifiedMm),
-            deviation: !byContract ? 'basis' : minus < 1e-6 ? 'never-less' : 'contract',
-            contractMinus: byContract && minus >= 1e-6 ? shown(minus) : '',
-            contractPlus:
-              byContract && one.mostAcceptedMm !== null ? shown(one.mostAcceptedMm - one.specifiedMm) : '',
-          };
-        }),
+        requirements: face.requirements.map((one) => requirementDraft(one, shown)),
       })),
     })),
   };

@@ -2,11 +2,12 @@
 
 import { toNestErrors } from '@hookform/resolvers';
 import { useRouter } from 'next/navigation';
-import { useEffect, useMemo, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState, useSyncExternalStore } from 'react';
 import { FormProvider, useFieldArray, useForm, type FieldPath, type Resolver } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { SheetFrame } from '@/components/ui/sheet-frame';
+import { Spinner } from '@/components/ui/spinner';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import type { FieldProblem } from '@/lib/inspection/app-error';
 import { issuePlan } from '@/lib/inspection/issue-plan';
@@ -28,8 +29,8 @@ export interface PlanFormProps {
   projectId: string;
   timeZone: string;
   personId: string;
-  /** Null: a new pour. Otherwise the pour whose plan is revised, with the letter that the revision will have. */
-  revises: { pourId: string; letter: string } | null;
+  /** Null: a new pour. Otherwise the pour whose plan is revised, from which revision, and the next one's letter. */
+  revises: { pourId: string; basedOn: number; letter: string } | null;
   /** Told above the form: what it was copied from. */
   copiedFrom: string | null;
 }
@@ -64,27 +65,33 @@ const resolverFor =
     return { values: {}, errors: toNestErrors(flat, options) };
   };
 
+const never = () => () => undefined;
+
 /** The plan of a pour as a form: issues a new pour's first plan, or a revision of the one in force. */
-export function PlanForm({ start, projectId, timeZone, personId, revises, copiedFrom }: PlanFormProps) {
+export function PlanForm(props: PlanFormProps) {
+  // What this browser kept of the form is known in the browser only; the form opens with it.
+  const inBrowser = useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );
+  return inBrowser ? <OpenPlanForm {...props} /> : <Spinner label="Opening the form" />;
+}
+
+function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFrom }: PlanFormProps) {
   const router = useRouter();
   const draftName = `${personId}.${revises?.pourId ?? projectId}.${revises?.letter ?? 'new'}`;
-  const [restored, setRestored] = useState<string | null>(null);
+  const [kept] = useState(() => readKeptDraft(draftName));
+  const [restored, setRestored] = useState(kept !== null);
   const [failure, setFailure] = useState<Extract<Posted, { ok: false }> | null>(null);
   const sent = useRef(false);
   const resolver = useMemo(() => resolverFor(projectId, timeZone), [projectId, timeZone]);
-  const form = useForm<PlanDraft>({ defaultValues: start, resolver, mode: 'onBlur' });
+  const form = useForm<PlanDraft>({
+    defaultValues: kept ? { ...start, ...kept.draft } : start,
+    resolver,
+    mode: 'onBlur',
+  });
   const elements = useFieldArray({ control: form.control, name: 'elements', keyName: 'key' });
-
-  const opened = useRef(false);
-  useEffect(() => {
-    // Only when the form opens: what is typed afterwards is newer than what was kept.
-    if (opened.current) return;
-    opened.current = true;
-    const kept = readKeptDraft(draftName);
-    if (!kept) return;
-    form.reset({ ...start, ...kept.draft }, { keepDefaultValues: true });
-    setRestored(kept.at);
-  }, [draftName, form, start]);
 
   useEffect(() => {
     let timer: ReturnType<typeof setTimeout> | undefined;
@@ -106,10 +113,10 @@ export function PlanForm({ start, projectId, timeZone, personId, revises, copied
   const startAfresh = () => {
     forgetDraft(draftName);
     form.reset(start);
-    setRestored(null);
+    setRestored(false);
   };
 
-  const submit = form.handleSubmit(async (draft) => {
+  const send = async (draft: PlanDraft) => {
     setFailure(null);
     const read = pourFromDraft(draft, projectId, timeZone);
     if (!read.ok) return;
@@ -138,13 +145,17 @@ export function PlanForm({ start, projectId, timeZone, personId, revises, copied
     forgetDraft(draftName);
     router.push(`/pours/${revises?.pourId ?? textOf(answer.data, 'pourId') ?? ''}`);
     router.refresh();
-  });
+  };
 
   const { errors, isSubmitting, submitCount } = form.formState;
   const wrong = submitCount > 0 && Object.keys(errors).length > 0;
   return (
     <FormProvider {...form}>
-      <form onSubmit={(event) => void submit(event)} noValidate className="grid gap-6 *:min-w-0">
+      <form
+        onSubmit={(event) => void form.handleSubmit(send)(event)}
+        noValidate
+        className="grid gap-6 *:min-w-0"
+      >
         {restored && (
           <Notice
             tone="info"

@@ -68,14 +68,17 @@ function readFace(
     })),
     requirements: face.requirements.map((one, index) => {
       const path = `${at}.requirements.${index}`;
-      const contract = one.deviation === 'contract';
       return {
         id: one.id,
         steel: one.steel,
         barDesignation: one.barDesignation,
         contractSpecifiedMm: reader.optionalLength(`${path}.contractSpecified`, one.contractSpecified),
-        contractMinusMm: contract ? reader.length(`${path}.contractMinus`, one.contractMinus) : null,
-        contractPlusMm: contract ? reader.optionalLength(`${path}.contractPlus`, one.contractPlus) : null,
+        contractMinusMm:
+          one.deviation === 'contract'
+            ? reader.optionalLength(`${path}.contractMinus`, one.contractMinus)
+            : null,
+        contractPlusMm:
+          one.deviation === 'basis' ? null : reader.optionalLength(`${path}.contractPlus`, one.contractPlus),
         neverLess: one.deviation === 'never-less',
       };
     }),

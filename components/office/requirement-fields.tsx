@@ -46,16 +46,21 @@ export function RequirementFields({
           label="What may be less"
           hint="The contract documents govern"
           options={[
-            { value: 'basis', label: basis === 'contract' ? 'Nothing named' : `By ${basisWords[basis]}` },
+            ...(basis === 'contract' ? [] : [{ value: 'basis', label: `By ${basisWords[basis]}` }]),
             { value: 'contract', label: 'By contract: minus and plus' },
             { value: 'never-less', label: 'Never less' },
           ]}
         />
         {deviation === 'contract' && (
-          <>
-            <PlanText path={`${path}.contractMinus`} label="Minus" unit={units} />
-            <PlanText path={`${path}.contractPlus`} label="Plus" optional unit={units} />
-          </>
+          <PlanText
+            path={`${path}.contractMinus`}
+            label="Minus"
+            unit={units}
+            optional={basis !== 'contract'}
+          />
+        )}
+        {deviation !== 'basis' && (
+          <PlanText path={`${path}.contractPlus`} label="Plus" optional unit={units} />
         )}
       </div>
       {onRemove && (

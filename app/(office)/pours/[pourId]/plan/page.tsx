@@ -57,7 +57,11 @@ export default async function RevisePlanPage({ params }: { params: Promise<{ pou
           projectId={header.project.id}
           timeZone={timeZone}
           personId={viewer.personId}
-          revises={{ pourId: sheet.pourId, letter: revisionLetter(sheet.plan.revision + 1) }}
+          revises={{
+            pourId: sheet.pourId,
+            basedOn: sheet.plan.revision,
+            letter: revisionLetter(sheet.plan.revision + 1),
+          }}
           copiedFrom={null}
         />
       )}
