@@ -108,10 +108,19 @@ function Tick({
           fontSize="13"
           fontWeight={mark === 'not-met-low' || mark === 'not-met-high' ? 700 : 500}
           fill={colour}
-          textDecoration={struck ? 'line-through' : undefined}
+          stroke={Math.abs(figureY - 4 - faceY) < layout.bandPx ? 'var(--band)' : 'var(--sheet)'}
+          strokeWidth="4"
+          paintOrder="stroke"
         >
           {text}
         </text>
+        {struck && text !== null && (
+          <path
+            d={`M${-text.length * 4.4} ${figureY - 4.5}h${text.length * 8.8}`}
+            stroke={colour}
+            strokeWidth="1.75"
+          />
+        )}
       </g>
     </>
   );

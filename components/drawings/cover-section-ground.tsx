@@ -7,6 +7,8 @@ export interface CoverSectionLayout extends CoverSectionScale {
   /** Where the face is in a row, and how tall a row is, px. */
   faceY: number;
   height: number;
+  /** How deep the band below the least accepted cover is, px. */
+  bandPx: number;
 }
 
 /** Where a depth is in a row, px from its top. */

@@ -63,6 +63,7 @@ export function CoverSection({
   const body = Math.ceil(scale.depthPx + scale.barPx + 4);
   const layout: CoverSectionLayout = {
     ...scale,
+    bandPx: Math.max(0, leastAcceptedMm) * scale.perMm,
     faceUp,
     faceY: faceUp ? head : head + body,
     height: head + body + foot,
@@ -85,7 +86,7 @@ export function CoverSection({
           style={{
             paddingLeft: axisPx,
             minHeight: layout.height,
-            gridTemplateColumns: `repeat(auto-fill, minmax(${scale.columnPx}px, 1fr))`,
+            gridTemplateColumns: `repeat(${readings.length < 6 ? 'auto-fill' : 'auto-fit'}, minmax(${readings.length < 6 ? Math.max(scale.columnPx, 64) : scale.columnPx}px, 1fr))`,
           }}
         >
           {readings.map((reading, index) => (

@@ -45,7 +45,12 @@ export function sectionScale(
     perMm: scale,
     acrossPx,
     breakPx: broken ? reach('near') * scale + gapPx / 2 : null,
-    at: (face, mm) => (face === 'near' ? mm * scale : acrossPx - mm * scale),
+    at: (face, mm) => {
+      const fromNear = face === 'near' ? mm : thicknessMm - mm;
+      // Where the middle is left out, what lies past one face's piece is measured from the other.
+      const nearPiece = broken ? fromNear < thicknessMm - reach('far') : face === 'near';
+      return nearPiece ? fromNear * scale : acrossPx - (thicknessMm - fromNear) * scale;
+    },
   };
 }
 

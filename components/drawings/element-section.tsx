@@ -27,7 +27,7 @@ export interface ElementSectionProps {
   format: (mm: number) => string;
 }
 
-const room = { across: 190, along: 176, side: 62 };
+const room = { across: 160, along: 182, side: 74 };
 
 /**
  * A piece of an element, cut: both faces with what lies beyond them, its layers as discs where the section cuts them
@@ -42,7 +42,11 @@ export function ElementSection(props: ElementSectionProps) {
   const across = scale.acrossPx;
   const inOrder = [...layers].sort((a, b) => scale.at(a.face, a.depthMm) - scale.at(b.face, b.depthMm));
   const middle = (layer: SectionLayer) => scale.at(layer.face, layer.depthMm + layer.diameterMm / 2);
-  const height = upright ? room.along + 44 + inOrder.length * 16 : across + 44;
+  const height = upright
+    ? room.along +
+      36 +
+      Math.max(...(['near', 'far'] as const).map((f) => layers.filter((l) => l.face === f).length)) * 16
+    : across + 52;
   const faces = [
     { ...near, at: 0, into: 1, side: 'near' as const },
     { ...far, at: across, into: -1, side: 'far' as const },
@@ -165,8 +169,13 @@ interface LetteringProps {
   middle: (layer: SectionLayer) => number;
 }
 
-const figures = { className: 'font-figure', fontSize: 12, fontWeight: 500, fill: 'var(--pencil)' };
-const letters = { className: 'font-label', fontSize: 13, fontWeight: 500, fill: 'var(--ink)' };
+const figures = { className: 'font-figure', fontSize: 13, fontWeight: 500, fill: 'var(--pencil)' };
+const letters = { className: 'font-label', fontSize: 14, fontWeight: 500, fill: 'var(--ink)' };
+
+/** What does not fit beside the section is cut; the text alternative has it whole. */
+function shortLabel(label: string): string {
+  return label.length > 19 ? `${label.slice(0, 18)}…` : label;
+}
 
 function LevelLettering({
   near,
@@ -205,10 +214,10 @@ function LevelLettering({
       <text x={room.side - 21} y={across / 2 + 4} textAnchor="end" {...figures} fill="var(--ink)">
         {format(thicknessMm)}
       </text>
-      <text x={room.side} y={-15} {...letters} fill="var(--pencil)" fontSize="12">
+      <text x={room.side} y={-15} {...letters} fill="var(--pencil)" fontSize="13">
         {near.name}
       </text>
-      <text x={room.side} y={across + 21} {...letters} fill="var(--pencil)" fontSize="12" dy="1">
+      <text x={room.side} y={across + 27} {...letters} fill="var(--pencil)" fontSize="13">
         {far.name}
       </text>
       {inOrder.map((layer, index) => {
@@ -221,7 +230,7 @@ function LevelLettering({
               fill="none"
             />
             <text x={right + 23} y={y + 4} {...letters}>
-              {layer.label}
+              {shortLabel(layer.label)}
             </text>
           </g>
         );
@@ -244,14 +253,14 @@ function UprightLettering({ near, far, across, thicknessMm, format, inOrder, mid
         <g key={layer.id}>
           <path d={`M${x} ${foot + 3}V${y}h${out * 8}`} stroke="var(--pencil)" fill="none" />
           <text x={x + out * 11} y={y + 4} textAnchor={anchor} {...letters}>
-            {layer.label}
+            {shortLabel(layer.label)}
           </text>
         </g>
       );
     });
   const face = (f: SectionFace, x: number, anchor: 'end' | 'start') => (
     <g>
-      <text x={x} y={40} textAnchor={anchor} {...letters} fill="var(--pencil)" fontSize="12">
+      <text x={x} y={40} textAnchor={anchor} {...letters} fill="var(--pencil)" fontSize="13">
         {f.name}
       </text>
       {f.specifiedMm !== undefined && (

@@ -1,20 +1,10 @@
 import { useId, type ReactNode } from 'react';
 import { DimensionLine } from './dimension-line';
 import { faceProportion, gridSteps, type FaceRectangle } from './face-map-geometry';
-import { Mark } from './mark';
+import { FaceMapMark, type FaceMapPoint } from './face-map-mark';
 import { markWords, type MarkKind } from './mark-words';
 
-export interface FaceMapPoint {
-  id: string;
-  label: string;
-  xMm: number;
-  yMm: number;
-  mark: MarkKind;
-  /** Chosen by the planner where failures live: drawn with a corner mark. */
-  chosen?: boolean;
-  /** A spot reading taken elsewhere: its label is set in slanted letters. */
-  spot?: boolean;
-}
+export type { FaceMapPoint } from './face-map-mark';
 
 export interface FaceMapProps {
   name?: string;
@@ -46,7 +36,7 @@ export function FaceMap(props: FaceMapProps) {
   for (const point of points) counts.set(point.mark, (counts.get(point.mark) ?? 0) + 1);
   const summary = [...counts].map(([kind, count]) => `${count} ${markWords[kind]}`).join(', ');
   return (
-    <figure className="grid grid-cols-[minmax(0,1fr)_auto] gap-1.5 p-2">
+    <figure className="grid grid-cols-[minmax(0,1fr)_auto] content-start gap-1.5 p-2">
       <div className="relative w-full self-start" style={{ aspectRatio: String(aspect) }}>
         <svg
           width="100%"
@@ -117,46 +107,18 @@ function FaceMapContent({
         </g>
       ))}
       <rect width="100%" height="100%" fill="none" stroke="var(--ink)" strokeWidth="3" />
-      {points.map((point) => {
-        const selected = point.id === selectedId;
-        const nearRight = point.xMm > widthMm * 0.9;
-        return (
-          <svg key={point.id} x={x(point.xMm)} y={y(point.yMm)} overflow="visible" width="1" height="1">
-            {selected && (
-              <g fill="none" stroke="var(--chalk)">
-                <circle r={r + 11} fill="var(--sheet)" fillOpacity="0.8" strokeWidth="3" />
-                <path d={`M${-r - 17} 0h6M${r + 11} 0h6M0 ${-r - 17}v6M0 ${r + 11}v6`} strokeWidth="3" />
-              </g>
-            )}
-            {point.chosen && (
-              <path
-                d={`M${-r - 4} ${-r}v-4h4M${r + 4} ${r}v4h-4`}
-                fill="none"
-                stroke="var(--ink)"
-                strokeWidth="1.4"
-              />
-            )}
-            <Mark kind={point.mark} r={r} />
-            {(labels || selected) && (
-              <text
-                x={nearRight ? -r - 4 : r + 4}
-                y={-r - 1}
-                textAnchor={nearRight ? 'end' : 'start'}
-                className="font-label font-medium"
-                fontStyle={point.spot ? 'italic' : undefined}
-                fontSize={selected ? 15 : 12}
-                fontWeight={selected ? 600 : 500}
-                fill={selected ? 'var(--chalk)' : 'var(--ink)'}
-                stroke="var(--sheet)"
-                strokeWidth="3"
-                paintOrder="stroke"
-              >
-                {point.label}
-              </text>
-            )}
-          </svg>
-        );
-      })}
+      {points.map((point) => (
+        <svg key={point.id} x={x(point.xMm)} y={y(point.yMm)} overflow="visible" width="1" height="1">
+          <FaceMapMark
+            point={point}
+            r={r}
+            selected={point.id === selectedId}
+            labelled={labels || point.id === selectedId}
+            nearRight={point.xMm > widthMm * 0.9}
+            nearTop={point.yMm > heightMm * 0.92}
+          />
+        </svg>
+      ))}
     </>
   );
 }

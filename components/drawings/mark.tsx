@@ -72,7 +72,7 @@ export function MarkIcon({
       width={size}
       height={size}
       className={className}
-      style={{ flex: 'none', verticalAlign: '-0.25em' }}
+      style={{ display: 'inline-block', flex: 'none', verticalAlign: '-0.25em' }}
       role={text ? 'img' : undefined}
       aria-label={text}
       aria-hidden={text ? undefined : true}

@@ -147,6 +147,14 @@ function TimelineRow({
       }`}
       style={{ '--x': `${x}%` } as CSSProperties}
     >
+      {nowBefore && (
+        <span
+          aria-hidden="true"
+          className="absolute -top-2.5 right-0 bg-sheet pl-2 font-label text-label leading-4 font-semibold text-chalk @2xl:hidden"
+        >
+          now
+        </span>
+      )}
       <svg
         width="100%"
         height="48"
@@ -180,7 +188,7 @@ function TimelineRow({
         }`}
         style={{ '--d': `${deadlineX}%` } as CSSProperties}
       >
-        <p className="truncate font-label text-lead leading-tight font-semibold">
+        <p className="font-label text-lead leading-tight font-semibold @2xl:truncate">
           <Link
             href={pour.href}
             prefetch={false}
@@ -189,9 +197,9 @@ function TimelineRow({
             {pour.number} {pour.title}
           </Link>
         </p>
-        <p className="truncate font-label text-label font-medium">
+        <p className="font-label text-label font-medium @2xl:truncate">
           <span className="bg-sheet">
-            <span className="font-figure text-xs text-pencil">{format(pour.plannedAt, 'short')}</span>{' '}
+            <span className="mr-2 font-figure text-xs text-pencil">{format(pour.plannedAt, 'short')}</span>
             <span style={{ color: colour }}>{pour.words}</span>
           </span>
         </p>

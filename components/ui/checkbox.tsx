@@ -24,7 +24,10 @@ export function Checkbox({ label, hint, error, id, className, type = 'checkbox',
         <span>{label}</span>
       </label>
       {hint && (
-        <p id={`${fieldId}-hint`} className="pl-7.5 text-label text-pencil">
+        <p
+          id={`${fieldId}-hint`}
+          className="-mt-1.5 pl-7.5 text-label text-pencil in-data-[density=field]:pl-9.5"
+        >
           {hint}
         </p>
       )}

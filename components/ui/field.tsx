@@ -66,4 +66,4 @@ export function FieldError({ id, error }: { id: string; error?: string | null })
 export const controlClasses =
   'w-full min-h-target border border-pencil bg-sheet px-2.5 py-1 text-body text-ink ' +
   'hover:border-ink aria-invalid:border-2 aria-invalid:border-hold ' +
-  'disabled:border-dashed disabled:text-pencil read-only:bg-paper/50';
+  'disabled:border-dashed disabled:text-pencil';

@@ -28,7 +28,7 @@ export function SheetFrame({
 }: SheetFrameProps) {
   const Heading = `h${level}` as const;
   return (
-    <section {...rest} className={classNames('sheet-frame', className)}>
+    <section {...rest} className={classNames('sheet-frame min-w-0', className)}>
       {titleBlock && titleBlockAt === 'head' && <div className="border-b border-ink">{titleBlock}</div>}
       {(heading || aside) && (
         <header className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1 px-4 pt-3">

@@ -54,7 +54,7 @@ export function Th({
       className={classNames(
         'px-2 py-1.5 align-bottom font-label',
         scope === 'row'
-          ? 'border-b border-rule align-top text-body font-semibold'
+          ? 'border-b border-rule align-top text-body font-semibold whitespace-nowrap'
           : 'border-y border-ink text-label font-semibold text-pencil',
         figure && 'text-right',
         className,
@@ -70,7 +70,7 @@ export function Td({ figure, className, ...rest }: ComponentProps<'td'> & CellPr
       {...rest}
       className={classNames(
         'border-b border-rule px-2 py-1.5 align-top',
-        figure && 'text-right font-figure font-medium whitespace-nowrap',
+        figure ? 'text-right font-figure font-medium whitespace-nowrap' : 'min-w-24',
         className,
       )}
     />

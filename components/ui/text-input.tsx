@@ -34,6 +34,7 @@ export function TextInput({
           {...fieldAria(fieldId, { hint, error })}
           className={classNames(
             controlClasses,
+            'read-only:bg-paper/50',
             figure && 'text-right font-figure font-medium',
             Boolean(unit) && 'pr-12',
             className,

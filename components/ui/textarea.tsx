@@ -27,7 +27,7 @@ export function Textarea({
         {...rest}
         rows={rows}
         {...fieldAria(fieldId, { hint, error })}
-        className={classNames(controlClasses, 'py-2', className)}
+        className={classNames(controlClasses, 'py-2 read-only:bg-paper/50', className)}
       />
     </Field>
   );

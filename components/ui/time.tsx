@@ -1,3 +1,4 @@
+import { classNames } from './class-names';
 import { formatInstant, type InstantStyle } from './format-instant';
 
 /** An instant in the time of a place: people see the project's time, whatever their device is set to. */
@@ -18,7 +19,7 @@ export function Time({
     <time
       dateTime={instant}
       title={`${formatInstant(instant, timeZone, 'full')}, time of ${timeZone.replaceAll('_', ' ')}`}
-      className={className}
+      className={classNames('whitespace-nowrap', className)}
     >
       {formatInstant(instant, timeZone, format)}
     </time>
