@@ -1,4 +1,4 @@
-import { findBar } from '@/lib/concrete/bars';
+import { findBarFor } from '@/lib/concrete/bars';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { coverRequirement } from '@/lib/concrete/cover-requirement';
 import { defaultPointCount, drawPoints } from '@/lib/concrete/reading-points';
@@ -22,17 +22,18 @@ function at<T>(path: string, compute: () => T): T {
   try {
     return compute();
   } catch (error) {
-    if (error instanceof ConcreteError) throw new ConcreteError(`${path}.${error.field}`, error.reason);
+    if (error instanceof ConcreteError)
+      throw new ConcreteError(`${path}.${error.field}`, error.reason, error.kind);
     throw error;
   }
 }
 
-function barDiameter(designation: string): number {
-  const bar = findBar(designation);
+function barDiameter(designation: string, basis: PlanInput['basis']): number {
+  const bar = findBarFor(designation, basis);
   if (!bar)
     throw new ConcreteError(
       'barDesignation',
-      `There is no bar "${designation}" in the bar tables. Write it as #5, 16 or 15M.`,
+      `There is no bar "${designation}" in the bar tables. Write it as #5, 16 mm, 15M, N16 or IS 16.`,
     );
   return bar.diameterMm;
 }
@@ -43,7 +44,7 @@ function issueRequirement(
   face: FaceInput,
   wanted: FaceInput['requirements'][number],
 ): Requirement {
-  const barDiameterMm = barDiameter(wanted.barDesignation);
+  const barDiameterMm = barDiameter(wanted.barDesignation, input.basis);
   const computed = coverRequirement({
     basis: input.basis,
     element: element.type,
@@ -58,6 +59,9 @@ function issueRequirement(
     ...(wanted.contractPlusMm === null ? {} : { contractPlusMm: wanted.contractPlusMm }),
     ...(wanted.neverLess ? { neverLess: true } : {}),
     ...(input.mix ? { aggregateMm: input.mix.aggregateMm } : {}),
+    ...(wanted.bundleOf === undefined ? {} : { bundleOf: wanted.bundleOf }),
+    ...input.concrete,
+    showIn: input.units,
   });
   return {
     id: wanted.id,
@@ -188,7 +192,7 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
       layers: element.layers.map((layer) => ({
         ...layer,
         barDiameterMm: at(`elements.${element.id}.layers.${layer.id}`, () =>
-          barDiameter(layer.barDesignation),
+          barDiameter(layer.barDesignation, input.basis),
         ),
       })),
     })),

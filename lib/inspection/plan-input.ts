@@ -24,6 +24,8 @@ export const requirementInput = z.object({
   contractMinusMm: z.number().nonnegative().max(100).nullable(),
   contractPlusMm: z.number().nonnegative().max(300).nullable(),
   neverLess: z.boolean(),
+  /** Bars in a bundle, judged by their equivalent diameter; absent: a single bar. */
+  bundleOf: z.number().int().min(2).max(4).optional(),
 });
 
 export const chosenPointInput = z.object({
@@ -62,6 +64,21 @@ export const elementInput = z.object({
   layers: z.array(layer.omit({ barDiameterMm: true })).max(24),
 });
 
+/** What some codes ask of the concrete before they give a cover; each is only needed by the basis that names it. */
+export const concreteInput = z.object({
+  /** EN 1992-1-1: the structural class, or the working life it is found from. */
+  structuralClass: z.enum(['S1', 'S2', 'S3', 'S4', 'S5', 'S6']).optional(),
+  workingLifeYears: z.union([z.literal(50), z.literal(100)]).optional(),
+  strengthClass: optionalText(20).optional(),
+  slabGeometry: z.boolean().optional(),
+  specialQualityControl: z.boolean().optional(),
+  deltaCdevMm: z.number().nonnegative().max(50).optional(),
+  toleranceClass: z.union([z.literal(1), z.literal(2)]).optional(),
+  /** IS 456 and AS 3600: characteristic strength, MPa. */
+  strengthMpa: z.number().positive().max(150).optional(),
+  membrane: z.boolean().optional(),
+});
+
 /** What a person types to say what must be in the form. */
 export const planInput = z.object({
   units: lengthUnit,
@@ -70,6 +87,7 @@ export const planInput = z.object({
   validityHours: z.number().positive('More than zero hours.').max(168),
   rainLimitMm: z.number().nonnegative().max(100),
   mix: mix.nullable(),
+  concrete: concreteInput.optional(),
   elements: z.array(elementInput).min(1, 'Add at least one element.').max(60),
   measurements: z.array(measurementItem.omit({ trail: true })).max(200),
   checklist: z.object({
