@@ -57,16 +57,16 @@ export function standingAt(
   if (!state || !state.status) return 'unknown';
   const doubt =
     clockOffsetMs !== null && Math.abs(clockOffsetMs) > DOUBTFUL_CLOCK_MS ? Math.abs(clockOffsetMs) : 0;
-  const earliest = Date.parse(measuredAt) - doubt;
-  const latest = Date.parse(measuredAt) + doubt;
+  // Instants are written in one form only (ISO 8601, UTC, milliseconds): they compare as text.
+  const shifted = (ms: number) => new Date(Date.parse(measuredAt) + ms).toISOString();
+  const earliest = doubt === 0 ? measuredAt : shifted(-doubt);
+  const latest = doubt === 0 ? measuredAt : shifted(doubt);
   const inWindow = state.suspect.some(
     (window) =>
-      (window.from === null || latest > Date.parse(window.from)) &&
-      (window.to === null || earliest < Date.parse(window.to)),
+      (window.from === null || latest > window.from) && (window.to === null || earliest < window.to),
   );
   if (inWindow) return 'suspect';
   const { calibrationDue, inService } = state.status.body;
-  if (!inService || (calibrationDue !== null && latest > Date.parse(calibrationDue)))
-    return 'out-of-calibration';
+  if (!inService || (calibrationDue !== null && latest > calibrationDue)) return 'out-of-calibration';
   return 'good';
 }
