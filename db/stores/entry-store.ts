@@ -204,3 +204,19 @@ export async function hashesAt(tx: Tx, projectId: string, seqs: number[]): Promi
     .select('seq', 'hash');
   return new Map(rows.map((row) => [row.seq, row.hash]));
 }
+
+/** The highest seq that the project's counter has given. */
+export async function counterOf(tx: Tx, projectId: string): Promise<number> {
+  const row = await tx('project_counters')
+    .where({ project_id: projectId })
+    .first<{ last_seq: number } | undefined>('last_seq');
+  return row?.last_seq ?? 0;
+}
+
+export async function countEntries(tx: Tx, projectId: string): Promise<number> {
+  const row = await tx('entries')
+    .where({ project_id: projectId })
+    .count<{ count: number }[]>({ count: '*' })
+    .first<{ count: number } | undefined>();
+  return row?.count ?? 0;
+}
