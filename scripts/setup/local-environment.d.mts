@@ -1,0 +1,1 @@
+export function useLocalEnvironment(): void;
