@@ -1,0 +1,77 @@
+'use client';
+
+import { Button } from '@/components/ui/button';
+import { buttonClasses } from '@/components/ui/button-classes';
+import { Notice } from '@/components/ui/notice';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
+import { clockWords } from './sync-words';
+import { useDevice, useSnapshot } from './use-device';
+import { LeaveLink } from './leave-link';
+
+/**
+ * What the device has to tell whatever the screen: a new version, a session that ended, a wrong clock, lost entries.
+ * @param quiet a form is open: only what cannot wait is said, and nothing that reloads
+ */
+export function DeviceNotices({ quiet }: { quiet: boolean }) {
+  const device = useDevice();
+  const { sync, updateReady, person } = useSnapshot();
+  const clock = clockWords(sync.clockOffsetMs);
+  const lost = sync.lostEntries ?? 0;
+  const signIn = person !== null && sync.phase === 'sign-in-needed';
+  if (quiet && lost === 0) return null;
+  if (!updateReady && !clock && lost === 0 && !signIn) return null;
+  return (
+    <div className="mx-auto grid w-full max-w-3xl gap-2 px-3 pt-3">
+      {lost > 0 && (
+        <Notice
+          tone="hold"
+          title={`${lost} ${lost === 1 ? 'entry is' : 'entries are'} gone from this device`}
+          actions={
+            <>
+              <FieldLink href={fieldPaths.notSent} className={buttonClasses('secondary')}>
+                See what is here
+              </FieldLink>
+              {device.acknowledgeLost && (
+                <Button variant="quiet" onClick={() => void device.acknowledgeLost?.()}>
+                  I have read this
+                </Button>
+              )}
+            </>
+          }
+        >
+          <p>
+            The device made room by itself before they were sent. They are not on the server. What was sent is
+            safe. Record again what is missing.
+          </p>
+        </Notice>
+      )}
+      {!quiet && signIn && (
+        <Notice
+          tone="watch"
+          title="Sign in to send"
+          actions={
+            <LeaveLink href="/sign-in?next=/field" className={buttonClasses('primary')}>
+              Sign in
+            </LeaveLink>
+          }
+        >
+          <p>Your session has ended. Everything you recorded is kept here, and you can go on.</p>
+        </Notice>
+      )}
+      {!quiet && clock && (
+        <Notice tone="watch" title="The clock is off">
+          <p>{clock}</p>
+        </Notice>
+      )}
+      {!quiet && updateReady && (
+        <Notice
+          title="A new version is ready"
+          actions={<Button onClick={() => device.applyUpdate()}>Update now</Button>}
+        >
+          <p>It takes a moment and keeps what is not sent. Nothing happens until you choose to.</p>
+        </Notice>
+      )}
+    </div>
+  );
+}

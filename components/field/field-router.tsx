@@ -1,0 +1,56 @@
+'use client';
+
+import { usePathname } from 'next/navigation';
+import { useEffect, useRef, type AnchorHTMLAttributes, type MouseEvent } from 'react';
+import { readRoute, type FieldRoute } from './field-routes';
+
+/** The screen that the address bar names. All of `/field` is one page, so that moving about fetches nothing. */
+export function useFieldRoute(): FieldRoute {
+  return readRoute(usePathname() ?? '/field');
+}
+
+/** Goes to another screen of the offline side without a request. */
+export function goTo(path: string): void {
+  if (path !== window.location.pathname) window.history.pushState(null, '', path);
+}
+
+/** Goes back where there is something to go back to within the application, else to the path given. */
+export function goBackTo(path: string): void {
+  window.history.replaceState(null, '', path);
+}
+
+const plainClick = (event: MouseEvent) =>
+  event.button === 0 && !event.metaKey && !event.ctrlKey && !event.shiftKey && !event.altKey;
+
+/** A link between screens of the offline side: a plain click stays in the page, any other does what links do. */
+export function FieldLink({
+  href,
+  onClick,
+  ...rest
+}: AnchorHTMLAttributes<HTMLAnchorElement> & { href: string }) {
+  return (
+    <a
+      {...rest}
+      href={href}
+      onClick={(event) => {
+        onClick?.(event);
+        if (event.defaultPrevented || !plainClick(event)) return;
+        event.preventDefault();
+        goTo(href);
+      }}
+    />
+  );
+}
+
+/** Moves the focus to the new screen's heading, and to its top, each time the path changes: not on the first screen. */
+export function useScreenFocus(): void {
+  const path = usePathname();
+  const last = useRef<string | null>(null);
+  useEffect(() => {
+    if (last.current !== null && last.current !== path) {
+      window.scrollTo(0, 0);
+      document.querySelector<HTMLElement>('main h1')?.focus({ preventScroll: true });
+    }
+    last.current = path;
+  }, [path]);
+}

@@ -1,0 +1,94 @@
+'use client';
+
+import { EmptyState } from '@/components/ui/empty-state';
+import { ToneGlyph } from '@/components/ui/tone-glyph';
+import { mayRecord } from '@/lib/inspection/entry-access';
+import { roles, roleWords } from '@/lib/inspection/roles';
+import type { Hold } from '@/lib/inspection/sheet-types';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
+import { dayAndTime } from './field-time';
+import { holdPath } from './hold-path';
+import type { OpenSheet } from './open-sheet';
+import { Screen } from './screen';
+
+/** What stands between this pour and the concrete, by who clears it: your own first, each one tap from its work. */
+export function HoldsScreen({ open }: { open: OpenSheet }) {
+  const { holds, pour, project, sheet } = open;
+  const order = [project.role, ...roles.filter((role) => role !== project.role)];
+  return (
+    <Screen
+      title={`${pour.number} holds`}
+      aside={holds.length === 0 ? 'none' : `${holds.length} stand`}
+      back={{ href: fieldPaths.pour(sheet.pourId), words: pour.number }}
+    >
+      {holds.length === 0 ? (
+        <EmptyState title="No hold stands">
+          At the points read and for the items checked. The release is still given in the office.
+        </EmptyState>
+      ) : (
+        <div className="grid gap-6">
+          {order.map((role) => {
+            const own = holds.filter((hold) => hold.clearedBy === role);
+            if (own.length === 0) return null;
+            return (
+              <section key={role} className="grid gap-1.5">
+                <h2 className="flex items-baseline justify-between px-1 text-heading">
+                  {role === project.role ? `You, as ${roleWords[role].toLowerCase()}` : roleWords[role]}
+                  <span className="font-label text-label font-medium text-pencil">{own.length}</span>
+                </h2>
+                <ul className="border border-ink bg-sheet">
+                  {own.map((hold) => (
+                    <HoldLine key={hold.id} open={open} hold={hold} />
+                  ))}
+                </ul>
+              </section>
+            );
+          })}
+        </div>
+      )}
+    </Screen>
+  );
+}
+
+const correctable: readonly Hold['kind'][] = [
+  'cover-not-met',
+  'measurement-out',
+  'check-not-met',
+  'nonconformance-open',
+];
+
+function HoldLine({ open, hold }: { open: OpenSheet; hold: Hold }) {
+  const { sheet, project } = open;
+  // A correction of a face puts right what was seen failing on it: one report for all points of the hold.
+  const subject =
+    hold.faceId && hold.subjects.length > 1 ? ({ kind: 'face', id: hold.faceId } as const) : hold.subjects[0];
+  const report = subject && correctable.includes(hold.kind) && mayRecord('correction', project.role);
+  return (
+    <li className="border-b border-rule last:border-b-0">
+      <FieldLink
+        href={holdPath(hold, sheet)}
+        className="grid min-h-target grid-cols-[1.5rem_1fr] gap-x-2 px-3 py-2.5 hover:bg-paper/60"
+      >
+        <ToneGlyph tone="hold" className="mt-1 text-hold" />
+        <span className="min-w-0">
+          <span className="block font-label text-lead font-semibold">{hold.title}</span>
+          <span className="block text-label text-pencil">
+            {hold.where}
+            {hold.since && ` · since ${dayAndTime(hold.since, project.timeZone)}`}
+          </span>
+          {hold.detail && <span className="block text-label text-pencil">{hold.detail}</span>}
+          <span className="block text-label">{hold.need}</span>
+        </span>
+      </FieldLink>
+      {report && (
+        <FieldLink
+          href={fieldPaths.correction(sheet.pourId, subject)}
+          className="flex min-h-target items-center justify-end border-t border-rule px-3 font-label font-semibold text-chalk underline underline-offset-4"
+        >
+          Report the correction
+        </FieldLink>
+      )}
+    </li>
+  );
+}

@@ -1,0 +1,126 @@
+'use client';
+
+import { EmptyState } from '@/components/ui/empty-state';
+import { MarkIcon } from '@/components/drawings/mark';
+import { withUnit } from '@/lib/concrete/length';
+import { mayRecord } from '@/lib/inspection/entry-access';
+import { placesMeasured } from '@/lib/inspection/judge-measurements';
+import type { MeasurementItem, Plan } from '@/lib/inspection/plan';
+import type { MeasurementState } from '@/lib/inspection/sheet-types';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
+import { dayAndTime } from './field-time';
+import { MeasurementForm, stageWords } from './measurement-form';
+import { measuredText } from './measured-text';
+import { nameOf, type OpenSheet } from './open-sheet';
+import { RequirementTrail } from './requirement-trail';
+import { Screen } from './screen';
+import { MeasurementLines } from './sheet-lines';
+
+/** What has to be met, in words: "at most 1 200 mm", "at least 50 per cent tied", "16". */
+export function limitWords(item: MeasurementItem, units: Plan['units']): string {
+  const one = (value: number) =>
+    item.quantity === 'length'
+      ? withUnit(value, units)
+      : item.quantity === 'share'
+        ? `${value} %`
+        : String(value);
+  if (item.quantity === 'designation') return `planned ${item.expected ?? 'nothing named'}`;
+  return [
+    item.least !== null ? `at least ${one(item.least)}` : '',
+    item.most !== null ? `at most ${one(item.most)}` : '',
+  ]
+    .filter(Boolean)
+    .join(', ');
+}
+
+/** One thing to measure: its limits, a form fit for standing up, and what was measured; without one, the list. */
+export function MeasurementsScreen({ open, itemId }: { open: OpenSheet; itemId: string | null }) {
+  const { sheet, pour } = open;
+  const back = { href: fieldPaths.pour(sheet.pourId), words: pour.number };
+  const state = sheet.measurements.find((one) => one.item.id === itemId);
+  if (!state) {
+    return (
+      <Screen title={`${pour.number} measurements`} back={back}>
+        {sheet.measurements.length === 0 ? (
+          <EmptyState title="The plan asks for no measurements">Cover is read under the faces.</EmptyState>
+        ) : (
+          <MeasurementLines open={open} />
+        )}
+      </Screen>
+    );
+  }
+  const { item } = state;
+  const done = placesMeasured(state);
+  return (
+    <Screen
+      title={item.title}
+      aside={`${Math.min(done, item.required)} of ${item.required} places · ${limitWords(item, sheet.plan.units)}`}
+      back={back}
+      form
+    >
+      <div className="grid gap-5">
+        {mayRecord('measurement', open.project.role) && (
+          <MeasurementForm key={item.id} open={open} state={state} />
+        )}
+        <Places open={open} state={state} />
+        <details className="border border-ink bg-sheet px-3">
+          <summary className="flex min-h-target items-center font-label font-semibold">
+            How is this judged?
+          </summary>
+          <p className="pb-2">
+            {limitWords(item, sheet.plan.units)}. Compared unrounded; limits belong to what is accepted.
+          </p>
+          <RequirementTrail trail={item.trail} />
+        </details>
+      </div>
+    </Screen>
+  );
+}
+
+function Places({ open, state }: { open: OpenSheet; state: MeasurementState }) {
+  if (state.places.length === 0) return null;
+  return (
+    <section className="grid gap-1.5">
+      <h2 className="px-1 text-heading">Measured</h2>
+      <ul className="border border-ink bg-sheet">
+        {state.places.toReversed().map((place) => {
+          const withdrawn = place.current === null;
+          const body = place.current ?? place.entry.body;
+          return (
+            <li key={place.entry.id} className="border-b border-rule last:border-b-0">
+              <FieldLink
+                href={fieldPaths.entry(open.sheet.pourId, place.entry.id)}
+                className="grid min-h-target grid-cols-[1.5rem_1fr] gap-x-2 px-3 py-2 hover:bg-paper/60"
+              >
+                <MarkIcon
+                  kind={
+                    place.verdict === 'met'
+                      ? 'met'
+                      : place.verdict === 'not-met'
+                        ? 'not-met-low'
+                        : 'not-verified'
+                  }
+                />
+                <span>
+                  <span className={`font-label font-semibold ${withdrawn ? 'line-through' : ''}`}>
+                    {measuredText(body.value)}
+                    {body.place && `, ${body.place}`}
+                    {body.stage !== 'single' && `, ${stageWords[body.stage]}`}
+                  </span>
+                  <span className="block text-label">{withdrawn ? 'withdrawn' : place.reason}</span>
+                  <span className="block text-label text-pencil">
+                    {nameOf(open, place.entry.authorId)} ·{' '}
+                    {dayAndTime(place.entry.recordedAt, open.project.timeZone)}
+                    {place.entry.seq === null && ' · not sent yet'}
+                    {place.acceptedBy && ' · accepted by the engineer'}
+                  </span>
+                </span>
+              </FieldLink>
+            </li>
+          );
+        })}
+      </ul>
+    </section>
+  );
+}

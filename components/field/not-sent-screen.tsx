@@ -1,0 +1,142 @@
+'use client';
+
+import { useState } from 'react';
+import { Button } from '@/components/ui/button';
+import { EmptyState } from '@/components/ui/empty-state';
+import { Notice } from '@/components/ui/notice';
+import { problemsOf } from './body-problems';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
+import { timeAway } from './field-time';
+import { PhotoQueue } from './photo-queue';
+import { RefusedLine } from './refused-line';
+import { saveBlob } from './save-blob';
+import { Screen } from './screen';
+import { SheetLine, SheetLines } from './sheet-line';
+import { StorageLine } from './storage-line';
+import { bytesWords, notSentCount, syncWords } from './sync-words';
+import { useDevice, useSnapshot } from './use-device';
+import { useNow } from './use-now';
+import { LeaveLink } from './leave-link';
+
+/** What the server has not taken in: waiting, being sent, refused with the reason; photos; send now; save to a file. */
+export function NotSentScreen() {
+  const device = useDevice();
+  const { sync, refused, photos, pours } = useSnapshot();
+  const now = useNow();
+  const [busy, setBusy] = useState(false);
+  const [problem, setProblem] = useState<string | null>(null);
+  const [saved, setSaved] = useState<string | null>(null);
+  const waiting = pours.filter((pour) => pour.notSent > 0);
+  const sending = sync.phase === 'sending' || sync.phase === 'fetching';
+
+  const attempt = async (what: () => Promise<void>) => {
+    setBusy(true);
+    setProblem(null);
+    try {
+      await what();
+    } catch (error) {
+      setProblem(Object.values(problemsOf(error))[0] ?? 'That did not work. Everything is still kept here.');
+    } finally {
+      setBusy(false);
+    }
+  };
+  const save = () =>
+    attempt(async () => {
+      const blob = await device.exportUnsent();
+      const name = `not-sent-${new Date().toISOString().slice(0, 16).replace(/[:T]/g, '-')}.json`;
+      saveBlob(blob, name);
+      setSaved(`Saved as ${name}, ${bytesWords(blob.size)}. It stays here too.`);
+    });
+
+  return (
+    <Screen title="Not sent yet" aside={syncWords(sync)} back={{ href: fieldPaths.pours, words: 'pours' }}>
+      <div className="grid gap-6">
+        {sync.message && <Notice tone={sync.phase === 'idle' ? 'info' : 'watch'}>{sync.message}</Notice>}
+        {notSentCount(sync) === 0 ? (
+          <EmptyState title="Everything is sent">
+            {sync.lastSuccessAt
+              ? `The server last answered ${timeAway(sync.lastSuccessAt, now)}.`
+              : 'Nothing waits on this device.'}
+          </EmptyState>
+        ) : (
+          <SheetLines
+            heading="Waiting"
+            aside={sync.oldestWaitingAt ? `oldest from ${timeAway(sync.oldestWaitingAt, now)}` : undefined}
+          >
+            {waiting.map((pour) => (
+              <SheetLine
+                key={pour.id}
+                href={fieldPaths.pour(pour.id)}
+                title={`${pour.number} ${pour.title}`}
+                count={`${pour.notSent} not sent`}
+              />
+            ))}
+            <li className="px-3 py-2 text-label text-pencil">
+              {sync.waitingEntries} {sync.waitingEntries === 1 ? 'entry' : 'entries'}, {sync.waitingPhotos}{' '}
+              {sync.waitingPhotos === 1 ? 'photo' : 'photos'}. Readings and answers go before photos.
+              {sync.lastSuccessAt && ` The server last answered ${timeAway(sync.lastSuccessAt, now)}.`}
+            </li>
+          </SheetLines>
+        )}
+        <div className="grid gap-2">
+          <Button
+            variant="primary"
+            wide
+            className="min-h-15"
+            busy={busy || sending}
+            onClick={() => void attempt(() => device.syncNow())}
+          >
+            {sending ? 'Sending' : 'Send now'}
+          </Button>
+          {sync.phase === 'sign-in-needed' && (
+            <LeaveLink
+              href="/sign-in?next=/field"
+              className="flex min-h-target items-center justify-center font-label font-semibold text-chalk underline underline-offset-4"
+            >
+              Sign in, then it is sent
+            </LeaveLink>
+          )}
+          {problem && <Notice tone="hold">{problem}</Notice>}
+        </div>
+        {refused.length > 0 && (
+          <section className="grid gap-2">
+            <h2 className="px-1 text-heading">Refused</h2>
+            <p className="px-1 text-label text-pencil">
+              The server did not take these in. They are kept here until you record them again, or let them
+              go.
+            </p>
+            <ul className="grid gap-3">
+              {refused.map((one) => (
+                <RefusedLine key={one.entry.id} refused={one} />
+              ))}
+            </ul>
+          </section>
+        )}
+        {photos.length > 0 && <PhotoQueue photos={photos} />}
+        <section className="grid gap-2 border border-ink bg-sheet p-3">
+          <h2 className="text-heading">As a last resort</h2>
+          <p>
+            Everything that is not sent, in one file. The office can take it in if this device does not reach
+            the server again.
+          </p>
+          <Button onClick={() => void save()} busy={busy}>
+            Save to a file
+          </Button>
+          {saved && (
+            <p role="status" className="font-label font-semibold text-met">
+              {saved}
+            </p>
+          )}
+        </section>
+        <StorageLine />
+        <FieldLink
+          href={fieldPaths.pours}
+          className="flex min-h-target items-center font-label font-semibold text-chalk underline underline-offset-4"
+        >
+          Choose which pours are kept here
+        </FieldLink>
+      </div>
+    </Screen>
+  );
+}

@@ -1,0 +1,168 @@
+'use client';
+
+import { lazy, Suspense, type ReactNode } from 'react';
+import { Spinner } from '@/components/ui/spinner';
+import { buttonClasses } from '@/components/ui/button-classes';
+import { EmptyState } from '@/components/ui/empty-state';
+import { FieldLink } from './field-router';
+import { fieldPaths, type PourRoute } from './field-routes';
+import type { OpenSheet } from './open-sheet';
+import { PourSheet } from './pour-sheet';
+import { ReadingScreen } from './reading-screen';
+import { Screen } from './screen';
+import { useOpenPour, useSnapshot } from './use-device';
+import { LeaveLink } from './leave-link';
+
+// What is not needed at once arrives in its own pieces; the worker keeps them all, so that they open without a network.
+const ChecksScreen = lazy(async () => ({ default: (await import('./checks-screen')).ChecksScreen }));
+const MeasurementsScreen = lazy(async () => ({
+  default: (await import('./measurements-screen')).MeasurementsScreen,
+}));
+const HoldsScreen = lazy(async () => ({ default: (await import('./holds-screen')).HoldsScreen }));
+const PhotosScreen = lazy(async () => ({ default: (await import('./photos-screen')).PhotosScreen }));
+const NonconformanceForm = lazy(async () => ({
+  default: (await import('./nonconformance-form')).NonconformanceForm,
+}));
+const NonconformanceScreen = lazy(async () => ({
+  default: (await import('./nonconformance-screen')).NonconformanceScreen,
+}));
+const CorrectionForm = lazy(async () => ({ default: (await import('./correction-form')).CorrectionForm }));
+const EntryScreen = lazy(async () => ({ default: (await import('./entry-screen')).EntryScreen }));
+const EventsScreen = lazy(async () => ({ default: (await import('./events-screen')).EventsScreen }));
+const LastWalkScreen = lazy(async () => ({ default: (await import('./last-walk-screen')).LastWalkScreen }));
+const InstrumentsScreen = lazy(async () => ({
+  default: (await import('./instruments-screen')).InstrumentsScreen,
+}));
+const SignScreen = lazy(async () => ({ default: (await import('./sign-screen')).SignScreen }));
+
+const toPours = { href: fieldPaths.pours, words: 'pours' };
+
+/** One pour: reads it from the device, says so while it does, and shows the screen that the path names. */
+export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute }) {
+  const { person, pours, projects, sync } = useSnapshot();
+  const open = useOpenPour(pourId);
+  if (!person && sync.phase === 'idle') return <Opening title="Pour" />;
+  if (!person) {
+    return (
+      <Message title="Signed out" heading="Sign in to see this pour">
+        <LeaveLink
+          href={`/sign-in?next=${encodeURIComponent(fieldPaths.pour(pourId))}`}
+          className={buttonClasses('primary')}
+        >
+          Sign in
+        </LeaveLink>
+      </Message>
+    );
+  }
+  if (!open) {
+    const known = pours.find((pour) => pour.id === pourId);
+    if (known && !known.kept) {
+      return (
+        <Message title={known.number} heading={`${known.number} is not kept on this device`}>
+          <FieldLink href={fieldPaths.pours} className={buttonClasses('primary')}>
+            Choose what to keep
+          </FieldLink>
+        </Message>
+      );
+    }
+    if (!known && projects.length > 0) {
+      return (
+        <Message
+          title="Pour"
+          heading="This device has not heard of this pour"
+          text="It may belong to a project you are not in, or the device has not fetched it yet."
+        />
+      );
+    }
+    return (
+      <Screen title={known?.number ?? 'Pour'} back={toPours}>
+        <p className="p-4">
+          <Spinner label="Opening the sheet" />
+        </p>
+      </Screen>
+    );
+  }
+  if (!open.sheet) {
+    return (
+      <Message
+        title={open.pour.number}
+        heading={
+          open.pour.serverPlanRevision > 0 ? 'The plan is not on this device yet' : 'There is no plan yet'
+        }
+        text={
+          open.pour.serverPlanRevision > 0
+            ? 'It is fetched as soon as there is a network.'
+            : 'The office issues the plan; then the sheet opens here.'
+        }
+      />
+    );
+  }
+  return (
+    <Suspense fallback={<Opening title={open.pour.number} />}>
+      <PourPart open={{ ...open, sheet: open.sheet, person }} route={route} />
+    </Suspense>
+  );
+}
+
+function PourPart({ open, route }: { open: OpenSheet; route: PourRoute }) {
+  switch (route.part) {
+    case 'sheet':
+      return <PourSheet open={open} />;
+    case 'face':
+      return <ReadingScreen key={route.faceId} open={open} faceId={route.faceId} />;
+    case 'checks':
+      return <ChecksScreen open={open} group={route.group} />;
+    case 'measurements':
+      return <MeasurementsScreen open={open} itemId={route.itemId} />;
+    case 'holds':
+      return <HoldsScreen open={open} />;
+    case 'photos':
+      return <PhotosScreen open={open} about={route.about} />;
+    case 'nonconformance':
+      return <NonconformanceForm open={open} about={route.about} />;
+    case 'nonconformance-shown':
+      return <NonconformanceScreen open={open} id={route.id} />;
+    case 'correction':
+      return <CorrectionForm open={open} about={route.about} />;
+    case 'entry':
+      return <EntryScreen key={route.entryId} open={open} entryId={route.entryId} />;
+    case 'events':
+      return <EventsScreen open={open} />;
+    case 'last-walk':
+      return <LastWalkScreen open={open} />;
+    case 'instruments':
+      return <InstrumentsScreen open={open} />;
+    case 'sign':
+      return <SignScreen open={open} />;
+  }
+}
+
+function Opening({ title }: { title: string }) {
+  return (
+    <Screen title={title} back={toPours}>
+      <p className="p-4">
+        <Spinner label="Opening" />
+      </p>
+    </Screen>
+  );
+}
+
+function Message({
+  title,
+  heading,
+  text,
+  children,
+}: {
+  title: string;
+  heading: string;
+  text?: string;
+  children?: ReactNode;
+}) {
+  return (
+    <Screen title={title} back={toPours}>
+      <EmptyState title={heading} action={children}>
+        {text}
+      </EmptyState>
+    </Screen>
+  );
+}

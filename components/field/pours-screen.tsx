@@ -1,0 +1,141 @@
+'use client';
+
+import { Spinner } from '@/components/ui/spinner';
+import { EmptyState } from '@/components/ui/empty-state';
+import { ThemeSwitch } from '@/components/ui/theme-switch';
+import { buttonClasses } from '@/components/ui/button-classes';
+import type { DevicePour, DeviceSnapshot } from '@/lib/device/device-types';
+import { PourRow } from './pour-row';
+import { OthersWaiting } from './others-waiting';
+import { Screen } from './screen';
+import { useSnapshot } from './use-device';
+import { LeaveLink } from './leave-link';
+
+const byPlannedTime = (a: DevicePour, b: DevicePour) =>
+  (a.plannedAt ?? '9').localeCompare(b.plannedAt ?? '9') || a.number.localeCompare(b.number);
+
+/** The pours kept on this device and those it has heard of, by planned time. */
+export function PoursScreen() {
+  const snapshot = useSnapshot();
+  if (!snapshot.person) return <SignedOut snapshot={snapshot} />;
+  return (
+    <Screen title="Pours" aside={snapshot.person.name}>
+      {snapshot.projects.length === 0 && <NothingYet snapshot={snapshot} />}
+      <div className="grid gap-8">
+        {snapshot.projects.map((project) => {
+          const pours = snapshot.pours.filter((pour) => pour.projectId === project.id).sort(byPlannedTime);
+          return (
+            <section key={project.id} aria-labelledby={`project-${project.id}`} className="grid gap-4">
+              <h2 id={`project-${project.id}`} className="text-heading">
+                {project.name}
+              </h2>
+              <PourList
+                heading="On this device"
+                empty="No pour of this project is kept here. Keep one while you have a network, and it opens without one."
+                pours={pours.filter((pour) => pour.kept)}
+                timeZone={project.timeZone}
+              />
+              <PourList
+                heading="Not on this device"
+                empty={null}
+                pours={pours.filter((pour) => !pour.kept)}
+                timeZone={project.timeZone}
+              />
+            </section>
+          );
+        })}
+        <OthersWaiting />
+        <footer className="grid gap-4 border-t border-rule pt-4">
+          <ThemeSwitch />
+          <nav aria-label="Elsewhere" className="flex flex-wrap gap-2">
+            <LeaveLink href="/pours" className={buttonClasses('quiet')}>
+              The office side
+            </LeaveLink>
+            <LeaveLink href="/account" className={buttonClasses('quiet')}>
+              Account
+            </LeaveLink>
+          </nav>
+        </footer>
+      </div>
+    </Screen>
+  );
+}
+
+function PourList({
+  heading,
+  empty,
+  pours,
+  timeZone,
+}: {
+  heading: string;
+  empty: string | null;
+  pours: DevicePour[];
+  timeZone: string;
+}) {
+  if (pours.length === 0 && empty === null) return null;
+  return (
+    <div className="grid gap-2">
+      <h3 className="font-label text-label font-semibold text-pencil">{heading}</h3>
+      {pours.length === 0 ? (
+        <p className="text-pencil">{empty}</p>
+      ) : (
+        <ul className="border border-ink bg-sheet">
+          {pours.map((pour) => (
+            <PourRow key={pour.id} pour={pour} timeZone={timeZone} />
+          ))}
+        </ul>
+      )}
+    </div>
+  );
+}
+
+function NothingYet({ snapshot }: { snapshot: DeviceSnapshot }) {
+  const busy = snapshot.sync.phase === 'fetching' || snapshot.sync.phase === 'sending';
+  return (
+    <EmptyState title={busy ? 'Fetching your projects' : 'No project yet'}>
+      {busy
+        ? 'This takes a moment the first time.'
+        : (snapshot.sync.message ??
+          'You are in no project yet, or this device has not heard of it. Ask your coordinator, and open this page with a network.')}
+    </EmptyState>
+  );
+}
+
+/** The store is being read, or the server asked who is signed in: a moment in which nothing is known. */
+function LookingWho() {
+  return (
+    <Screen title="Cagewright on site">
+      <div className="grid justify-items-center gap-6 py-16">
+        <Spinner label="Opening" />
+        <LeaveLink href="/sign-in?next=/field" className={buttonClasses('quiet')}>
+          Sign in
+        </LeaveLink>
+      </div>
+    </Screen>
+  );
+}
+
+function SignedOut({ snapshot }: { snapshot: DeviceSnapshot }) {
+  if (snapshot.sync.phase === 'idle') return <LookingWho />;
+  const offline = snapshot.sync.phase === 'offline';
+  return (
+    <Screen title="Cagewright on site">
+      <div className="grid gap-6">
+        <EmptyState
+          title="Sign in to begin"
+          action={
+            <LeaveLink href="/sign-in?next=/field" className={buttonClasses('primary')}>
+              Sign in
+            </LeaveLink>
+          }
+        >
+          {offline
+            ? 'There is no network here. The first sign-in on a device needs one; after that, your pours open without it.'
+            : 'You need a network once. After that, your pours open without one, and what you record is sent when the network is back.'}
+        </EmptyState>
+        <OthersWaiting />
+        <ThemeSwitch />
+      </div>
+    </Screen>
+  );
+}

@@ -1,0 +1,246 @@
+'use client';
+
+import { useState } from 'react';
+import { Dialog } from '@/components/ui/dialog';
+import { Button } from '@/components/ui/button';
+import { formatLength, withUnit } from '@/lib/concrete/length';
+import type { BodyOf } from '@/lib/inspection/entry';
+import type { FaceState } from '@/lib/inspection/sheet-types';
+import { FaceSection, NEW_SPOT, WorkingMap } from './face-drawings';
+import { instrumentStanding } from './instrument-words';
+import { JudgedPanel } from './judged-panel';
+import { BlockKeys, Keypad } from './keypad';
+import type { FaceOfPlan, OpenSheet } from './open-sheet';
+import { PointReadings } from './point-readings';
+import { pressed, readPresses, type Press } from './reading-keys';
+import { ReadingContextBar, type Picker } from './reading-context-bar';
+import { ReadingPicker } from './reading-pickers';
+import { ReadingReadout } from './reading-readout';
+import { readingTarget, type Chosen } from './reading-target';
+import { useSnapshot } from './use-device';
+import { findReading, useKeepReading } from './use-keep-reading';
+import { useNow } from './use-now';
+import { useReadingSettings } from './use-reading-settings';
+import { useTypedKeys } from './use-typed-keys';
+import { VerdictStrip } from './verdict-strip';
+import { nextPoint } from './walk-order';
+
+/** The map over the keypad: a point is lit, type, keep, the tick drops, the verdict is said, the next point is lit. */
+export function ReadingDesk({
+  open,
+  place,
+  state,
+}: {
+  open: OpenSheet;
+  place: FaceOfPlan;
+  state: FaceState;
+}) {
+  const { face } = place;
+  const setup = useReadingSettings(open, face);
+  const { unit, requirement, instrument } = setup;
+  const { sync } = useSnapshot();
+  const nowMs = useNow();
+  const [presses, setPresses] = useState<readonly Press[]>([]);
+  const [chosen, setChosen] = useState<Chosen | null>(null);
+  const [from, setFrom] = useState<{ xMm: number; yMm: number; key?: string } | null>(null);
+  const [picker, setPicker] = useState<Picker | null>(null);
+  const [panel, setPanel] = useState<'how' | 'point' | null>(null);
+  const [asFoundBar, setAsFoundBar] = useState('');
+  const { busy, problem, kept, keep, undo, say } = useKeepReading(open, setup.settings.sound);
+
+  const target = readingTarget(state, chosen, from);
+  const here = target?.place ?? null;
+  const next = nextPoint(
+    state.points.filter((point) => point.key !== target?.point?.key),
+    here,
+  );
+  const standingAt = {
+    now: new Date(nowMs).toISOString(),
+    timeZone: open.project.timeZone,
+    clockOffsetMs: sync.clockOffsetMs,
+  };
+  const standing = instrument ? instrumentStanding(instrument, standingAt) : null;
+  const last = kept ? findReading(open, kept.entryId) : null;
+
+  const press = (one: Press) => {
+    say(null);
+    setPresses((before) => pressed(before, one));
+  };
+
+  const keepBody = async (said: Pick<BodyOf<'reading'>, 'value' | 'goNoGo'>) => {
+    if (!target) return say('Tap the map where you read.');
+    if (!instrument) {
+      setPicker('instrument');
+      return;
+    }
+    if (busy) return;
+    const typed = presses;
+    setPresses([]);
+    const done = await keep({
+      faceId: face.id,
+      requirementId: requirement?.id ?? null,
+      steel: setup.steel,
+      pointId: target.point?.key ?? null,
+      spot: target.point ? null : target.place,
+      ...said,
+      instrumentId: instrument.instrumentId,
+      phase: 'before',
+      measuredAt: new Date().toISOString(),
+      asFoundBar: asFoundBar.trim() || null,
+      measurer: null,
+    });
+    if (!done) {
+      setPresses((before) => (before.length === 0 ? typed : before));
+      return;
+    }
+    setFrom({ ...target.place, ...(target.point ? { key: target.point.key } : {}) });
+    setChosen(null);
+    setAsFoundBar('');
+  };
+
+  const keepTyped = () => {
+    const read = readPresses(presses, unit);
+    if (!read.ok) say(read.problem);
+    else void keepBody({ value: read.value, goNoGo: null });
+  };
+  const keepBlock = (passes: boolean) =>
+    void keepBody({ value: null, goNoGo: { blockMm: setup.blockMm, passes } });
+
+  useTypedKeys({
+    enabled: !setup.isBlock,
+    onChar: (char) => press({ kind: 'char', char }),
+    onDelete: () => setPresses((before) => before.slice(0, -1)),
+    onEnter: keepTyped,
+  });
+
+  const choosePoint = (key: string) => {
+    if (key === NEW_SPOT) return;
+    setChosen({ kind: 'point', key });
+  };
+
+  return (
+    <div className="grid h-full min-h-0 grid-rows-[minmax(9.5rem,1fr)_auto] bg-sheet md:grid-cols-[1fr_26rem] md:grid-rows-1">
+      <div className="min-h-0 overflow-y-auto">
+        <WorkingMap
+          place={place}
+          state={state}
+          unit={unit}
+          selected={target ? (target.point?.key ?? NEW_SPOT) : null}
+          spot={chosen?.kind === 'spot' ? chosen.place : null}
+          onPoint={choosePoint}
+          onSpot={(spot) => setChosen({ kind: 'spot', place: spot })}
+        />
+        <FaceSection
+          place={place}
+          state={state}
+          requirement={requirement ?? face.requirements[0] ?? null}
+          unit={unit}
+          dropId={kept?.entryId ?? null}
+        />
+      </div>
+      <div className="flex flex-col justify-end border-ink bg-sheet md:border-l">
+        <ReadingReadout
+          target={target}
+          presses={presses}
+          unit={unit}
+          limits={requirement}
+          problem={problem}
+          block={setup.isBlock ? withUnit(setup.blockMm, unit) : null}
+          allRead={target === null}
+          onShowReadings={() => setPanel('point')}
+        />
+        {last && kept && (
+          <VerdictStrip
+            open={open}
+            reading={last.reading}
+            label={last.point.label}
+            pointKey={last.point.key}
+            unit={unit}
+            onUndo={
+              kept.undoable
+                ? () => void undo().then((point) => point && setChosen({ kind: 'point', key: point.key }))
+                : null
+            }
+            onAgain={() => setChosen({ kind: 'point', key: last.point.key })}
+            onHow={() => setPanel('how')}
+          />
+        )}
+        <ReadingContextBar
+          instrument={instrument?.name ?? 'choose'}
+          instrumentNote={standing?.words ?? ''}
+          instrumentGood={standing?.good ?? false}
+          steel={asFoundBar.trim() ? `${setup.steel} (found ${asFoundBar.trim()})` : setup.steel}
+          unit={unit}
+          onPick={setPicker}
+        />
+        {setup.isBlock ? (
+          <BlockKeys block={withUnit(setup.blockMm, unit)} busy={busy} onKeep={keepBlock} />
+        ) : (
+          <>
+            <Keypad
+              unit={unit}
+              onPress={press}
+              onDelete={() => setPresses((before) => before.slice(0, -1))}
+            />
+            <Button
+              variant="primary"
+              wide
+              className="h-15 text-lead"
+              aria-disabled={presses.length === 0 || undefined}
+              onClick={keepTyped}
+            >
+              {next ? `Keep, next ${next.label}` : 'Keep'}
+            </Button>
+          </>
+        )}
+        <div className="pb-[env(safe-area-inset-bottom)]" />
+      </div>
+      <ReadingPicker
+        which={picker}
+        open={open}
+        face={face}
+        setup={setup}
+        asFoundBar={asFoundBar}
+        onAsFoundBar={setAsFoundBar}
+        standingAt={standingAt}
+        onClose={() => setPicker(null)}
+      />
+      <Dialog
+        open={panel === 'how' && last !== null}
+        title="How was this judged?"
+        onClose={() => setPanel(null)}
+        closeOutside
+      >
+        {last && (
+          <JudgedPanel
+            reading={last.reading}
+            plan={open.sheet.plan}
+            instrument={
+              open.sheet.instruments.find(
+                (one) => one.instrumentId === last.reading.entry.body.instrumentId,
+              ) ?? null
+            }
+            unit={unit}
+          />
+        )}
+      </Dialog>
+      <Dialog
+        open={panel === 'point' && target?.point !== undefined}
+        title={`Readings at ${target?.label ?? ''}`}
+        onClose={() => setPanel(null)}
+        closeOutside
+      >
+        {target?.point && <PointReadings open={open} point={target.point} />}
+        {target?.point?.point?.reason && (
+          <p className="mt-3 text-pencil">Chosen: {target.point.point.reason}.</p>
+        )}
+        {target && (
+          <p className="mt-3 text-label text-pencil">
+            {formatLength(Math.round(target.place.xMm), unit)} {unit} from the left,{' '}
+            {formatLength(Math.round(target.place.yMm), unit)} {unit} up.
+          </p>
+        )}
+      </Dialog>
+    </div>
+  );
+}

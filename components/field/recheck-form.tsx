@@ -1,0 +1,23 @@
+'use client';
+
+import type { SubjectRef } from '@/lib/inspection/entry-bodies';
+import type { OpenSheet } from './open-sheet';
+import { OutcomeForm } from './outcome-form';
+import { useRecord } from './use-record';
+
+/** The inspector's look at what was put right. */
+export function RecheckForm({ open, about }: { open: OpenSheet; about: SubjectRef }) {
+  const { busy, problems, record } = useRecord(open);
+  return (
+    <section className="grid gap-2 border border-ink bg-sheet p-3">
+      <h2 className="text-heading">Recheck</h2>
+      <OutcomeForm
+        legend="What you found"
+        label="What you looked at"
+        busy={busy}
+        problems={problems}
+        onKeep={async (outcome, text) => (await record('recheck', { about, outcome, text })) !== null}
+      />
+    </section>
+  );
+}

@@ -1,0 +1,46 @@
+'use client';
+
+import type { ReactNode } from 'react';
+import { classNames } from '@/components/ui/class-names';
+import { DeviceNotices } from './device-notices';
+import { useScreenFocus } from './field-router';
+import { TopBar } from './top-bar';
+
+/** One screen of the offline side: the bar, what the device has to say, and the sheet. */
+export function Screen({
+  title,
+  aside,
+  back,
+  form = false,
+  tight = false,
+  children,
+}: {
+  title: string;
+  aside?: ReactNode;
+  back?: { href: string; words: string };
+  /** Something is being filled in here: nothing offers to reload the application. */
+  form?: boolean;
+  /** The screen brings its own margins: the reading screen. */
+  tight?: boolean;
+  children: ReactNode;
+}) {
+  useScreenFocus();
+  return (
+    <div
+      data-density="field"
+      className={classNames(
+        'flex flex-col bg-paper text-body text-ink',
+        tight ? 'h-dvh overflow-hidden' : 'min-h-dvh',
+      )}
+    >
+      <TopBar title={title} aside={aside} back={back} />
+      <DeviceNotices quiet={form || tight} />
+      <main
+        id="main"
+        className={classNames('w-full flex-1', tight ? 'min-h-0' : 'mx-auto max-w-3xl px-3 pt-4 pb-24')}
+      >
+        {children}
+      </main>
+    </div>
+  );
+}

@@ -1,0 +1,56 @@
+'use client';
+
+import { useCallback, useState } from 'react';
+import type { LengthUnit } from '@/lib/concrete/length';
+import type { Face, Requirement } from '@/lib/inspection/plan';
+import type { InstrumentState } from '@/lib/inspection/sheet-types';
+import type { OpenSheet } from './open-sheet';
+import { keepSettings, readSettings, type ReadingSettings } from './remembered';
+
+/** Steel that has no requirement on the face: its readings are indicative only. */
+export const OTHER_STEEL = 'other';
+
+export interface ReadingSetup {
+  settings: ReadingSettings;
+  change: (part: Partial<ReadingSettings>) => void;
+  unit: LengthUnit;
+  /** Null: steel without a requirement here. */
+  requirement: Requirement | null;
+  steel: string;
+  instrument: InstrumentState | null;
+  isBlock: boolean;
+  blockMm: number;
+}
+
+/** Instrument, steel and unit of the next reading: chosen once, kept until changed. */
+export function useReadingSettings(open: OpenSheet, face: Face): ReadingSetup {
+  const projectId = open.project.id;
+  const [settings, setSettings] = useState(() => readSettings(projectId));
+  const change = useCallback(
+    (part: Partial<ReadingSettings>) =>
+      setSettings((before) => {
+        const after = { ...before, ...part };
+        keepSettings(projectId, after);
+        return after;
+      }),
+    [projectId],
+  );
+  const inService = open.sheet.instruments.filter((one) => one.status?.body.inService);
+  const only = inService.length === 1 ? inService[0] : undefined;
+  const instrument = inService.find((one) => one.instrumentId === settings.instrumentId) ?? only ?? null;
+  const chosen = settings.steel[face.id];
+  const requirement =
+    chosen === OTHER_STEEL
+      ? null
+      : (face.requirements.find((one) => one.id === chosen) ?? face.requirements[0] ?? null);
+  return {
+    settings,
+    change,
+    unit: settings.unit ?? open.sheet.plan.units,
+    requirement,
+    steel: requirement?.steel ?? 'other steel',
+    instrument,
+    isBlock: instrument?.status?.body.kind === 'block',
+    blockMm: settings.blockMm ?? requirement?.leastAcceptedMm ?? 40,
+  };
+}

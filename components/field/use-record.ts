@@ -1,0 +1,53 @@
+'use client';
+
+import { useCallback, useState } from 'react';
+import type { BodyOf, Entry } from '@/lib/inspection/entry';
+import type { DeviceEntryType, OpenPour } from '@/lib/device/device-types';
+import { bodyProblems, problemsOf, type Problems } from './body-problems';
+import { useDevice } from './use-device';
+
+export interface Recording {
+  busy: boolean;
+  problems: Problems;
+  clearProblems: () => void;
+  /** Checks and keeps an entry of this pour; null where it was not kept, and then `problems` says why. */
+  record: <T extends DeviceEntryType>(type: T, body: BodyOf<T>) => Promise<Entry | null>;
+}
+
+const projectTypes: readonly string[] = [
+  'block-check',
+  'instrument-status',
+  'drawing-received',
+  'mix-changed',
+  'rules-changed',
+];
+
+/** Keeps entries of one pour (or of its project's stream), one at a time, with the problems by field. */
+export function useRecord(open: OpenPour): Recording {
+  const device = useDevice();
+  const [busy, setBusy] = useState(false);
+  const [problems, setProblems] = useState<Problems>({});
+  const projectId = open.project.id;
+  const pourId = open.pour.id;
+
+  const record = useCallback(
+    async <T extends DeviceEntryType>(type: T, body: BodyOf<T>) => {
+      const found = bodyProblems(type, body);
+      setProblems(found);
+      if (Object.keys(found).length > 0) return null;
+      setBusy(true);
+      try {
+        const stream = projectTypes.includes(type) ? null : pourId;
+        return await device.record({ projectId, pourId: stream }, type, body);
+      } catch (error) {
+        setProblems(problemsOf(error));
+        return null;
+      } finally {
+        setBusy(false);
+      }
+    },
+    [device, projectId, pourId],
+  );
+  const clearProblems = useCallback(() => setProblems({}), []);
+  return { busy, problems, clearProblems, record };
+}

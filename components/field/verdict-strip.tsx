@@ -1,0 +1,95 @@
+'use client';
+
+import { MarkIcon } from '@/components/drawings/mark';
+import { Button } from '@/components/ui/button';
+import { buttonClasses } from '@/components/ui/button-classes';
+import { toneText } from '@/components/ui/tone';
+import type { LengthUnit } from '@/lib/concrete/length';
+import { mayRecord } from '@/lib/inspection/entry-access';
+import { markOfReading } from '@/lib/inspection/judge-point';
+import type { ReadingState } from '@/lib/inspection/sheet-types';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
+import type { OpenSheet } from './open-sheet';
+import { markTone } from './state-tone';
+import { bodyShown, marginWords, readingText, verdictWords } from './verdict-words';
+
+/** The verdict of the reading kept last, in mark and word; what can be done where it is not met; undo while it lasts. */
+export function VerdictStrip({
+  open,
+  reading,
+  label,
+  pointKey,
+  unit,
+  onUndo,
+  onAgain,
+  onHow,
+}: {
+  open: OpenSheet;
+  reading: ReadingState;
+  label: string;
+  pointKey: string;
+  unit: LengthUnit;
+  /** Null once ten seconds are over. */
+  onUndo: (() => void) | null;
+  onAgain: () => void;
+  onHow: () => void;
+}) {
+  const { judged } = reading;
+  const kind = markOfReading(judged);
+  const about = { kind: 'point', id: pointKey } as const;
+  const pourId = open.sheet.pourId;
+  return (
+    <div className="border-t border-ink bg-sheet">
+      <div className="flex min-h-target items-center gap-2 pl-3">
+        <MarkIcon kind={kind} size="1.6em" />
+        <div role="status" className="min-w-0 flex-1 py-1 leading-tight">
+          <p className="font-label font-semibold">
+            {label}: {readingText(bodyShown(reading))}{' '}
+            <span className={toneText[markTone[kind]]}>{verdictWords(judged)}</span>
+          </p>
+          <p className="truncate text-label text-pencil">
+            {judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit)}
+          </p>
+        </div>
+        {onUndo ? (
+          <Button variant="quiet" onClick={onUndo}>
+            Undo
+          </Button>
+        ) : (
+          <Button variant="quiet" onClick={onHow} className="px-2 text-label">
+            How judged?
+          </Button>
+        )}
+      </div>
+      {judged.verdict === 'not-met' && (
+        <div className="border-t border-rule">
+          <div className="grid grid-cols-3">
+            <FieldLink
+              href={fieldPaths.photos(pourId, about)}
+              className={buttonClasses('quiet', true, 'border-r-rule')}
+            >
+              Photo
+            </FieldLink>
+            {mayRecord('nonconformance', open.project.role) ? (
+              <FieldLink
+                href={fieldPaths.nonconformance(pourId, about)}
+                className={buttonClasses('quiet', true, 'border-r-rule px-1')}
+              >
+                Noncon&shy;formance
+              </FieldLink>
+            ) : (
+              <span />
+            )}
+            <Button variant="quiet" wide onClick={onAgain}>
+              Read again
+            </Button>
+          </div>
+          <p className="px-3 pb-1.5 text-center text-label text-pencil">
+            Reading again does not erase: within a round the lowest governs.
+          </p>
+        </div>
+      )}
+    </div>
+  );
+}
