@@ -11,14 +11,14 @@ export interface FaceRectangle {
 export interface FaceProportion {
   /** Width over height as drawn. */
   aspect: number;
-  /** False where the face is so long that its height is drawn larger than its length. */
+  /** False where the face is so long or so tall that its two sides are drawn to different scales. */
   toScale: boolean;
 }
 
-/** The proportion a face is drawn in: true to scale between 1:1.6 and 4:1, else held at the nearer of the two. */
+/** The proportion a face is drawn in: true to scale between 1:3 and 4:1, else held at the nearer of the two. */
 export function faceProportion(widthMm: number, heightMm: number): FaceProportion {
   const aspect = widthMm / heightMm;
-  const drawn = Math.min(4, Math.max(1 / 1.6, aspect));
+  const drawn = Math.min(4, Math.max(1 / 3, aspect));
   return { aspect: drawn, toScale: Math.abs(drawn - aspect) < 1e-9 };
 }
 

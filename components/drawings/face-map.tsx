@@ -17,6 +17,8 @@ export interface FaceMapProps {
   selectedId?: string | null;
   /** Writes a length: `(mm) => '7 200'`. */
   format?: (mm: number) => string;
+  /** How tall the drawn face may get, in rem; a face that would be taller is drawn narrower. */
+  maxHeightRem?: number;
   /** Labels at the points; by default where there are at most 60. */
   labels?: boolean;
   /** Laid over the face, edge on edge: what makes it answer to touch (FaceMapInteractive). */
@@ -30,13 +32,23 @@ const share = (part: number, whole: number) => `${((part / whole) * 100).toFixed
  * The picture has a text of its own; give it a FaceMapTable beside it.
  */
 export function FaceMap(props: FaceMapProps) {
-  const { name = 'Face', widthMm, heightMm, points, format = (mm) => String(Math.round(mm)) } = props;
+  const {
+    name = 'Face',
+    widthMm,
+    heightMm,
+    points,
+    format = (mm) => String(Math.round(mm)),
+    maxHeightRem = 30,
+  } = props;
   const { aspect, toScale } = faceProportion(widthMm, heightMm);
   const counts = new Map<MarkKind, number>();
   for (const point of points) counts.set(point.mark, (counts.get(point.mark) ?? 0) + 1);
   const summary = [...counts].map(([kind, count]) => `${count} ${markWords[kind]}`).join(', ');
   return (
-    <figure className="grid grid-cols-[minmax(0,1fr)_auto] content-start gap-1.5 p-2">
+    <figure
+      className="grid grid-cols-[minmax(0,1fr)_auto] content-start gap-1.5 p-2"
+      style={{ maxWidth: `calc(${(aspect * maxHeightRem).toFixed(2)}rem + 2.5rem)` }}
+    >
       <div className="relative w-full self-start" style={{ aspectRatio: String(aspect) }}>
         <svg
           width="100%"
