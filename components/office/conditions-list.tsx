@@ -10,10 +10,12 @@ import { stageWords } from './state-words';
 export function ConditionsList({
   conditions,
   pourId,
+  seenSeq,
   viewer,
 }: {
   conditions: readonly ConditionState[];
   pourId: string;
+  seenSeq: number;
   viewer: OfficeViewer;
 }) {
   if (conditions.length === 0) return <p className="text-pencil">No decision carries a condition.</p>;
@@ -42,7 +44,13 @@ export function ConditionsList({
             </p>
           </div>
           {verified?.body.outcome !== 'met' && mayRecord('condition-verified', viewer.role) && (
-            <RowAction kind="verify" id={condition.id} pourId={pourId} about={condition.text} />
+            <RowAction
+              kind="verify"
+              id={condition.id}
+              pourId={pourId}
+              seenSeq={seenSeq}
+              about={condition.text}
+            />
           )}
         </li>
       ))}

@@ -8,11 +8,13 @@ import { EntryForm } from './entry-form';
 /** A button that opens the form of one action. */
 export function EntryButton({
   pourId,
+  seenSeq,
   action,
   variant,
   about,
 }: {
   pourId: string;
+  seenSeq: number;
   action: EntryAction;
   variant?: ButtonVariant;
   /** What it is about, for the names of buttons that are repeated. */
@@ -25,7 +27,7 @@ export function EntryButton({
       title={action.title}
       variant={variant}
     >
-      {(close) => <EntryForm pourId={pourId} action={action} onDone={close} />}
+      {(close) => <EntryForm pourId={pourId} seenSeq={seenSeq} action={action} onDone={close} />}
     </ActionDialog>
   );
 }

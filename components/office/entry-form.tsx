@@ -59,10 +59,13 @@ const resolverFor =
 /** A small form that records one entry of a pour, judged by the entry's own schema before it goes and on arrival. */
 export function EntryForm({
   pourId,
+  seenSeq,
   action,
   onDone,
 }: {
   pourId: string;
+  /** The head of the pour that this person has before them: what came since, they have not seen. */
+  seenSeq: number;
   action: EntryAction;
   onDone: () => void;
 }) {
@@ -82,6 +85,7 @@ export function EntryForm({
     const answer = await postJson(`/api/pours/${pourId}/entries`, {
       type: action.type,
       body: action.toBody(values),
+      seenSeq,
     });
     if (answer.ok) {
       onDone();

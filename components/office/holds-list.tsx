@@ -76,7 +76,7 @@ export function HoldsList({
 /** The one thing that can be done about a hold from here, where the person may do it. */
 function HoldAnswer({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: OfficeViewer }) {
   const entryId = hold.subjects.find((subject) => subject.kind === 'entry')?.id;
-  const common = { pourId: sheet.pourId, about: hold.title };
+  const common = { pourId: sheet.pourId, seenSeq: sheet.headSeq, about: hold.title };
   if (
     hold.kind === 'manual' &&
     entryId &&

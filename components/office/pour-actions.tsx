@@ -20,6 +20,7 @@ import { EntryButton } from './entry-button';
 /** What this person may record of the pour from here, one button each. */
 export function PourActions({
   plan,
+  seenSeq,
   holds,
   role,
   now,
@@ -27,6 +28,7 @@ export function PourActions({
   placing,
 }: {
   plan: Plan;
+  seenSeq: number;
   holds: Hold[];
   role: Role;
   now: string;
@@ -52,7 +54,7 @@ export function PourActions({
     <ul aria-label="What you can record here" className="flex flex-wrap gap-2">
       {actions.map((action) => (
         <li key={action.label}>
-          <EntryButton pourId={plan.pourId} action={action} />
+          <EntryButton pourId={plan.pourId} seenSeq={seenSeq} action={action} />
         </li>
       ))}
     </ul>

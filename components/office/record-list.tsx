@@ -78,7 +78,13 @@ export function RecordList({
             </div>
             {mayQuery && line.seq !== null && !line.ofProject && !notQueried.has(line.type) && (
               <div>
-                <RowAction kind="query" id={line.id} pourId={sheet.pourId} about={line.wording.title} />
+                <RowAction
+                  kind="query"
+                  id={line.id}
+                  pourId={sheet.pourId}
+                  seenSeq={sheet.headSeq}
+                  about={line.wording.title}
+                />
               </div>
             )}
           </li>

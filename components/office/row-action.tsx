@@ -19,14 +19,24 @@ export function RowAction({
   kind,
   id,
   pourId,
+  seenSeq,
   about,
   variant = 'quiet',
 }: {
   kind: RowActionKind;
   id: string;
   pourId: string;
+  seenSeq: number;
   about: string;
   variant?: ButtonVariant;
 }) {
-  return <EntryButton pourId={pourId} action={actionOf[kind](id)} about={about} variant={variant} />;
+  return (
+    <EntryButton
+      pourId={pourId}
+      seenSeq={seenSeq}
+      action={actionOf[kind](id)}
+      about={about}
+      variant={variant}
+    />
+  );
 }

@@ -70,6 +70,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
           <div className="flex flex-wrap gap-2 print:hidden">
             <PourActions
               plan={sheet.plan}
+              seenSeq={sheet.headSeq}
               holds={holds}
               role={viewer.role}
               now={viewer.now}
@@ -125,7 +126,12 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
           <NonconformanceRows nonconformances={sheet.nonconformances} viewer={viewer} />
           <div>
             <h3 className="text-lead">Conditions</h3>
-            <ConditionsList conditions={sheet.conditions} pourId={sheet.pourId} viewer={viewer} />
+            <ConditionsList
+              conditions={sheet.conditions}
+              pourId={sheet.pourId}
+              seenSeq={sheet.headSeq}
+              viewer={viewer}
+            />
           </div>
         </div>
       </SheetFrame>

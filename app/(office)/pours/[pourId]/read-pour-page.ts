@@ -6,35 +6,38 @@ import { recordId } from '@/lib/inspection/primitives';
 import type { Role } from '@/lib/inspection/roles';
 import type { Hold, PourState, Sheet } from '@/lib/inspection/sheet-types';
 import type { Action } from '@/lib/server/access';
-import { loadSheet } from '@/lib/server/load-sheet';
-import { withAccess } from '@/lib/server/with-access';
 import { checkChain, type ChainCheck } from '@/lib/server/check-chain';
+import { loadSheet } from '@/lib/server/load-sheet';
+import { withAccess, type PageAccess } from '@/lib/server/with-access';
 
 export interface PourPageData {
   header: PourHeader;
   sheet: Sheet;
   holds: Hold[];
   state: PourState;
-  chain: ChainCheck | null;
+  chain: ChainCheck;
   viewer: { personId: string; role: Role; now: string; licence: string };
 }
 
-/** What a page of one pour rests on: its header, its sheet folded now, its holds, and whether its chain holds. */
-export async function readPourPage(pourId: string, action: Action = 'pour.read'): Promise<PourPageData> {
-  return withAccess(async ({ tx, person, now, require }) => {
-    if (!recordId.safeParse(pourId).success) throw new AppError('not-found');
-    const header = await readPourHeader(tx, pourId, now);
-    if (!header) throw new AppError('not-found');
-    const role = require(action, header.project.id);
-    const sheet = await loadSheet(tx, pourId);
-    const standing = holds(sheet, now);
-    return {
-      header,
-      sheet,
-      holds: standing,
-      state: pourState(sheet, standing, now),
-      chain: await checkChain(tx, header.project.id, pourId),
-      viewer: { personId: person.id, role, now, licence: person.licence },
-    };
-  });
+/** A pour's header, its sheet folded now, its holds, and whether its chain holds; within a page's transaction. */
+export async function readPour(page: PageAccess, pourId: string, action: Action): Promise<PourPageData> {
+  const { tx, person, now } = page;
+  if (!recordId.safeParse(pourId).success) throw new AppError('not-found');
+  const header = await readPourHeader(tx, pourId, now);
+  if (!header) throw new AppError('not-found');
+  const role = page.require(action, header.project.id);
+  const sheet = await loadSheet(tx, pourId);
+  const standing = holds(sheet, now);
+  return {
+    header,
+    sheet,
+    holds: standing,
+    state: pourState(sheet, standing, now),
+    chain: await checkChain(tx, header.project.id, pourId),
+    viewer: { personId: person.id, role, now, licence: person.licence },
+  };
 }
+
+/** What a page of one pour rests on. */
+export const readPourPage = (pourId: string, action: Action = 'pour.read'): Promise<PourPageData> =>
+  withAccess((page) => readPour(page, pourId, action));
