@@ -107,7 +107,7 @@ function again(place: Place, points: PointState[]): Hold[] {
     {
       id: `recheck-awaited:${place.face.id}:${round}`,
       kind: 'recheck-awaited',
-      title: `Read again after the correction, ${failed.length + neighbours.length} points`,
+      title: `Read again after the correction: ${failed.length + neighbours.length === 1 ? 'one point' : `${failed.length + neighbours.length} points`}`,
       detail: `Points ${parts.join('; ')}.`,
       elementId: place.elementId,
       faceId: place.face.id,
