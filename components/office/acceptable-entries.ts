@@ -17,16 +17,20 @@ export function acceptableEntries(sheet: Sheet, about: readonly SubjectRef[]): A
   const add = (id: string, label: string) => found.set(id, { id, label });
   const names = (kind: SubjectRef['kind'], id: string) =>
     about.some((subject) => (subject.kind === kind && subject.id === id) || subject.kind === 'pour');
+  const namesReadingOf = (point: PointState) =>
+    point.readings.some((reading) => names('entry', reading.entry.id));
 
   for (const face of sheet.faces) {
     const whole = names('face', face.faceId) || names('element', face.elementId);
     for (const point of [...face.points, ...face.spots]) {
-      if (whole || names('point', point.key)) addReadings(sheet, point, face.faceId, add);
+      if (whole || names('point', point.key) || namesReadingOf(point))
+        addReadings(sheet, point, face.faceId, add);
     }
   }
   for (const state of sheet.measurements) {
-    if (!names('measurement', state.item.id) && !names('element', state.item.elementId)) continue;
+    const whole = names('measurement', state.item.id) || names('element', state.item.elementId);
     for (const place of state.governing) {
+      if (!whole && !names('entry', place.entry.id)) continue;
       if (place.verdict === 'not-met')
         add(
           place.entry.id,
@@ -67,7 +71,13 @@ export function facesConcerned(
 ): { elementId: string; faceId: string; points: string[] }[] {
   return sheet.faces.flatMap((face) => {
     const points = [...face.points, ...face.spots]
-      .filter((point) => body.about.some((subject) => subject.kind === 'point' && subject.id === point.key))
+      .filter((point) =>
+        body.about.some(
+          (subject) =>
+            (subject.kind === 'point' && subject.id === point.key) ||
+            (subject.kind === 'entry' && point.readings.some((reading) => reading.entry.id === subject.id)),
+        ),
+      )
       .map((point) => point.key);
     const named = body.about.some((subject) => subject.kind === 'face' && subject.id === face.faceId);
     return points.length > 0 || named || body.where.faceId === face.faceId

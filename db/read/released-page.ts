@@ -1,4 +1,5 @@
 import type { BodyOf } from '@/lib/inspection/entry';
+import type { DecisionRule } from '@/lib/inspection/plan';
 import type { Tx } from '@/db/connection';
 
 /** What anybody who holds the address of a release may read of it. */
@@ -13,6 +14,9 @@ export interface ReleasedPage {
   validUntil: string;
   /** What the release entry says: scope, digest, drawings, mix, conditions, head of the chain when it was given. */
   body: BodyOf<'release'>;
+  /** Marks of the elements in its scope, from the plan that it rests on; null: the whole pour. */
+  scopeMarks: string[] | null;
+  decisionRule: DecisionRule;
   entryHash: string;
   seq: number;
   signers: { name: string; role: string; licence: string; certification: string; at: string }[];
@@ -32,6 +36,8 @@ interface Row {
   released_by_name: string;
   valid_until: string;
   body: BodyOf<'release'>;
+  decision_rule: DecisionRule;
+  elements: { id: string; mark: string }[];
   hash: string;
   seq: number;
   voided_at: string | null;
@@ -48,6 +54,10 @@ export async function readReleasedPage(
   const row = await tx('releases as r')
     .join('entries as e', { 'e.project_id': 'r.project_id', 'e.id': 'r.entry_id' })
     .join('pours as p', { 'p.project_id': 'r.project_id', 'p.id': 'r.pour_id' })
+    .joinRaw(
+      `join plans as l on l.project_id = r.project_id and l.pour_id = r.pour_id
+         and l.revision = cast(e.body ->> 'planRevision' as integer)`,
+    )
     .join('projects as j', 'j.id', 'r.project_id')
     .join('users as u', 'u.id', 'r.released_by')
     .where({ 'r.project_id': projectId, 'r.number': number })
@@ -63,6 +73,8 @@ export async function readReleasedPage(
       'u.name as released_by_name',
       'r.valid_until',
       'e.body',
+      tx.raw(`l.document -> 'decisionRule' as decision_rule`),
+      tx.raw(`l.document -> 'elements' as elements`),
       'e.hash',
       'e.seq',
       'r.voided_at',
@@ -93,6 +105,9 @@ export async function readReleasedPage(
     releasedByName: row.released_by_name,
     validUntil: row.valid_until,
     body: row.body,
+    scopeMarks:
+      row.body.scope.elementIds?.map((id) => row.elements.find((one) => one.id === id)?.mark ?? id) ?? null,
+    decisionRule: row.decision_rule,
     entryHash: row.hash,
     seq: row.seq,
     signers,

@@ -8,22 +8,17 @@ import { SheetFrame } from '@/components/ui/sheet-frame';
 import { TitleBlock } from '@/components/ui/title-block';
 import { revisionLetter } from '@/lib/inspection/plan';
 import { roles, roleWords } from '@/lib/inspection/roles';
-import { readReleased, type Released } from './read-released';
+import { publicRelease, type PublicRelease } from '@/lib/server/public-release';
 
 export const metadata: Metadata = { title: 'Release', robots: { index: false, follow: false } };
 
 /** Whether a release stands, for anybody who holds its address: scope, validity as of now, digest and chain. */
 export default async function ReleasedPage({ params }: { params: Promise<{ token: string }> }) {
-  const found = await readReleased((await params).token);
-  if (!found) notFound();
-  const { page, plan, chain, now } = found;
-  const standing = standingOf(found);
-  const scope =
-    page.body.scope.elementIds === null
-      ? 'the whole pour'
-      : page.body.scope.elementIds
-          .map((id) => plan?.elements.find((element) => element.id === id)?.mark ?? 'an element of the plan')
-          .join(', ');
+  const now = new Date().toISOString();
+  const page = await publicRelease((await params).token, now);
+  if (!page) notFound();
+  const { chain } = page;
+  const standing = standingOf(page, now);
   return (
     <main id="main" className="mx-auto grid max-w-3xl gap-6 px-4 py-8">
       <SheetFrame
@@ -48,7 +43,7 @@ export default async function ReleasedPage({ params }: { params: Promise<{ token
               {page.pour.title}, {page.pour.location}
             </Line>
             <Line label="Scope">
-              {scope}
+              {page.scopeMarks?.join(', ') ?? 'the whole pour'}
               {page.body.scope.limits && `. ${page.body.scope.limits}`}
             </Line>
             <Line label="Given">
@@ -73,9 +68,7 @@ export default async function ReleasedPage({ params }: { params: Promise<{ token
               {page.body.dispositionIds.length > 0 &&
                 `; ${page.body.dispositionIds.length} ${page.body.dispositionIds.length === 1 ? 'decision' : 'decisions'} of the engineer`}
             </Line>
-            <Line label="Decision rule">
-              {plan ? decisionRuleWords(plan.decisionRule) : 'as in the plan'}
-            </Line>
+            <Line label="Decision rule">{decisionRuleWords(page.decisionRule)}</Line>
             {page.body.conditions.length > 0 && (
               <Line label="Conditions during placing">
                 {page.body.conditions.map((condition) => (
@@ -130,7 +123,10 @@ const roleName = (name: string): string => {
 };
 
 /** Void, over, used, or standing: judged now, by the time of this request. */
-function standingOf({ page, now }: Released): {
+function standingOf(
+  page: PublicRelease,
+  now: string,
+): {
   word: string;
   tone: 'met' | 'hold' | 'plain';
   sentence: string;
@@ -143,8 +139,7 @@ function standingOf({ page, now }: Released): {
       sentence: `Void since ${at(page.voided.at)}: ${page.voided.reason} It does not permit placing.`,
     };
   }
-  const until = page.placedAt ?? now;
-  if (until > page.validUntil) {
+  if (!page.stands) {
     return {
       word: 'validity is over',
       tone: 'hold',
