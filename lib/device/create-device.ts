@@ -18,7 +18,7 @@ import { emptySnapshot, pourOf, projectOf, snapshotOf } from './snapshot-of';
 import { markName, personsMarked, readMark } from './store/high-water-mark';
 import { openSettingsStore, type PersonHere, type SettingsStore } from './store/settings-store';
 import { askServer } from './sync/ask-server';
-import { SyncLane } from './sync/sync-lane';
+import { SyncLane, type LaneState } from './sync/sync-lane';
 
 /** A device that can be put away: tests do, a page never needs to. */
 export interface RunningDevice extends Device {
@@ -44,6 +44,9 @@ class FieldDevice {
   #snapshot: DeviceSnapshot = emptySnapshot;
   #opened = new Map<string, { version: number; open: OpenPour }>();
   #version = 0;
+  #refreshing: Promise<void> | null = null;
+  /** Why it is not known who is signed in; shown while nobody's work is open. */
+  #noAnswer: LaneState = { phase: 'idle', message: null };
   #listeners = new Set<() => void>();
   #storage: DeviceSnapshot['storage'] = emptySnapshot.storage;
   #updateReady = false;
@@ -135,7 +138,14 @@ class FieldDevice {
   }
 
   /** Asks the server whose session this is, and opens that person's work. Without an answer the open one stays. */
-  async #refreshPerson(): Promise<void> {
+  #refreshPerson(): Promise<void> {
+    this.#refreshing ??= this.#askWhoIsHere().finally(() => {
+      this.#refreshing = null;
+    });
+    return this.#refreshing;
+  }
+
+  async #askWhoIsHere(): Promise<void> {
     const answer = await askServer(
       this.env,
       { method: 'GET', path: '/api/sync/index', timeoutMs: 10_000 },
@@ -148,6 +158,10 @@ class FieldDevice {
       this.#lostBefore = null;
       await this.#work?.setIndex(answer.data);
       await this.#work?.setClockOffset(answer.clockOffsetMs);
+      this.#lane.heardWhoIsHere();
+    } else {
+      this.#noAnswer = { phase: answer.phase, message: answer.sentence };
+      this.#changed();
     }
     await this.#lane.run();
   }
@@ -217,7 +231,7 @@ class FieldDevice {
       return {
         ...emptySnapshot,
         ...common,
-        sync: { ...emptySnapshot.sync, lostEntries: this.#lostBefore },
+        sync: { ...emptySnapshot.sync, ...this.#noAnswer, lostEntries: this.#lostBefore },
       };
     }
     return { ...snapshotOf(this.#work, this.#lane.state, this.env.now()), ...common };

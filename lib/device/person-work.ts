@@ -51,6 +51,8 @@ export class PersonWork {
   readonly #opening = new Map<string, Promise<void>>();
   readonly #channel: TabChannel;
   #closed = false;
+  /** Counts what this tab has written. */
+  #changes = 0;
 
   private constructor(
     private readonly env: DeviceEnvironment,
@@ -121,31 +123,47 @@ export class PersonWork {
   }
 
   #tell(message: TabMessage): void {
+    if (this.#closed) return;
+    this.#changes += 1;
     this.#channel.post(message);
     this.changed(message.send === true);
   }
 
+  /** Another tab has changed the store. What this tab writes meanwhile must not be covered by what was read before. */
   async #heard(message: TabMessage): Promise<void> {
-    if (this.#closed) return;
-    await this.#readAll();
-    for (const stream of message.streams) if (this.memory.has(stream)) await this.#loadStream(stream);
-    for (const stream of message.streams) {
-      const plan = this.memory.isOpen(stream) ? await this.db.get('plans', stream) : undefined;
-      if (plan) this.memory.setPlan(plan);
+    try {
+      for (let before = -1; before !== this.#changes && !this.#closed;) {
+        before = this.#changes;
+        await this.#readAll();
+        for (const stream of message.streams) if (this.memory.has(stream)) await this.#loadStream(stream);
+        for (const stream of message.streams) {
+          const plan = this.memory.isOpen(stream) ? await this.db.get('plans', stream) : undefined;
+          if (plan) this.memory.setPlan(plan);
+        }
+      }
+    } catch (error) {
+      // A store closed in the middle of this has nobody left to tell.
+      if (!this.#closed) throw error;
+      return;
     }
     this.changed(false);
   }
 
   async #loadStream(stream: string): Promise<void> {
-    const [kept, cursor] = await Promise.all([
-      this.db.getAllFromIndex('entries', 'stream', stream),
-      this.db.get('cursors', stream),
-    ]);
-    this.memory.load(
-      stream,
-      kept.map((one) => one.entry),
-      cursor?.after ?? 0,
-    );
+    for (;;) {
+      const before = this.#changes;
+      const [kept, cursor] = await Promise.all([
+        this.db.getAllFromIndex('entries', 'stream', stream),
+        this.db.get('cursors', stream),
+      ]);
+      if (before !== this.#changes) continue;
+      this.memory.load(
+        stream,
+        kept.map((one) => one.entry),
+        cursor?.after ?? 0,
+      );
+      return;
+    }
   }
 
   /** Reads a pour's two streams and its plan into memory. Asked twice, it reads once. */
@@ -264,14 +282,15 @@ export class PersonWork {
 
   async takePage(page: StreamPage): Promise<void> {
     const stored = await storePage(this.db, page);
+    await this.loss.found(page.entries);
+    // From here on without a pause: what is being read from the store meanwhile is read again (see #loadStream).
     this.memory.merge(page.stream, page.entries, page.head);
     if (page.plan) this.memory.setPlan(page.plan);
+    this.planRevisions.set(page.stream, stored.cursor.planRevision);
     for (const photo of stored.photos) this.photos.set(photo.photoId, photo);
     for (const record of stored.offeredAgain) this.#waits(record);
-    this.planRevisions.set(page.stream, stored.cursor.planRevision);
-    await this.loss.found(page.entries);
-    const news = page.entries.length > 0 || page.plan !== null || stored.offeredAgain.length > 0;
     if (stored.offeredAgain.length > 0) this.#mark();
+    const news = page.entries.length > 0 || page.plan !== null || stored.offeredAgain.length > 0;
     if (news) this.#tell({ streams: [page.stream] });
   }
 

@@ -1,3 +1,4 @@
+import { allOrNothing } from './all-or-nothing';
 import type { PersonDatabase } from './person-database';
 
 /**
@@ -10,24 +11,24 @@ export async function forgetPour(db: PersonDatabase, pourId: string): Promise<st
     ['entries', 'acked', 'cursors', 'plans', 'photos', 'photoBytes', 'outbox'],
     'readwrite',
   );
-  tx.done.catch(() => undefined);
-  const [entries, acked, waiting, photos] = await Promise.all([
-    tx.objectStore('entries').index('stream').getAllKeys(pourId),
-    tx.objectStore('acked').index('stream').getAllKeys(pourId),
-    tx.objectStore('outbox').getAllKeys(),
-    tx.objectStore('photos').getAll(),
-  ]);
-  const waits = new Set(waiting);
-  const gone = photos
-    .filter((photo) => photo.pourId === pourId && photo.progress === 'stored')
-    .map((photo) => photo.photoId);
-  await Promise.all([
-    tx.objectStore('cursors').delete(pourId),
-    tx.objectStore('plans').delete(pourId),
-    ...entries.filter((id) => !waits.has(id)).map((id) => tx.objectStore('entries').delete(id)),
-    ...acked.map((id) => tx.objectStore('acked').delete(id)),
-    ...gone.flatMap((id) => [tx.objectStore('photos').delete(id), tx.objectStore('photoBytes').delete(id)]),
-    tx.done,
-  ]);
-  return gone;
+  return allOrNothing(tx, async () => {
+    const [entries, acked, waiting, photos] = await Promise.all([
+      tx.objectStore('entries').index('stream').getAllKeys(pourId),
+      tx.objectStore('acked').index('stream').getAllKeys(pourId),
+      tx.objectStore('outbox').getAllKeys(),
+      tx.objectStore('photos').getAll(),
+    ]);
+    const waits = new Set(waiting);
+    const gone = photos
+      .filter((photo) => photo.pourId === pourId && photo.progress === 'stored')
+      .map((photo) => photo.photoId);
+    await Promise.all([
+      tx.objectStore('cursors').delete(pourId),
+      tx.objectStore('plans').delete(pourId),
+      ...entries.filter((id) => !waits.has(id)).map((id) => tx.objectStore('entries').delete(id)),
+      ...acked.map((id) => tx.objectStore('acked').delete(id)),
+      ...gone.flatMap((id) => [tx.objectStore('photos').delete(id), tx.objectStore('photoBytes').delete(id)]),
+    ]);
+    return gone;
+  });
 }

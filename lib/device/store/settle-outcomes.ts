@@ -1,5 +1,6 @@
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { PushOutcome } from '@/lib/inspection/wire';
+import { allOrNothing } from './all-or-nothing';
 import type { OutboxRecord, PersonDatabase, PhotoRecord, RefusedRecord } from './person-database';
 
 /** What the server's answers changed here. */
@@ -30,62 +31,63 @@ export async function settleOutcomes(
   const tx = db.transaction(['outbox', 'entries', 'acked', 'refused', 'photos'], 'readwrite', {
     durability: 'strict',
   });
-  tx.done.catch(() => undefined);
-  const entries = tx.objectStore('entries');
-  const photos = tx.objectStore('photos');
-  const [kept, photosOf] = await Promise.all([
-    Promise.all(outcomes.map(({ id }) => entries.get(id))),
-    Promise.all(
-      outcomes.map(({ id }) => {
-        const photoId = photoIdOf(bySent.get(id));
-        return photoId === null ? undefined : photos.get(photoId);
-      }),
-    ),
-  ]);
-  const writes: Promise<unknown>[] = [];
-  outcomes.forEach((outcome, index) => {
-    const record = bySent.get(outcome.id);
-    if (!record) return;
-    if (outcome.outcome === 'refused' && outcome.code === 'wrong-author') {
-      settled.otherAuthor = true;
-      return;
-    }
-    bySent.delete(outcome.id);
-    writes.push(tx.objectStore('outbox').delete(record.id));
-    if (outcome.outcome === 'refused') {
-      const refused: RefusedRecord = {
-        id: record.id,
-        deviceSeq: record.deviceSeq,
-        envelope: record.envelope,
-        code: outcome.code,
-        sentence: outcome.sentence,
-        field: outcome.field ?? null,
-        at,
-      };
-      settled.refused.push(refused);
-      writes.push(tx.objectStore('refused').put(refused), entries.delete(record.id));
-      const photo = photosOf[index];
-      if (photo) {
-        const without: PhotoRecord = { ...photo, progress: 'refused', problem: outcome.sentence };
-        settled.photos.push(without);
-        writes.push(photos.put(without));
+  await allOrNothing(tx, async () => {
+    const entries = tx.objectStore('entries');
+    const photos = tx.objectStore('photos');
+    const [kept, photosOf] = await Promise.all([
+      Promise.all(outcomes.map(({ id }) => entries.get(id))),
+      Promise.all(
+        outcomes.map(({ id }) => {
+          const photoId = photoIdOf(bySent.get(id));
+          return photoId === null ? undefined : photos.get(photoId);
+        }),
+      ),
+    ]);
+    const writes: Promise<unknown>[] = [];
+    outcomes.forEach((outcome, index) => {
+      const record = bySent.get(outcome.id);
+      if (!record) return;
+      if (outcome.outcome === 'refused' && outcome.code === 'wrong-author') {
+        settled.otherAuthor = true;
+        return;
       }
-      return;
-    }
-    settled.confirmedIds.push(record.id);
-    const here = kept[index];
-    if (here) {
-      const entry = { ...here.entry, ...outcome.receipt };
-      settled.confirmed.push(entry);
-      writes.push(entries.put({ ...here, entry }));
-    }
-    // Offered a second time and known after all: it is there, whatever a pull shows of it.
-    if (record.offeredAgain && outcome.outcome === 'known') return;
-    writes.push(
-      tx.objectStore('acked').put({ id: record.id, stream: record.stream, seq: outcome.receipt.seq }),
-    );
+      bySent.delete(outcome.id);
+      writes.push(tx.objectStore('outbox').delete(record.id));
+      if (outcome.outcome === 'refused') {
+        const refused: RefusedRecord = {
+          id: record.id,
+          deviceSeq: record.deviceSeq,
+          envelope: record.envelope,
+          code: outcome.code,
+          sentence: outcome.sentence,
+          field: outcome.field ?? null,
+          at,
+        };
+        settled.refused.push(refused);
+        writes.push(tx.objectStore('refused').put(refused), entries.delete(record.id));
+        const photo = photosOf[index];
+        if (photo) {
+          const without: PhotoRecord = { ...photo, progress: 'refused', problem: outcome.sentence };
+          settled.photos.push(without);
+          writes.push(photos.put(without));
+        }
+        return;
+      }
+      settled.confirmedIds.push(record.id);
+      const here = kept[index];
+      if (here) {
+        const entry = { ...here.entry, ...outcome.receipt };
+        settled.confirmed.push(entry);
+        writes.push(entries.put({ ...here, entry }));
+      }
+      // Offered a second time and known after all: it is there, whatever a pull shows of it.
+      if (record.offeredAgain && outcome.outcome === 'known') return;
+      writes.push(
+        tx.objectStore('acked').put({ id: record.id, stream: record.stream, seq: outcome.receipt.seq }),
+      );
+    });
+    await Promise.all(writes);
   });
-  await Promise.all([...writes, tx.done]);
   return settled;
 }
 

@@ -1,6 +1,7 @@
 import type { Plan } from '@/lib/inspection/plan';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { StoredEntry } from '@/lib/inspection/wire';
+import { allOrNothing } from './all-or-nothing';
 import { envelopeOf } from './envelope';
 import type { CursorRecord, OutboxRecord, PersonDatabase, PhotoRecord } from './person-database';
 
@@ -34,54 +35,55 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
     ['entries', 'cursors', 'plans', 'acked', 'outbox', 'photos', 'strays'],
     'readwrite',
   );
-  tx.done.catch(() => undefined);
-  const [before, acked, photosNamed] = await Promise.all([
-    tx.objectStore('cursors').get(page.stream),
-    tx.objectStore('acked').index('stream').getAll(page.stream),
-    Promise.all(
-      page.entries.map((entry) => {
-        const photoId = photoNamedBy(entry);
-        return photoId === null ? undefined : tx.objectStore('photos').get(photoId);
-      }),
-    ),
-  ]);
-  const cursor: CursorRecord = {
-    stream: page.stream,
-    after: page.head,
-    headHash: page.headHash,
-    planRevision: page.plan?.revision ?? before?.planRevision ?? 0,
-  };
-  const pulled = new Set(page.entries.map((entry) => entry.id));
-  const missing = page.complete ? acked.filter((one) => !pulled.has(one.id)) : [];
-  const keptMissing = await Promise.all(missing.map((one) => tx.objectStore('entries').get(one.id)));
+  return allOrNothing(tx, async () => {
+    const [before, acked, photosNamed] = await Promise.all([
+      tx.objectStore('cursors').get(page.stream),
+      tx.objectStore('acked').index('stream').getAll(page.stream),
+      Promise.all(
+        page.entries.map((entry) => {
+          const photoId = photoNamedBy(entry);
+          return photoId === null ? undefined : tx.objectStore('photos').get(photoId);
+        }),
+      ),
+    ]);
+    const cursor: CursorRecord = {
+      stream: page.stream,
+      after: page.head,
+      headHash: page.headHash,
+      planRevision: page.plan?.revision ?? before?.planRevision ?? 0,
+    };
+    const pulled = new Set(page.entries.map((entry) => entry.id));
+    const missing = page.complete ? acked.filter((one) => !pulled.has(one.id)) : [];
+    const keptMissing = await Promise.all(missing.map((one) => tx.objectStore('entries').get(one.id)));
 
-  const writes: Promise<unknown>[] = [tx.objectStore('cursors').put(cursor)];
-  if (page.plan) writes.push(tx.objectStore('plans').put(page.plan));
-  for (const entry of page.entries) {
-    writes.push(
-      tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }),
-      tx.objectStore('strays').delete(entry.id),
-    );
-  }
-  for (const one of acked) {
-    if (pulled.has(one.id) || page.complete) writes.push(tx.objectStore('acked').delete(one.id));
-  }
-  const offeredAgain: OutboxRecord[] = [];
-  for (const kept of keptMissing) {
-    if (!kept) continue;
-    const record = offerAgain(kept.entry, kept.stream);
-    offeredAgain.push(record);
-    writes.push(tx.objectStore('outbox').put(record));
-  }
-  const photos = new Map<string, PhotoRecord>();
-  page.entries.forEach((entry, index) => {
-    const photo = photos.get(photoNamedBy(entry) ?? '') ?? photosNamed[index];
-    const next = photo && photoAfter(photo, entry);
-    if (next) photos.set(next.photoId, next);
+    const writes: Promise<unknown>[] = [tx.objectStore('cursors').put(cursor)];
+    if (page.plan) writes.push(tx.objectStore('plans').put(page.plan));
+    for (const entry of page.entries) {
+      writes.push(
+        tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }),
+        tx.objectStore('strays').delete(entry.id),
+      );
+    }
+    for (const one of acked) {
+      if (pulled.has(one.id) || page.complete) writes.push(tx.objectStore('acked').delete(one.id));
+    }
+    const offeredAgain: OutboxRecord[] = [];
+    for (const kept of keptMissing) {
+      if (!kept) continue;
+      const record = offerAgain(kept.entry, kept.stream);
+      offeredAgain.push(record);
+      writes.push(tx.objectStore('outbox').put(record));
+    }
+    const photos = new Map<string, PhotoRecord>();
+    page.entries.forEach((entry, index) => {
+      const photo = photos.get(photoNamedBy(entry) ?? '') ?? photosNamed[index];
+      const next = photo && photoAfter(photo, entry);
+      if (next) photos.set(next.photoId, next);
+    });
+    for (const photo of photos.values()) writes.push(tx.objectStore('photos').put(photo));
+    await Promise.all(writes);
+    return { cursor, photos: [...photos.values()], offeredAgain };
   });
-  for (const photo of photos.values()) writes.push(tx.objectStore('photos').put(photo));
-  await Promise.all([...writes, tx.done]);
-  return { cursor, photos: [...photos.values()], offeredAgain };
 }
 
 /** An entry that the server had taken in, as an outbox record once more. Its id is its own: nothing is doubled. */
@@ -133,34 +135,35 @@ export async function restartStream(
   const tx = db.transaction(['entries', 'cursors', 'acked', 'outbox', 'strays'], 'readwrite', {
     durability: 'strict',
   });
-  tx.done.catch(() => undefined);
-  const [kept, acked] = await Promise.all([
-    tx.objectStore('entries').index('stream').getAll(stream),
-    tx.objectStore('acked').index('stream').getAllKeys(stream),
-  ]);
-  const restarted: RestartedStream = { offeredAgain: [], waiting: [], strays: [] };
-  const writes: Promise<unknown>[] = [
-    // Revision 0 asks for the plan too: the restored one may be older than ours.
-    tx.objectStore('cursors').put({ stream, after: 0, headHash: null, planRevision: 0 }),
-    ...acked.map((id) => tx.objectStore('acked').delete(id)),
-  ];
-  for (const one of kept) {
-    const { entry } = one;
-    if (entry.seq === undefined) continue;
-    if (entry.authorId === own.personId && entry.deviceId === own.deviceId) {
-      const record = offerAgain(entry, stream);
-      const waiting: RecordedEntry = { ...envelopeOf(entry), authorRole: entry.authorRole };
-      restarted.offeredAgain.push(record);
-      restarted.waiting.push(waiting);
-      writes.push(
-        tx.objectStore('outbox').put(record),
-        tx.objectStore('entries').put({ ...one, entry: waiting }),
-      );
-    } else {
-      restarted.strays.push(one.id);
-      writes.push(tx.objectStore('strays').put(one), tx.objectStore('entries').delete(one.id));
+  return allOrNothing(tx, async () => {
+    const [kept, acked] = await Promise.all([
+      tx.objectStore('entries').index('stream').getAll(stream),
+      tx.objectStore('acked').index('stream').getAllKeys(stream),
+    ]);
+    const restarted: RestartedStream = { offeredAgain: [], waiting: [], strays: [] };
+    const writes: Promise<unknown>[] = [
+      // Revision 0 asks for the plan too: the restored one may be older than ours.
+      tx.objectStore('cursors').put({ stream, after: 0, headHash: null, planRevision: 0 }),
+      ...acked.map((id) => tx.objectStore('acked').delete(id)),
+    ];
+    for (const one of kept) {
+      const { entry } = one;
+      if (entry.seq === undefined) continue;
+      if (entry.authorId === own.personId && entry.deviceId === own.deviceId) {
+        const record = offerAgain(entry, stream);
+        const waiting: RecordedEntry = { ...envelopeOf(entry), authorRole: entry.authorRole };
+        restarted.offeredAgain.push(record);
+        restarted.waiting.push(waiting);
+        writes.push(
+          tx.objectStore('outbox').put(record),
+          tx.objectStore('entries').put({ ...one, entry: waiting }),
+        );
+      } else {
+        restarted.strays.push(one.id);
+        writes.push(tx.objectStore('strays').put(one), tx.objectStore('entries').delete(one.id));
+      }
     }
-  }
-  await Promise.all([...writes, tx.done]);
-  return restarted;
+    await Promise.all(writes);
+    return restarted;
+  });
 }

@@ -1,4 +1,5 @@
 import type { RecordedEntry } from '@/lib/inspection/sheet';
+import { allOrNothing } from './all-or-nothing';
 import { envelopeOf } from './envelope';
 import {
   isDeviceFull,
@@ -49,29 +50,28 @@ async function writeOnce(
     'readwrite',
     { durability: 'strict' },
   );
-  // Should the read below fail, the transaction fails with it: one of the two is enough to be told of.
-  tx.done.catch(() => undefined);
-  const last = ((await tx.objectStore('meta').get('deviceSeq')) as number | undefined) ?? 0;
-  const deviceSeq = Math.max(last, floor) + 1;
-  const entry = build(deviceSeq);
-  const stream = streamOf(entry);
-  const outbox: OutboxRecord = {
-    id: entry.id,
-    deviceSeq,
-    stream,
-    envelope: envelopeOf(entry),
-    offeredAgain: false,
-    problem: null,
-  };
-  await Promise.all([
-    tx.objectStore('meta').put(deviceSeq, 'deviceSeq'),
-    tx.objectStore('entries').put({ id: entry.id, stream, entry }),
-    tx.objectStore('outbox').put(outbox),
-    photo && tx.objectStore('photos').put(photo.record),
-    photo && tx.objectStore('photoBytes').put({ photoId: photo.record.photoId, bytes: photo.bytes }),
-    tx.done,
-  ]);
-  return { entry, outbox };
+  return allOrNothing(tx, async () => {
+    const last = ((await tx.objectStore('meta').get('deviceSeq')) as number | undefined) ?? 0;
+    const deviceSeq = Math.max(last, floor) + 1;
+    const entry = build(deviceSeq);
+    const stream = streamOf(entry);
+    const outbox: OutboxRecord = {
+      id: entry.id,
+      deviceSeq,
+      stream,
+      envelope: envelopeOf(entry),
+      offeredAgain: false,
+      problem: null,
+    };
+    await Promise.all([
+      tx.objectStore('meta').put(deviceSeq, 'deviceSeq'),
+      tx.objectStore('entries').put({ id: entry.id, stream, entry }),
+      tx.objectStore('outbox').put(outbox),
+      photo && tx.objectStore('photos').put(photo.record),
+      photo && tx.objectStore('photoBytes').put({ photoId: photo.record.photoId, bytes: photo.bytes }),
+    ]);
+    return { entry, outbox };
+  });
 }
 
 const BALLAST_BYTES = 512 * 1024;

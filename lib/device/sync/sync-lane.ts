@@ -55,6 +55,11 @@ export class SyncLane {
     this.#set('idle', null);
   }
 
+  /** The server has just said that the person whose work is open is the one signed in. */
+  heardWhoIsHere(): void {
+    this.#indexAt = this.env.now();
+  }
+
   /** Something was recorded: send it soon. A back-off under way is not cut short. */
   soon(): void {
     if (this.#failures > 0) return;
