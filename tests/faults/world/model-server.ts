@@ -107,12 +107,12 @@ export class ModelServer {
   }
 
   /** Answers one request; `Response` like a real one. */
-  async handle(address: string, init: RequestInit): Promise<Response> {
+  async handle(address: string, init: RequestInit, session = this.session): Promise<Response> {
     const path = new URL(address, 'http://phone.example.test').pathname;
     if (path.startsWith('/store/')) return this.#put(path, init);
-    if (!this.session) return json(401, { code: 'sign-in-needed', sentence: 'Sign in to go on.' });
-    if (path === '/api/sync/index') return json(200, this.#index(this.session));
-    if (path === '/api/sync/push') return json(200, this.#push(this.session, await bodyOf(init)));
+    if (!session) return json(401, { code: 'sign-in-needed', sentence: 'Sign in to go on.' });
+    if (path === '/api/sync/index') return json(200, this.#index(session));
+    if (path === '/api/sync/push') return json(200, this.#push(session, await bodyOf(init)));
     if (path === '/api/sync/pull') return json(200, this.#pull(await bodyOf(init)));
     const photo = /^\/api\/photos\/([^/]+)\/(upload-address|uploaded|address)$/.exec(path);
     if (photo) return this.#photo(photo[1] ?? '', photo[2] ?? '');
