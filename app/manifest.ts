@@ -23,7 +23,7 @@ export default function manifest(): MetadataRoute.Manifest {
     ],
     shortcuts: [
       { name: 'Pours on this device', url: '/field' },
-      { name: 'Not sent yet', url: '/field/outbox' },
+      { name: 'Not sent yet', url: '/field/not-sent' },
       { name: 'Pours in the office', url: '/pours' },
     ],
   };

@@ -1,4 +1,5 @@
 import { withUnit } from '@/lib/concrete/length';
+import { isOtherBar } from './judge-point';
 import type { Face, Plan, Requirement } from './plan';
 import type { FaceState, Hold, PointState, ReadingState, Sheet } from './sheet-types';
 
@@ -36,6 +37,8 @@ export function coverHolds(sheet: Sheet): Hold[] {
     const all = [...state.points, ...state.spots];
     return [
       ...place.face.requirements.flatMap((requirement) => notMet(sheet, place, requirement, all)),
+      ...depthNotMet(place, all),
+      ...otherBars(place, all),
       ...again(place, all),
       ...notVerified(place, all),
       ...missing(place, state),
@@ -84,6 +87,65 @@ function notMet(sheet: Sheet, place: Place, requirement: Requirement, points: Po
     };
   });
 }
+
+/** Readings of a point's latest round: the one with most cover decides on depth, which need not be the one that governs cover. */
+function latestOf(point: PointState): ReadingState[] {
+  const standing = point.readings.filter(
+    (reading) => reading.current !== null && reading.judged.verdict !== 'not-verified',
+  );
+  const latest = Math.max(...standing.map((reading) => reading.round));
+  return standing.filter((reading) => reading.round === latest);
+}
+
+/** Low effective depth is a hold of its own: a swapped layer can pass the cover and fail this. */
+function depthNotMet(place: Place, points: PointState[]): Hold[] {
+  const isLow = (reading: ReadingState) =>
+    reading.depth?.verdict === 'not-met' && reading.acceptedBy === null;
+  const low = points.filter((point) => point.recheck !== 'failed' && latestOf(point).some(isLow));
+  const first = low[0] && latestOf(low[0]).find(isLow);
+  if (!first) return [];
+  return [
+    {
+      id: `effective-depth:${place.face.id}:${Math.max(...low.map((point) => point.roundAsked))}`,
+      kind: 'effective-depth',
+      title: 'Effective depth is low',
+      detail: first.depth?.reason ?? '',
+      ...placed(place, low),
+      clearedBy: 'superintendent',
+      need: 'Put the steel right and have it read again, or ask the engineer.',
+    },
+  ];
+}
+
+/** A bar that is not the one drawn departs from the drawing, even where it is larger and its cover is met. */
+function otherBars(place: Place, points: PointState[]): Hold[] {
+  const departing = (reading: ReadingState) =>
+    reading.requirement !== null &&
+    reading.acceptedBy === null &&
+    isOtherBar(reading.requirement, reading.current?.asFoundBar ?? null);
+  const found = points.filter((point) => point.recheck !== 'failed' && latestOf(point).some(departing));
+  const first = found[0] && latestOf(found[0]).find(departing);
+  if (!first) return [];
+  return [
+    {
+      id: `bar-departs:${place.face.id}:${Math.max(...found.map((point) => point.roundAsked))}`,
+      kind: 'bar-departs',
+      title: `Bar ${first.current?.asFoundBar ?? ''} found, ${first.requirement?.barDesignation ?? ''} planned`,
+      detail: 'Another size is a departure from the drawing, a larger one too.',
+      ...placed(place, found),
+      clearedBy: 'engineer',
+      need: 'The engineer decides on it, or the bar is changed and read again.',
+    },
+  ];
+}
+
+const placed = (place: Place, points: PointState[]) => ({
+  elementId: place.elementId,
+  faceId: place.face.id,
+  where: `${place.where}, ${listed(points.map((point) => point.label))}`,
+  since: earliest(points.flatMap((point) => point.readings.map((one) => one.entry.recordedAt))),
+  subjects: points.map((point) => ({ kind: 'point' as const, id: point.key })),
+});
 
 function decisionAskedFor(sheet: Sheet, pointKey: string): boolean {
   return sheet.nonconformances.some(

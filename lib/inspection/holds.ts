@@ -11,6 +11,8 @@ const order: Hold['kind'][] = [
   'plan-incomplete',
   'superseded-drawing',
   'cover-not-met',
+  'effective-depth',
+  'bar-departs',
   'measurement-out',
   'check-not-met',
   'conflict',

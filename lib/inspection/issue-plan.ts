@@ -1,7 +1,9 @@
-import { findBarFor } from '@/lib/concrete/bars';
+import { barsOf, findBarFor, type BarSystem } from '@/lib/concrete/bars';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
+import type { CoverRequirement, CoverRequirementInput } from '@/lib/concrete/cover-input';
 import { coverRequirement } from '@/lib/concrete/cover-requirement';
 import { defaultPointCount, drawPoints } from '@/lib/concrete/reading-points';
+import { depthTolerance } from '@/lib/concrete/tolerances';
 import type { Face, Plan, ReadingPoint, Requirement } from './plan';
 import type { PlanInput } from './plan-input';
 
@@ -45,7 +47,31 @@ function issueRequirement(
   wanted: FaceInput['requirements'][number],
 ): Requirement {
   const barDiameterMm = barDiameter(wanted.barDesignation, input.basis);
-  const computed = coverRequirement({
+  const coverFor = (diameterMm: number) =>
+    coverRequirement(coverInputOf(input, element, face, wanted, diameterMm));
+  const computed = coverFor(barDiameterMm);
+  const depth = depthOf(input, element, face, wanted);
+  return {
+    id: wanted.id,
+    steel: wanted.steel,
+    barDesignation: wanted.barDesignation,
+    barDiameterMm,
+    ...computed,
+    warnings: [...computed.warnings],
+    trail: [...computed.trail],
+    asFound: stricterBars(input, wanted.barDesignation, computed.leastAcceptedMm, coverFor),
+    ...(depth ? { depth } : {}),
+  };
+}
+
+function coverInputOf(
+  input: PlanInput,
+  element: ElementInput,
+  face: FaceInput,
+  wanted: FaceInput['requirements'][number],
+  barDiameterMm: number,
+): CoverRequirementInput {
+  return {
     basis: input.basis,
     element: element.type,
     meeting: face.meeting,
@@ -62,16 +88,81 @@ function issueRequirement(
     ...(wanted.bundleOf === undefined ? {} : { bundleOf: wanted.bundleOf }),
     ...input.concrete,
     showIn: input.units,
-  });
-  return {
-    id: wanted.id,
-    steel: wanted.steel,
-    barDesignation: wanted.barDesignation,
-    barDiameterMm,
-    ...computed,
-    warnings: [...computed.warnings],
-    trail: [...computed.trail],
   };
+}
+
+const barSystems: Record<PlanInput['basis'], BarSystem | null> = {
+  'aci-318-19': 'astm',
+  'en-1992': 'en',
+  'csa-a23.1': 'csa',
+  'as-3600': 'as-nzs',
+  'is-456': 'is',
+  contract: null,
+};
+
+/** The bar sizes of the basis that would ask for more cover than the planned one: kept, so that a device needs no tables. */
+function stricterBars(
+  input: PlanInput,
+  planned: string,
+  leastAcceptedMm: number,
+  coverFor: (diameterMm: number) => CoverRequirement,
+): NonNullable<Requirement['asFound']> {
+  const system = barSystems[input.basis];
+  if (!system) return [];
+  return barsOf(system).flatMap((bar) => {
+    if (bar.designation === findBarFor(planned, input.basis)?.designation) return [];
+    try {
+      const found = coverFor(bar.diameterMm);
+      return found.leastAcceptedMm > leastAcceptedMm
+        ? [
+            {
+              barDesignation: bar.designation,
+              leastAcceptedMm: found.leastAcceptedMm,
+              mostAcceptedMm: found.mostAcceptedMm,
+            },
+          ]
+        : [];
+    } catch (error) {
+      // A size that does not fit this section at all is no size to be judged by here.
+      if (error instanceof ConcreteError) return [];
+      throw error;
+    }
+  });
+}
+
+/** Effective depth is judged where the steel is the main bar, the element has one planned, and the basis has a tolerance. */
+function depthOf(
+  input: PlanInput,
+  element: ElementInput,
+  face: FaceInput,
+  wanted: FaceInput['requirements'][number],
+): Requirement['depth'] {
+  if (!wanted.mainBar || element.effectiveDepthMm === null) return undefined;
+  if (input.basis === 'contract') {
+    // The contract's own deviations of cover move the steel by as much: down by the plus, up by the minus.
+    const { contractMinusMm, contractPlusMm } = wanted;
+    if (contractPlusMm === null) return undefined;
+    return {
+      plannedMm: element.effectiveDepthMm,
+      minusMm: contractPlusMm,
+      plusMm: contractMinusMm ?? 0,
+      trail: [],
+    };
+  }
+  const tolerance = depthTolerance(
+    {
+      basis: input.basis,
+      element: element.type,
+      meeting: face.meeting,
+      thicknessMm: element.thicknessMm,
+      showIn: input.units,
+      ...(input.concrete?.toleranceClass === undefined
+        ? {}
+        : { toleranceClass: input.concrete.toleranceClass }),
+    },
+    element.effectiveDepthMm,
+  );
+  return { plannedMm: element.effectiveDepthMm, ...tolerance };
 }
 
 /**

@@ -1,3 +1,4 @@
+import { judgeEffectiveDepth } from '@/lib/concrete/effective-depth';
 import { judgeReading, type JudgedReading } from '@/lib/concrete/judge-reading';
 import { acceptedAsSeen } from './acceptances';
 import { amended } from './amendments';
@@ -6,8 +7,8 @@ import type { CorrectedSubjects } from './corrections';
 import type { EntryOf } from './entry';
 import { subjectKey, type Facts } from './facts';
 import { standingAt } from './instruments';
-import type { Element, Face, Plan, ReadingPoint } from './plan';
-import type { InstrumentState, MarkKind, PointState, ReadingState } from './sheet-types';
+import type { Element, Face, Plan, ReadingPoint, Requirement } from './plan';
+import type { DepthState, InstrumentState, MarkKind, PointState, ReadingState } from './sheet-types';
 
 type ReadingEntry = EntryOf<'reading'>;
 type ReadingBody = ReadingEntry['body'];
@@ -37,8 +38,8 @@ function judgeBody(
   entry: ReadingEntry,
   body: ReadingBody,
 ): JudgedReading {
-  const requirement =
-    place.face.requirements.find((candidate) => candidate.id === body.requirementId) ?? null;
+  const planned = place.face.requirements.find((candidate) => candidate.id === body.requirementId) ?? null;
+  const requirement = planned && limitsFor(planned, body.asFoundBar);
   const instrument = body.instrumentId === null ? undefined : context.instruments.get(body.instrumentId);
   return judgeReading(
     {
@@ -55,6 +56,47 @@ function judgeBody(
     context.plan.decisionRule,
     context.plan.units,
   );
+}
+
+const normalised = (bar: string) => bar.toLowerCase().replace(/[^a-z0-9#ø]/g, '');
+
+/** Is this another bar than the plan asks for? A larger bar is a departure too. */
+export const isOtherBar = (requirement: Requirement, asFoundBar: string | null): boolean =>
+  asFoundBar !== null &&
+  asFoundBar !== '' &&
+  normalised(asFoundBar) !== normalised(requirement.barDesignation);
+
+/** A bar that was not planned is judged by the stricter of the two: the plan keeps which sizes ask for more. */
+function limitsFor(
+  requirement: Requirement,
+  asFoundBar: string | null,
+): Pick<Requirement, 'leastAcceptedMm' | 'mostAcceptedMm'> {
+  if (asFoundBar === null || !isOtherBar(requirement, asFoundBar)) return requirement;
+  return (
+    requirement.asFound?.find((one) => normalised(one.barDesignation) === normalised(asFoundBar)) ??
+    requirement
+  );
+}
+
+/** Effective depth from a reading to the main bar; null where the requirement has none, or nothing can be told. */
+function depthOf(
+  place: PointPlace,
+  requirement: Requirement | null,
+  reading: { mm: number | null; verdict: string },
+  units: Plan['units'],
+): DepthState | null {
+  if (!requirement?.depth || reading.mm === null || reading.verdict === 'not-verified') return null;
+  const judged = judgeEffectiveDepth(
+    {
+      section: { sectionMm: place.element.thicknessMm, barDiameterMm: requirement.barDiameterMm },
+      plannedMm: requirement.depth.plannedMm,
+      readingMm: reading.mm,
+      touched: 'main',
+      tolerance: requirement.depth,
+    },
+    units,
+  );
+  return { mm: judged.depthMm, verdict: judged.verdict, reason: judged.reason };
 }
 
 /** Lower is less favourable; "not verified" counts neither way and never stands in for a verdict. */
@@ -105,13 +147,22 @@ export function judgePoint(context: JudgingContext, place: PointPlace): PointSta
         .map((body) => ({ body, judged: judgeBody(context, place, entry, body) }))
         .sort((a, b) => favour(a.judged) - favour(b.judged));
       const governing = judgedRivals[0];
+      const requirement =
+        place.face.requirements.find((one) => one.id === (governing?.body ?? entry.body).requirementId) ??
+        null;
       return {
         entry,
         current: governing?.body ?? null,
         amendments: result.amendments,
-        requirement:
-          place.face.requirements.find((one) => one.id === (governing?.body ?? entry.body).requirementId) ??
-          null,
+        requirement,
+        depth: governing
+          ? depthOf(
+              place,
+              requirement,
+              { mm: governing.body.value?.mm ?? null, verdict: governing.judged.verdict },
+              context.plan.units,
+            )
+          : null,
         judged: governing?.judged ?? judgeBody(context, place, entry, entry.body),
         round: 1,
         acceptedBy: acceptedAsSeen(context.facts, entry, context.accepted),

@@ -26,6 +26,8 @@ export const requirementInput = z.object({
   neverLess: z.boolean(),
   /** Bars in a bundle, judged by their equivalent diameter; absent: a single bar. */
   bundleOf: z.number().int().min(2).max(4).optional(),
+  /** The steel is the main bar: effective depth is judged from readings to it, where the element has one planned. */
+  mainBar: z.boolean().optional(),
 });
 
 export const chosenPointInput = z.object({

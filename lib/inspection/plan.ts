@@ -62,6 +62,25 @@ export const requirement = z.object({
   codeMinimumMm: millimetres.nullable(),
   warnings: z.array(z.string()),
   trail: z.array(trailStep),
+  /** Other bar sizes that would ask for more cover here: a bar found that was not planned is judged by the stricter. */
+  asFound: z
+    .array(
+      z.object({
+        barDesignation: requiredText(20),
+        leastAcceptedMm: millimetres,
+        mostAcceptedMm: millimetres.nullable(),
+      }),
+    )
+    .optional(),
+  /** Where the steel is the main bar: planned effective depth with its tolerance, judged apart from cover. */
+  depth: z
+    .object({
+      plannedMm: positiveMillimetres,
+      minusMm: millimetres,
+      plusMm: millimetres,
+      trail: z.array(trailStep),
+    })
+    .optional(),
 });
 export type Requirement = z.infer<typeof requirement>;
 

@@ -12,6 +12,12 @@ export interface AppliedAmendment {
   problem: string | null;
 }
 
+export interface DepthState {
+  mm: number | null;
+  verdict: Verdict;
+  reason: string;
+}
+
 /** A reading with everything that has been said of it since. */
 export interface ReadingState {
   entry: EntryOf<'reading'>;
@@ -20,6 +26,8 @@ export interface ReadingState {
   amendments: AppliedAmendment[];
   requirement: Requirement | null;
   judged: JudgedReading;
+  /** Effective depth, judged apart from cover, where the steel touched is the main bar; null otherwise. */
+  depth: DepthState | null;
   /** 1 is the first round; each correction of its point that it had seen opens the next. */
   round: number;
   /** A signed disposition that names this reading. */
@@ -184,6 +192,8 @@ export const holdKinds = [
   'check-open',
   'check-not-met',
   'cover-not-met',
+  'effective-depth',
+  'bar-departs',
   'readings-missing',
   'not-verified',
   'measurement-missing',
