@@ -133,7 +133,9 @@ export class World {
         ...(as ? { cookie: as.cookie } : {}),
         ...headers,
       },
-      ...(body === undefined ? {} : { body: body instanceof Uint8Array ? body : JSON.stringify(body) }),
+      ...(body === undefined
+        ? {}
+        : { body: body instanceof Uint8Array ? new Uint8Array(body) : JSON.stringify(body) }),
     });
     const response = await handler(request, { params: Promise.resolve(params ?? {}) });
     return { status: response.status, body: (await response.json()) as Answer['body'] };
