@@ -1,9 +1,9 @@
 import { closeDatabase } from '@/db/connection';
 import { verifyRecord } from '@/lib/server/record-verify';
-import { useLocalEnvironment } from './setup/local-environment.mjs';
+import { setLocalEnvironment } from './setup/local-environment.mjs';
 
 /** Checks the whole record. Ends with 1 when anything in it is not what was written. */
-useLocalEnvironment();
+setLocalEnvironment();
 try {
   const { projects, streams, entries, problems, heads } = await verifyRecord();
   for (const head of heads) {

@@ -1,9 +1,9 @@
 import { closeDatabase } from '@/db/connection';
 import { rebuildSummaries } from '@/lib/server/rebuild-summaries';
-import { useLocalEnvironment } from './setup/local-environment.mjs';
+import { setLocalEnvironment } from './setup/local-environment.mjs';
 
 /** Derives every summary anew from plans and entries. */
-useLocalEnvironment();
+setLocalEnvironment();
 try {
   const pours = await rebuildSummaries(new Date().toISOString());
   console.log(`${pours} pours summarised.`);

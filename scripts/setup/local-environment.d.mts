@@ -1,1 +1,1 @@
-export function useLocalEnvironment(): void;
+export function setLocalEnvironment(): void;

@@ -1,7 +1,7 @@
 import { environmentFor, localSecrets } from './secrets.mjs';
 
 /** For commands run by hand: where nothing else is said, they speak of the installation that `npm start` made here. */
-export function useLocalEnvironment() {
+export function setLocalEnvironment() {
   if (process.env.DATABASE_URL) return;
   const port = Number(process.env.POSTGRES_PORT ?? 54329);
   const cluster = {

@@ -6,9 +6,9 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import { access, allowed, type Action } from '@/lib/server/access';
 import { roles, type Role } from '@/lib/inspection/roles';
 import { planPour, pointsOf, pushKept, receiptOf, registerGauge, push, outcomesOf } from './record-routes';
-import { deckPlan, deckPour, PASSWORD, useWorld, type CallOptions, type TestPerson } from './world';
+import { deckPlan, deckPour, PASSWORD, openWorld, type CallOptions, type TestPerson } from './world';
 
-const world = useWorld();
+const world = openWorld();
 
 /** What the rows below ask about: one pour with something in it to be asked for. */
 interface Ground {
@@ -91,12 +91,12 @@ const methods = ['GET', 'POST', 'PUT', 'PATCH', 'DELETE'] as const;
 async function routes(): Promise<{ name: string; handler: Handler }[]> {
   const found = await Promise.all(
     files.map(async (file) => {
-      const module = (await import(pathToFileURL(path.join(api, file)).href)) as Record<
+      const exported = (await import(pathToFileURL(path.join(api, file)).href)) as Record<
         string,
         Handler | undefined
       >;
       return methods.flatMap((method) => {
-        const handler = module[method];
+        const handler = exported[method];
         return handler ? [{ name: `${method} ${path.posix.dirname(file)}`, handler }] : [];
       });
     }),

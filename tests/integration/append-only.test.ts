@@ -2,9 +2,9 @@ import { beforeAll, describe, expect, it } from 'vitest';
 import type { Knex } from 'knex';
 import type { Tx } from '@/db/connection';
 import { planPour, pointsOf, pushKept, registerGauge } from './record-routes';
-import { useWorld } from './world';
+import { openWorld } from './world';
 
-const world = useWorld();
+const world = openWorld();
 let app: Knex;
 
 beforeAll(async () => {

@@ -11,9 +11,9 @@ import {
   outcomesOf,
   registerGauge,
 } from './record-routes';
-import { PASSWORD, useWorld, type Answer, type TestPerson } from './world';
+import { PASSWORD, openWorld, type Answer, type TestPerson } from './world';
 
-const world = useWorld();
+const world = openWorld();
 const nowhere = { elementId: 'deck', faceId: 'deck-top', text: 'Top, near grid D' };
 
 it('carries a pour from plan to release and to its void, by the API alone', async () => {

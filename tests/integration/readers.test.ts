@@ -2,9 +2,9 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { v7 as uuid } from 'uuid';
 import { expect, it } from 'vitest';
 import { planPour, pointsOf, pull, pushKept, registerGauge } from './record-routes';
-import { useWorld } from './world';
+import { openWorld } from './world';
 
-const world = useWorld();
+const world = openWorld();
 
 interface Row {
   seq: number;

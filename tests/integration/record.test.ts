@@ -3,9 +3,9 @@ import { v7 as uuid } from 'uuid';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { EntryEnvelope } from '@/lib/inspection/entry';
 import { outcomesOf, planPour, pointsOf, pull, push, pushKept, registerGauge } from './record-routes';
-import { useWorld, type TestDevice } from './world';
+import { openWorld, type TestDevice } from './world';
 
-const world = useWorld();
+const world = openWorld();
 let pourId: string;
 let points: string[];
 let phone: TestDevice;

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { PASSWORD, useWorld, type TestPerson } from './world';
+import { PASSWORD, openWorld, type TestPerson } from './world';
 
-const world = useWorld();
+const world = openWorld();
 
 const index = async (as: Pick<TestPerson, 'cookie'> | null) => {
   const { GET } = await import('@/app/api/sync/index/route');

@@ -1,8 +1,8 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { planPour, pointsOf, pushKept, registerGauge } from './record-routes';
-import { useWorld } from './world';
+import { openWorld } from './world';
 
-const world = useWorld();
+const world = openWorld();
 
 beforeAll(async () => {
   const w = world();

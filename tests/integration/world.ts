@@ -150,7 +150,7 @@ export class World {
 }
 
 /** Opens a world before the tests of a file and drops it afterwards. */
-export function useWorld(): () => World {
+export function openWorld(): () => World {
   let world: World | undefined;
   beforeAll(async () => {
     world = await World.open();
