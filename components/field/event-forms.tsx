@@ -15,14 +15,14 @@ import { SubjectSelect } from './subject-select';
 import { whereOf } from './subject-words';
 import { useRecord } from './use-record';
 
-const nowText = () => localFieldText(new Date().toISOString());
+const nowText = (open: OpenSheet) => localFieldText(new Date().toISOString(), open.project.timeZone);
 
 /** Placing started or finished; without a release it goes on record as that. */
 export function PlacementForm({ open }: { open: OpenSheet }) {
   const [event, setEvent] = useState<'started' | 'finished'>(
     open.sheet.placing.started ? 'finished' : 'started',
   );
-  const [at, setAt] = useState(nowText);
+  const [at, setAt] = useState(() => nowText(open));
   const [elementIds, setElementIds] = useState<string[] | null>(null);
   const { busy, problems, record } = useRecord(open);
   const unreleased = open.state !== 'released' && open.state !== 'placing' && event === 'started';
@@ -33,7 +33,11 @@ export function PlacementForm({ open }: { open: OpenSheet }) {
       problems={problems}
       busy={busy}
       onKeep={async () =>
-        (await record('placement', { event, at: instantOfField(at) ?? '', elementIds })) !== null
+        (await record('placement', {
+          event,
+          at: instantOfField(at, open.project.timeZone) ?? '',
+          elementIds,
+        })) !== null
       }
     >
       <ChoiceList
@@ -65,7 +69,7 @@ export function PlacementForm({ open }: { open: OpenSheet }) {
 
 /** Notice that a pour is ready to be inspected: when and where. */
 export function InspectionAskedForm({ open }: { open: OpenSheet }) {
-  const [readyAt, setReadyAt] = useState(nowText);
+  const [readyAt, setReadyAt] = useState(() => nowText(open));
   const [place, setPlace] = useState(open.pour.location);
   const [text, setText] = useState('');
   const { busy, problems, record } = useRecord(open);
@@ -77,7 +81,7 @@ export function InspectionAskedForm({ open }: { open: OpenSheet }) {
       busy={busy}
       onKeep={async () =>
         (await record('inspection-asked', {
-          readyAt: instantOfField(readyAt) ?? '',
+          readyAt: instantOfField(readyAt, open.project.timeZone) ?? '',
           place,
           text,
         })) !== null

@@ -11,6 +11,7 @@ import { dayAndTime } from './field-time';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { Screen } from './screen';
 import { SiteEventForm } from './site-event-form';
+import { Disclosure } from './disclosure';
 
 const shownTypes: readonly EntryType[] = [
   'site-event',
@@ -47,12 +48,9 @@ export function EventsScreen({ open }: { open: OpenSheet }) {
           {forms
             .filter(({ type }) => mayRecord(type, role))
             .map(({ type, title, form }) => (
-              <details key={type} className="border-b border-rule last:border-b-0">
-                <summary className="flex min-h-15 items-center px-3 font-label text-lead font-semibold">
-                  {title}
-                </summary>
-                <div className="px-3 pb-4">{form}</div>
-              </details>
+              <Disclosure key={type} className="border-b border-rule px-3 last:border-b-0" summary={title}>
+                <div className="pb-4">{form}</div>
+              </Disclosure>
             ))}
         </div>
         {shown.length > 0 && (

@@ -5,12 +5,19 @@ import { FaceMapInteractive } from '@/components/drawings/face-map-interactive';
 import { FaceMapTable } from '@/components/drawings/face-map-table';
 import type { FaceMapPoint } from '@/components/drawings/face-map';
 import { MarkLegend } from '@/components/drawings/mark-legend';
-import { formatLength, withUnit, type LengthUnit } from '@/lib/concrete/length';
+import { formatLength, MM_PER_INCH, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { markOfReading } from '@/lib/inspection/judge-point';
 import type { Requirement } from '@/lib/inspection/plan';
 import type { FaceState, PointState } from '@/lib/inspection/sheet-types';
 import type { FaceOfPlan } from './open-sheet';
 import { bodyShown, readingText } from './verdict-words';
+import { Disclosure } from './disclosure';
+
+/** A distance on the form to the nearest mark of a tape: whole millimetres, or sixteenths of an inch. */
+export function onTape(mm: number, unit: LengthUnit): string {
+  const step = unit === 'mm' ? 1 : MM_PER_INCH / 16;
+  return formatLength(Math.round(mm / step) * step, unit);
+}
 
 export const NEW_SPOT = 'new-spot';
 
@@ -59,7 +66,7 @@ export function WorkingMap({
       openings={face.openings}
       recesses={face.recesses}
       selectedId={selected}
-      format={(mm) => formatLength(Math.round(mm), unit)}
+      format={(mm) => onTape(mm, unit)}
       onSelect={onPoint}
       onSpot={onSpot}
     />
@@ -88,7 +95,7 @@ function sectionReadings(state: FaceState, requirement: Requirement): CoverSecti
   });
 }
 
-/** All readings of a face to scale, with what the marks mean and the map's table. */
+/** All readings of a face to one steel, in one line to scale. */
 export function FaceSection({
   place,
   state,
@@ -98,11 +105,37 @@ export function FaceSection({
 }: {
   place: FaceOfPlan;
   state: FaceState;
-  requirement: Requirement | null;
+  requirement: Requirement;
   unit: LengthUnit;
   dropId: string | null;
 }) {
-  const points = mapPoints(state, null);
+  return (
+    <section className="grid gap-1 px-3 pb-4">
+      <h2 className="text-heading">Cover section</h2>
+      <p className="font-label text-label font-medium text-pencil">
+        specified {withUnit(requirement.specifiedMm, unit)} · accepted from{' '}
+        {withUnit(requirement.leastAcceptedMm, unit)}
+        {requirement.mostAcceptedMm !== null && ` to ${withUnit(requirement.mostAcceptedMm, unit)}`} · to{' '}
+        {requirement.steel}
+      </p>
+      <CoverSection
+        name={place.face.name}
+        unit={unit}
+        specifiedMm={requirement.specifiedMm}
+        leastAcceptedMm={requirement.leastAcceptedMm}
+        mostAcceptedMm={requirement.mostAcceptedMm}
+        meeting={place.face.meeting}
+        barDiameterMm={requirement.barDiameterMm}
+        readings={sectionReadings(state, requirement)}
+        format={(mm) => formatLength(mm, unit, requirement.leastAcceptedMm)}
+        dropId={dropId}
+      />
+    </section>
+  );
+}
+
+/** What the marks mean, and the map's points as a table. */
+export function FaceTable({ place, state, unit }: { place: FaceOfPlan; state: FaceState; unit: LengthUnit }) {
   const values = Object.fromEntries(
     [...state.points, ...state.spots].map((point) => [
       point.key,
@@ -110,42 +143,16 @@ export function FaceSection({
     ]),
   );
   return (
-    <div className="grid gap-4 px-3 pb-4">
-      {requirement && (
-        <section className="grid gap-1">
-          <h2 className="text-heading">Cover section</h2>
-          <p className="font-label text-label font-medium text-pencil">
-            specified {withUnit(requirement.specifiedMm, unit)} · accepted from{' '}
-            {withUnit(requirement.leastAcceptedMm, unit)}
-            {requirement.mostAcceptedMm !== null && ` to ${withUnit(requirement.mostAcceptedMm, unit)}`} · to{' '}
-            {requirement.steel}
-          </p>
-          <CoverSection
-            name={place.face.name}
-            unit={unit}
-            specifiedMm={requirement.specifiedMm}
-            leastAcceptedMm={requirement.leastAcceptedMm}
-            mostAcceptedMm={requirement.mostAcceptedMm}
-            meeting={place.face.meeting}
-            barDiameterMm={requirement.barDiameterMm}
-            readings={sectionReadings(state, requirement)}
-            format={(mm) => formatLength(mm, unit, requirement.leastAcceptedMm)}
-            dropId={dropId}
-          />
-        </section>
-      )}
+    <div className="grid gap-2 px-3 pb-4">
       <MarkLegend />
-      <details className="border-t border-rule pt-2">
-        <summary className="flex min-h-target items-center font-label font-semibold">
-          The points as a table
-        </summary>
+      <Disclosure className="border-t border-rule pt-1" summary="The points as a table">
         <FaceMapTable
           caption={`Points of ${place.face.name}`}
-          points={points}
-          format={(mm) => formatLength(Math.round(mm), unit)}
+          points={mapPoints(state, null)}
+          format={(mm) => onTape(mm, unit)}
           values={values}
         />
-      </details>
+      </Disclosure>
     </div>
   );
 }

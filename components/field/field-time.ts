@@ -21,14 +21,34 @@ export function timeAway(iso: string, nowMs: number): string {
   return minutes > 0 ? `in ${sizeWords(minutes)}` : `${sizeWords(-minutes)} ago`;
 }
 
-/** An instant as a `datetime-local` field shows it, in the time zone of this device. */
-export function localFieldText(iso: string): string {
-  const at = new Date(iso);
-  return new Date(at.getTime() - at.getTimezoneOffset() * 60_000).toISOString().slice(0, 16);
-}
+const wallTime = (at: number, timeZone: string): string => {
+  const parts = new Intl.DateTimeFormat('en-GB', {
+    timeZone,
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+    hour: '2-digit',
+    minute: '2-digit',
+    hourCycle: 'h23',
+  }).formatToParts(at);
+  const of = (type: Intl.DateTimeFormatPartTypes) => parts.find((part) => part.type === type)?.value ?? '';
+  return `${of('year')}-${of('month')}-${of('day')}T${of('hour')}:${of('minute')}`;
+};
 
-/** The instant that a `datetime-local` field says, by this device's time zone; null where it says none. */
-export function instantOfField(text: string): string | null {
-  const at = new Date(text);
-  return text === '' || Number.isNaN(at.getTime()) ? null : at.toISOString();
+/** An instant as a `datetime-local` field shows it, in the project's time zone. */
+export const localFieldText = (iso: string, timeZone: string): string => wallTime(Date.parse(iso), timeZone);
+
+/**
+ * The instant that a `datetime-local` field says, by the project's clock; null where it says none, or a time that
+ * summer time skips. Where clocks are set back and a time comes twice, the earlier.
+ */
+export function instantOfField(text: string, timeZone: string): string | null {
+  const asUtc = Date.parse(`${text}:00.000Z`);
+  if (Number.isNaN(asUtc)) return null;
+  const day = 86_400_000;
+  const found = [asUtc - day, asUtc + day]
+    .map((at) => asUtc - (Date.parse(`${wallTime(at, timeZone)}:00.000Z`) - at))
+    .sort((a, b) => a - b)
+    .find((at) => wallTime(at, timeZone) === text);
+  return found === undefined ? null : new Date(found).toISOString();
 }

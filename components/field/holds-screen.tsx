@@ -11,6 +11,8 @@ import { dayAndTime } from './field-time';
 import { holdPath } from './hold-path';
 import type { OpenSheet } from './open-sheet';
 import { Screen } from './screen';
+import { MarkIcon } from '@/components/drawings/mark';
+import { toneText } from '@/components/ui/tone';
 
 /** What stands between this pour and the concrete, by who clears it: your own first, each one tap from its work. */
 export function HoldsScreen({ open }: { open: OpenSheet }) {
@@ -70,14 +72,14 @@ function HoldLine({ open, hold }: { open: OpenSheet; hold: Hold }) {
         href={holdPath(hold, sheet)}
         className="grid min-h-target grid-cols-[1.5rem_1fr] gap-x-2 px-3 py-2.5 hover:bg-paper/60"
       >
-        <ToneGlyph tone="hold" className="mt-1 text-hold" />
+        <HoldMark kind={hold.kind} />
         <span className="min-w-0">
           <span className="block font-label text-lead font-semibold">{hold.title}</span>
           <span className="block text-label text-pencil">
             {hold.where}
             {hold.since && ` · since ${dayAndTime(hold.since, project.timeZone)}`}
           </span>
-          {hold.detail && <span className="block text-label text-pencil">{hold.detail}</span>}
+          {hold.detail && <span className="line-clamp-2 text-label text-pencil">{hold.detail}</span>}
           <span className="block text-label">{hold.need}</span>
         </span>
       </FieldLink>
@@ -91,4 +93,26 @@ function HoldLine({ open, hold }: { open: OpenSheet; hold: Hold }) {
       )}
     </li>
   );
+}
+
+const wrong: readonly Hold['kind'][] = [
+  ...correctable,
+  'conflict',
+  'superseded-drawing',
+  'manual',
+  'update-needed',
+];
+const awaited: readonly Hold['kind'][] = [
+  'disposition-awaited',
+  'recheck-awaited',
+  'condition-not-verified',
+  'query-open',
+  'verbal-instruction',
+];
+
+/** Something is wrong, somebody is waited for, or it is only not done yet: by shape, beside the words. */
+function HoldMark({ kind }: { kind: Hold['kind'] }) {
+  if (kind === 'not-verified') return <MarkIcon kind="not-verified" className="mt-1" />;
+  const tone = wrong.includes(kind) ? 'hold' : awaited.includes(kind) ? 'watch' : 'plain';
+  return <ToneGlyph tone={tone} className={`mt-1 ${toneText[tone]}`} />;
 }

@@ -33,7 +33,7 @@ export function InstrumentForm({ open, onKept }: { open: OpenSheet; onKept: () =
       name,
       kind,
       serial,
-      calibrationDue: due ? instantOfField(`${due}T23:59`) : null,
+      calibrationDue: due ? instantOfField(`${due}T23:59`, open.project.timeZone) : null,
       uncertaintyMm,
       inService: true,
     });

@@ -18,6 +18,7 @@ import { Screen } from './screen';
 import { useSnapshot } from './use-device';
 import { useNow } from './use-now';
 import { blockCheckPasses } from '@/lib/inspection/instruments';
+import { formatInstant } from '@/components/ui/format-instant';
 
 /** The instruments of the project: how each stands, its block checks, and a new one. */
 export function InstrumentsScreen({ open }: { open: OpenSheet }) {
@@ -98,7 +99,9 @@ function InstrumentCard({
           {[
             instrumentKindWords[body.kind],
             body.serial ? `no. ${body.serial}` : '',
-            body.calibrationDue ? `calibration due ${dayAndTime(body.calibrationDue, timeZone)}` : '',
+            body.calibrationDue
+              ? `calibration due ${formatInstant(body.calibrationDue, timeZone, 'date')}`
+              : '',
             body.uncertaintyMm !== null ? `U = ${body.uncertaintyMm} mm (k = 2)` : 'uncertainty not known',
           ]
             .filter(Boolean)

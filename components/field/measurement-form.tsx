@@ -33,7 +33,16 @@ const nextPlace = (state: MeasurementState) =>
   `place ${new Set(state.places.map((place) => place.entry.body.place.trim().toLowerCase())).size + 1}`;
 
 /** Measures one place of an item, and says the verdict at once. */
-export function MeasurementForm({ open, state }: { open: OpenSheet; state: MeasurementState }) {
+export function MeasurementForm({
+  open,
+  state,
+  limits,
+}: {
+  open: OpenSheet;
+  state: MeasurementState;
+  /** What has to be met, in words. */
+  limits: string;
+}) {
   const { item } = state;
   const device = useDevice();
   const [place, setPlace] = useState(() => nextPlace(state));
@@ -79,6 +88,7 @@ export function MeasurementForm({ open, state }: { open: OpenSheet; state: Measu
         void keep();
       }}
     >
+      <p className="font-label text-lead font-semibold">{limits}</p>
       <TextInput
         label="Place"
         hint="Grid, bay or bar, so that it is found again."

@@ -16,6 +16,7 @@ import { nameOf, type OpenSheet } from './open-sheet';
 import { RequirementTrail } from './requirement-trail';
 import { Screen } from './screen';
 import { MeasurementLines } from './sheet-lines';
+import { Disclosure } from './disclosure';
 
 /** What has to be met, in words: "at most 1 200 mm", "at least 50 per cent tied", "16". */
 export function limitWords(item: MeasurementItem, units: Plan['units']): string {
@@ -55,24 +56,26 @@ export function MeasurementsScreen({ open, itemId }: { open: OpenSheet; itemId: 
   return (
     <Screen
       title={item.title}
-      aside={`${Math.min(done, item.required)} of ${item.required} places · ${limitWords(item, sheet.plan.units)}`}
+      aside={`${Math.min(done, item.required)} of ${item.required} places`}
       back={back}
       form
     >
       <div className="grid gap-5">
         {mayRecord('measurement', open.project.role) && (
-          <MeasurementForm key={item.id} open={open} state={state} />
+          <MeasurementForm
+            key={item.id}
+            open={open}
+            state={state}
+            limits={limitWords(item, sheet.plan.units)}
+          />
         )}
         <Places open={open} state={state} />
-        <details className="border border-ink bg-sheet px-3">
-          <summary className="flex min-h-target items-center font-label font-semibold">
-            How is this judged?
-          </summary>
+        <Disclosure className="border border-ink bg-sheet px-3" summary="How is this judged?">
           <p className="pb-2">
             {limitWords(item, sheet.plan.units)}. Compared unrounded; limits belong to what is accepted.
           </p>
           <RequirementTrail trail={item.trail} />
-        </details>
+        </Disclosure>
       </div>
     </Screen>
   );

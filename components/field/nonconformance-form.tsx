@@ -18,6 +18,7 @@ import { Screen } from './screen';
 import { SubjectSelect } from './subject-select';
 import { subjectWords, whereOf } from './subject-words';
 import { useRecord } from './use-record';
+import { Disclosure } from './disclosure';
 
 /** Raises a nonconformance: what and where are filled in; extent, a proposal and a time are asked for. */
 export function NonconformanceForm({ open, about: given }: { open: OpenSheet; about: SubjectRef | null }) {
@@ -57,7 +58,7 @@ export function NonconformanceForm({ open, about: given }: { open: OpenSheet; ab
       extent,
       description,
       proposal,
-      neededBy: instantOfField(neededBy),
+      neededBy: instantOfField(neededBy, open.project.timeZone),
     });
     if (entry) goBackTo(fieldPaths.nonconformanceShown(sheet.pourId, entry.id));
   };
@@ -139,8 +140,7 @@ export function NonconformanceForm({ open, about: given }: { open: OpenSheet; ab
           error={problems.neededBy}
           onChange={(event) => setNeededBy(event.target.value)}
         />
-        <details>
-          <summary className="flex min-h-target items-center font-label font-semibold">More to say</summary>
+        <Disclosure summary="More to say">
           <Textarea
             label="Description"
             optional
@@ -148,7 +148,7 @@ export function NonconformanceForm({ open, about: given }: { open: OpenSheet; ab
             error={problems.description}
             onChange={(event) => setDescription(event.target.value)}
           />
-        </details>
+        </Disclosure>
         <FormProblem
           problems={problems}
           shown={['title', 'extent', 'proposal', 'neededBy', 'description', 'about']}

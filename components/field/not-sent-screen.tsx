@@ -52,7 +52,9 @@ export function NotSentScreen() {
   return (
     <Screen title="Not sent yet" aside={syncWords(sync)} back={{ href: fieldPaths.pours, words: 'pours' }}>
       <div className="grid gap-6">
-        {sync.message && <Notice tone={sync.phase === 'idle' ? 'info' : 'watch'}>{sync.message}</Notice>}
+        {sync.message && sync.phase !== 'sign-in-needed' && (
+          <Notice tone={sync.phase === 'idle' ? 'info' : 'watch'}>{sync.message}</Notice>
+        )}
         {notSentCount(sync) === 0 ? (
           <EmptyState title="Everything is sent">
             {sync.lastSuccessAt

@@ -16,7 +16,16 @@ import { useDevice } from './use-device';
 import { useNow } from './use-now';
 
 /** One pour of the list: what it is, when it is planned, how it stands, what waits, and whether it is kept here. */
-export function PourRow({ pour, timeZone }: { pour: DevicePour; timeZone: string }) {
+export function PourRow({
+  pour,
+  choosing,
+  timeZone,
+}: {
+  pour: DevicePour;
+  /** The person chooses what is kept on the device. */
+  choosing: boolean;
+  timeZone: string;
+}) {
   const device = useDevice();
   const now = useNow();
   const [busy, setBusy] = useState(false);
@@ -79,23 +88,25 @@ export function PourRow({ pour, timeZone }: { pour: DevicePour; timeZone: string
           {problem}
         </p>
       )}
-      <div className="flex justify-end px-1">
-        {pour.kept ? (
-          <Button
-            variant="quiet"
-            busy={busy}
-            disabled={pour.notSent > 0}
-            title={pour.notSent > 0 ? 'It holds entries that are not sent yet.' : undefined}
-            onClick={() => change((id) => device.dropPour(id))}
-          >
-            {pour.notSent > 0 ? 'Stays here until all is sent' : 'Take off this device'}
-          </Button>
-        ) : (
-          <Button variant="quiet" busy={busy} onClick={() => change((id) => device.keepPour(id))}>
-            Keep on this device
-          </Button>
-        )}
-      </div>
+      {choosing && (
+        <div className="flex justify-end px-1">
+          {pour.kept ? (
+            <Button
+              variant="quiet"
+              busy={busy}
+              disabled={pour.notSent > 0}
+              title={pour.notSent > 0 ? 'It holds entries that are not sent yet.' : undefined}
+              onClick={() => change((id) => device.dropPour(id))}
+            >
+              {pour.notSent > 0 ? 'Stays here until all is sent' : 'Take off this device'}
+            </Button>
+          ) : (
+            <Button variant="quiet" busy={busy} onClick={() => change((id) => device.keepPour(id))}>
+              Keep on this device
+            </Button>
+          )}
+        </div>
+      )}
     </li>
   );
 }

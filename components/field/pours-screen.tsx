@@ -1,6 +1,8 @@
 'use client';
 
 import { Spinner } from '@/components/ui/spinner';
+import { useState } from 'react';
+import { Button } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
 import { buttonClasses } from '@/components/ui/button-classes';
@@ -17,11 +19,21 @@ const byPlannedTime = (a: DevicePour, b: DevicePour) =>
 /** The pours kept on this device and those it has heard of, by planned time. */
 export function PoursScreen() {
   const snapshot = useSnapshot();
+  const [choosing, setChoosing] = useState(false);
   if (!snapshot.person) return <SignedOut snapshot={snapshot} />;
   return (
     <Screen title="Pours" aside={snapshot.person.name}>
       {snapshot.projects.length === 0 && <NothingYet snapshot={snapshot} />}
       <div className="grid gap-8">
+        {snapshot.pours.length > 0 && (
+          <Button
+            aria-pressed={choosing}
+            onClick={() => setChoosing(!choosing)}
+            className="-mb-4 justify-self-end"
+          >
+            {choosing ? 'Done choosing' : 'Choose what is kept here'}
+          </Button>
+        )}
         {snapshot.projects.map((project) => {
           const pours = snapshot.pours.filter((pour) => pour.projectId === project.id).sort(byPlannedTime);
           return (
@@ -33,12 +45,14 @@ export function PoursScreen() {
                 heading="On this device"
                 empty="No pour of this project is kept here. Keep one while you have a network, and it opens without one."
                 pours={pours.filter((pour) => pour.kept)}
+                choosing={choosing}
                 timeZone={project.timeZone}
               />
               <PourList
                 heading="Not on this device"
                 empty={null}
                 pours={pours.filter((pour) => !pour.kept)}
+                choosing
                 timeZone={project.timeZone}
               />
             </section>
@@ -65,11 +79,13 @@ function PourList({
   heading,
   empty,
   pours,
+  choosing,
   timeZone,
 }: {
   heading: string;
   empty: string | null;
   pours: DevicePour[];
+  choosing: boolean;
   timeZone: string;
 }) {
   if (pours.length === 0 && empty === null) return null;
@@ -81,7 +97,7 @@ function PourList({
       ) : (
         <ul className="border border-ink bg-sheet">
           {pours.map((pour) => (
-            <PourRow key={pour.id} pour={pour} timeZone={timeZone} />
+            <PourRow key={pour.id} pour={pour} choosing={choosing} timeZone={timeZone} />
           ))}
         </ul>
       )}

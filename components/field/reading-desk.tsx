@@ -1,12 +1,12 @@
 'use client';
 
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Dialog } from '@/components/ui/dialog';
 import { Button } from '@/components/ui/button';
-import { formatLength, withUnit } from '@/lib/concrete/length';
+import { withUnit } from '@/lib/concrete/length';
 import type { BodyOf } from '@/lib/inspection/entry';
 import type { FaceState } from '@/lib/inspection/sheet-types';
-import { FaceSection, NEW_SPOT, WorkingMap } from './face-drawings';
+import { FaceSection, FaceTable, NEW_SPOT, onTape, WorkingMap } from './face-drawings';
 import { instrumentStanding } from './instrument-words';
 import { JudgedPanel } from './judged-panel';
 import { BlockKeys, Keypad } from './keypad';
@@ -48,6 +48,7 @@ export function ReadingDesk({
   const [asFoundBar, setAsFoundBar] = useState('');
   const { busy, problem, kept, keep, undo, say } = useKeepReading(open, setup.settings.sound);
 
+  const shownRequirement = requirement ?? face.requirements[0];
   const target = readingTarget(state, chosen, from);
   const here = target?.place ?? null;
   const next = nextPoint(
@@ -113,6 +114,17 @@ export function ReadingDesk({
     onEnter: keepTyped,
   });
 
+  // The lit point comes into view by itself, unless the person has scrolled on to the section.
+  const drawings = useRef<HTMLDivElement>(null);
+  const litKey = target ? (target.point?.key ?? NEW_SPOT) : null;
+  useEffect(() => {
+    const area = drawings.current;
+    if (!area || litKey === null || area.scrollTop > area.clientHeight) return;
+    area
+      .querySelector(`[data-point="${CSS.escape(litKey)}"]`)
+      ?.scrollIntoView({ block: 'nearest', inline: 'nearest' });
+  }, [litKey]);
+
   const choosePoint = (key: string) => {
     if (key === NEW_SPOT) return;
     setChosen({ kind: 'point', key });
@@ -120,23 +132,26 @@ export function ReadingDesk({
 
   return (
     <div className="grid h-full min-h-0 grid-rows-[minmax(9.5rem,1fr)_auto] bg-sheet md:grid-cols-[1fr_26rem] md:grid-rows-1">
-      <div className="min-h-0 overflow-y-auto">
+      <div ref={drawings} className="min-h-0 overflow-y-auto">
         <WorkingMap
           place={place}
           state={state}
           unit={unit}
-          selected={target ? (target.point?.key ?? NEW_SPOT) : null}
+          selected={litKey}
           spot={chosen?.kind === 'spot' ? chosen.place : null}
           onPoint={choosePoint}
           onSpot={(spot) => setChosen({ kind: 'spot', place: spot })}
         />
-        <FaceSection
-          place={place}
-          state={state}
-          requirement={requirement ?? face.requirements[0] ?? null}
-          unit={unit}
-          dropId={kept?.entryId ?? null}
-        />
+        {shownRequirement && (
+          <FaceSection
+            place={place}
+            state={state}
+            requirement={shownRequirement}
+            unit={unit}
+            dropId={kept?.entryId ?? null}
+          />
+        )}
+        <FaceTable place={place} state={state} unit={unit} />
       </div>
       <div className="flex flex-col justify-end border-ink bg-sheet md:border-l">
         <ReadingReadout
@@ -146,7 +161,6 @@ export function ReadingDesk({
           limits={requirement}
           problem={problem}
           block={setup.isBlock ? withUnit(setup.blockMm, unit) : null}
-          allRead={target === null}
           onShowReadings={() => setPanel('point')}
         />
         {last && kept && (
@@ -236,8 +250,7 @@ export function ReadingDesk({
         )}
         {target && (
           <p className="mt-3 text-label text-pencil">
-            {formatLength(Math.round(target.place.xMm), unit)} {unit} from the left,{' '}
-            {formatLength(Math.round(target.place.yMm), unit)} {unit} up.
+            {onTape(target.place.xMm, unit)} {unit} from the left, {onTape(target.place.yMm, unit)} {unit} up.
           </p>
         )}
       </Dialog>

@@ -8,7 +8,7 @@ import { faceOfPlan, type FaceOfPlan, type OpenSheet } from './open-sheet';
 import { ReadingDesk } from './reading-desk';
 import { Screen } from './screen';
 import { walkProgress } from './walk-order';
-import { FaceSection, WorkingMap } from './face-drawings';
+import { FaceSection, FaceTable, WorkingMap } from './face-drawings';
 import { PointReadings } from './point-readings';
 import { Dialog } from '@/components/ui/dialog';
 import { pointOf } from './subject-words';
@@ -70,6 +70,7 @@ function FaceOnly({ open, place, faceId }: { open: OpenSheet; place: FaceOfPlan;
           dropId={null}
         />
       ))}
+      <FaceTable place={place} state={state} unit={open.sheet.plan.units} />
       <Dialog
         open={point !== null}
         title={`Readings at ${point?.label ?? ''}`}

@@ -11,6 +11,7 @@ import { dayAndTime } from './field-time';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { SIGNATURE_HEIGHT, SIGNATURE_WIDTH, strokePath } from './signature-strokes';
 import { useDevice, useSnapshot } from './use-device';
+import { Disclosure } from './disclosure';
 
 function standing(state: SignatureState): { words: string; tone: Tone } {
   if (state.setAsideBy)
@@ -54,12 +55,9 @@ export function SignatureStanding({ open }: { open: OpenSheet }) {
                 />
               </svg>
             )}
-            <details>
-              <summary className="flex min-h-target items-center font-label font-semibold text-chalk">
-                What was signed
-              </summary>
+            <Disclosure summary="What was signed">
               <p>{body.words}</p>
-            </details>
+            </Disclosure>
             <p className="text-label text-pencil">
               {dayAndTime(state.entry.recordedAt, open.project.timeZone)}
               {state.entry.seq === null && ' · not sent yet'}

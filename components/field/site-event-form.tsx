@@ -15,7 +15,7 @@ import { useRecord } from './use-record';
 /** Rain, washed soil, a bar or form changed: each voids a release in its scope. */
 export function SiteEventForm({ open }: { open: OpenSheet }) {
   const [kind, setKind] = useState<(typeof siteEventKinds)[number]>('rain');
-  const [at, setAt] = useState(() => localFieldText(new Date().toISOString()));
+  const [at, setAt] = useState(() => localFieldText(new Date().toISOString(), open.project.timeZone));
   const [amount, setAmount] = useState('');
   const [text, setText] = useState('');
   const [elementIds, setElementIds] = useState<string[] | null>(null);
@@ -29,7 +29,7 @@ export function SiteEventForm({ open }: { open: OpenSheet }) {
     if (bad) return false;
     const entry = await record('site-event', {
       kind,
-      at: instantOfField(at) ?? '',
+      at: instantOfField(at, open.project.timeZone) ?? '',
       amountMm: kind === 'rain' ? amountMm : null,
       text,
       elementIds,

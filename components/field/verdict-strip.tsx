@@ -41,24 +41,30 @@ export function VerdictStrip({
   const pourId = open.sheet.pourId;
   return (
     <div className="border-t border-ink bg-sheet">
-      <div className="flex min-h-target items-center gap-2 pl-3">
-        <MarkIcon kind={kind} size="1.6em" />
-        <div role="status" className="min-w-0 flex-1 py-1 leading-tight">
-          <p className="font-label font-semibold">
-            {label}: {readingText(bodyShown(reading))}{' '}
-            <span className={toneText[markTone[kind]]}>{verdictWords(judged)}</span>
-          </p>
-          <p className="truncate text-label text-pencil">
-            {judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit)}
-          </p>
-        </div>
-        {onUndo ? (
+      <p role="status" className="sr-only">
+        {label}: {readingText(bodyShown(reading))}, {verdictWords(judged)}
+      </p>
+      <div className="flex min-h-target items-stretch">
+        <button
+          type="button"
+          onClick={onHow}
+          className="flex min-h-target min-w-0 flex-1 items-center gap-2 py-1 pl-3 text-left leading-tight"
+        >
+          <MarkIcon kind={kind} size="1.6em" />
+          <span className="min-w-0">
+            <span className="block font-label font-semibold">
+              {label}: {readingText(bodyShown(reading))}{' '}
+              <span className={toneText[markTone[kind]]}>{verdictWords(judged)}</span>
+            </span>
+            <span className="block truncate text-label text-pencil">
+              {judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit)}
+              <span className="ml-2 text-chalk underline underline-offset-4">How judged?</span>
+            </span>
+          </span>
+        </button>
+        {onUndo && (
           <Button variant="quiet" onClick={onUndo}>
             Undo
-          </Button>
-        ) : (
-          <Button variant="quiet" onClick={onHow} className="px-2 text-label">
-            How judged?
           </Button>
         )}
       </div>
@@ -67,26 +73,26 @@ export function VerdictStrip({
           <div className="grid grid-cols-3">
             <FieldLink
               href={fieldPaths.photos(pourId, about)}
-              className={buttonClasses('quiet', true, 'border-r-rule')}
+              className={buttonClasses('quiet', true, 'border-r-rule text-label')}
             >
               Photo
             </FieldLink>
             {mayRecord('nonconformance', open.project.role) ? (
               <FieldLink
                 href={fieldPaths.nonconformance(pourId, about)}
-                className={buttonClasses('quiet', true, 'border-r-rule px-1')}
+                className={buttonClasses('quiet', true, 'border-r-rule px-1 text-label')}
               >
-                Noncon&shy;formance
+                Nonconformance
               </FieldLink>
             ) : (
               <span />
             )}
-            <Button variant="quiet" wide onClick={onAgain}>
+            <Button variant="quiet" wide className="text-label" onClick={onAgain}>
               Read again
             </Button>
           </div>
-          <p className="px-3 pb-1.5 text-center text-label text-pencil">
-            Reading again does not erase: within a round the lowest governs.
+          <p className="px-3 pb-1.5 text-center font-label text-label font-medium text-pencil">
+            Read again: both stay, and the less favourable governs.
           </p>
         </div>
       )}

@@ -89,7 +89,7 @@ export function berthPlan(over: Partial<Plan> = {}): Plan {
               { ...requirement, id: 'ties', steel: 'ties', barDesignation: '10', barDiameterMm: 10 },
             ],
             openings: [
-              { id: 'hatch', name: 'Drain hatch', xMm: 5600, yMm: 500, widthMm: 1200, heightMm: 700 },
+              { id: 'hatch', name: 'Drain hatch', xMm: 2900, yMm: 300, widthMm: 1200, heightMm: 700 },
             ],
             recesses: [
               {
