@@ -1,13 +1,13 @@
 import { saw } from './causality';
 import type { Entry } from './entry';
 import { listOf, type Facts } from './facts';
-import { blockCheckPasses } from './instruments';
 import type { Plan } from './plan';
 import { elementsOf } from './scope';
 import type { SignatureState } from './sheet-types';
 
 /**
- * Does this entry change what was signed for? Photographs, notes, requests, signatures and releases do not; a passed
+ * Does this entry change what was signed for? A failed block check does so only where readings rest on the instrument:
+ * they are then not verified, which holds, and reading them again is what sets a signature aside. Photographs, notes, requests, signatures and releases do not; a passed
  * last walk and a condition found met say nothing against it.
  */
 export function isMaterial(entry: Entry, plan: Plan): boolean {
@@ -17,8 +17,6 @@ export function isMaterial(entry: Entry, plan: Plan): boolean {
     case 'last-walk':
     case 'condition-verified':
       return entry.body.outcome === 'not-met';
-    case 'block-check':
-      return !blockCheckPasses(entry.body);
     case 'drawing-received':
       return plan.elements.some(
         ({ drawing }) => drawing.number === entry.body.number && drawing.revision !== entry.body.revision,

@@ -1,5 +1,6 @@
 import type { BodyOf, Entry, EntryOf } from './entry';
 import { holds, holdsInScope } from './holds';
+import { blockCheckPasses } from './instruments';
 import { isMaterial } from './judge-signatures';
 import { elementsOf, inScope } from './scope';
 import type { ReleaseState, Sheet } from './sheet-types';
@@ -55,6 +56,15 @@ function causeOf(
   if (causing) return { ...causeWords(causing), at: timeOf(causing), causedBy: causing.id };
 
   const standing = holdsInScope(holds(sheet, now), scope)[0];
+  const failed = later.findLast((entry) => entry.type === 'block-check' && !blockCheckPasses(entry.body));
+  if (standing?.kind === 'not-verified' && failed) {
+    return {
+      cause: 'instrument-suspect',
+      reason: 'An instrument that it rests on failed its block check.',
+      at: timeOf(failed),
+      causedBy: failed.id,
+    };
+  }
   if (standing) {
     const last = later.at(-1);
     return {
@@ -94,11 +104,6 @@ function causeWords(entry: Entry): { cause: string; reason: string } {
       };
     case 'mix-changed':
       return { cause: 'mix-changed', reason: `The mix was changed to ${entry.body.name}.` };
-    case 'block-check':
-      return {
-        cause: 'instrument-suspect',
-        reason: 'An instrument that it rests on failed its block check.',
-      };
     case 'amendment':
       return { cause: 'amended', reason: 'An entry that it rests on was amended.' };
     case 'reading':

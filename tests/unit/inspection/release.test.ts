@@ -119,6 +119,21 @@ describe('a release', () => {
     expect(voids(byQuery)[0]?.cause).toBe('new-hold');
   });
 
+  it('stands when another instrument fails its block check', () => {
+    const story = released();
+    const other = '00000003-0000-7000-8000-000000000077';
+    story.tells('coordinator', 'block-check', {
+      instrumentId: other,
+      at: story.now,
+      when: 'end',
+      blockMm: 50,
+      readMm: 55,
+      toleranceMm: 1,
+    });
+    expect(voids(story)).toEqual([]);
+    expect(state(story)).toBe('released');
+  });
+
   it('runs out at the end of its validity, judged whenever it is read', () => {
     const story = released().pass(25 * 60);
     expect(state(story)).not.toBe('released');
