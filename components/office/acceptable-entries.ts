@@ -41,6 +41,7 @@ export function acceptableEntries(sheet: Sheet, about: readonly SubjectRef[]): A
   for (const check of sheet.checks) {
     const named =
       names('check', check.item.id) ||
+      (check.governing !== null && names('entry', check.governing.id)) ||
       (check.item.elementId !== null && names('element', check.item.elementId));
     if (named && check.governing?.body.answer === 'not-met')
       add(check.governing.id, `${check.item.question}: not met`);

@@ -51,7 +51,7 @@ export function DecisionSheet({
             <span className="text-heading font-semibold font-label">{heads[key]}</span>
             <span className="font-label text-label font-medium text-pencil">
               {counts[key]}
-              {opened.has(key) ? ', opened' : ', open to look'}
+              {opened.has(key) ? ', opened' : <span className="text-chalk">, open to look</span>}
             </span>
           </summary>
           <div className="border-t border-rule px-4 py-3">{content[key]}</div>

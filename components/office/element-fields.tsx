@@ -31,11 +31,12 @@ export function ElementFields({
         <PlanSelect
           path={`${path}.type`}
           label="Element"
+          hint="What is cast"
           options={elementTypes.map((type) => ({ value: type, label: elementTypeWords[type] }))}
         />
         <PlanText path={`${path}.mark`} label="Mark" hint="As on the drawing" />
         <PlanText path={`${path}.location`} label="Location" hint="Grid lines" />
-        <PlanText path={`${path}.level`} label="Level" optional />
+        <PlanText path={`${path}.level`} label="Level" hint="Above datum" optional />
         <PlanText path={`${path}.thickness`} label="Thickness or depth" unit={units} />
         <PlanText path={`${path}.effectiveDepth`} label="Effective depth as planned" optional unit={units} />
         <PlanText path={`${path}.drawing.number`} label="Drawing" />

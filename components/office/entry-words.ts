@@ -283,7 +283,7 @@ const wording: Wording = {
   }),
   'release-asked': (body, context) => ({
     title: 'Release asked for',
-    lines: given(elementWords(context, body.scope.elementIds), body.scope.limits, body.text),
+    lines: given(`For ${elementWords(context, body.scope.elementIds)}`, body.scope.limits, body.text),
   }),
   'block-check': (body, context) => ({
     title: `Block check ${Math.abs(body.readMm - body.blockMm) <= body.toleranceMm + 1e-6 ? 'passed' : 'failed'}`,
@@ -331,10 +331,11 @@ const wording: Wording = {
   'release-refused': (body, context) => ({
     title: 'Release refused',
     lines: given(
-      elementWords(context, body.scope.elementIds),
+      `For ${elementWords(context, body.scope.elementIds)}`,
+      body.reason && `Reason given: ${body.reason}`,
       `${body.holds.length} ${body.holds.length === 1 ? 'hold' : 'holds'} stood against it`,
-      ...body.holds.slice(0, 12),
-      body.reason,
+      ...body.holds.slice(0, 5),
+      body.holds.length > 5 && `and ${body.holds.length - 5} more`,
     ),
   }),
   'release-void': (body, context) => {

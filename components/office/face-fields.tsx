@@ -9,7 +9,7 @@ import { FacePreview } from './face-preview';
 import { emptyRequirement, newKey, type PlanDraft } from './plan-draft';
 import { PlanSelect, PlanText } from './plan-field';
 import { RequirementFields } from './requirement-fields';
-import { meetingWords } from './state-words';
+import { basisWords, meetingWords } from './state-words';
 
 /** One face: how it meets what is beyond it, its size, its required covers, its points; and what follows, live. */
 export function FaceFields({
@@ -39,6 +39,7 @@ export function FaceFields({
           <PlanSelect
             path={`${path}.meeting`}
             label="How the concrete meets it"
+            hint="What is beyond the face"
             options={meetings.map((meeting) => ({ value: meeting, label: meetingWords[meeting] }))}
           />
           <PlanText path={`${path}.width`} label="Width" unit={units} />
@@ -47,11 +48,12 @@ export function FaceFields({
             <PlanSelect
               path={`${path}.exposure`}
               label="Exposure"
+              hint={`In the words of ${basisWords[basis]}`}
               options={exposures.map(({ value, label }) => ({ value, label }))}
               placeholder="Choose"
             />
           ) : (
-            <PlanText path={`${path}.exposure`} label="Exposure" optional />
+            <PlanText path={`${path}.exposure`} label="Exposure" hint="As the contract says it" optional />
           )}
           <PlanText
             path={`${path}.drawnPoints`}

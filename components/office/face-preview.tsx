@@ -36,7 +36,7 @@ export function FacePreview({
 
   if (preview.kind === 'waiting') {
     return (
-      <div className="border border-dashed border-pencil p-3 text-body text-pencil">
+      <div className="self-start border border-dashed border-pencil p-3 text-body text-pencil">
         {preview.sentences.map((sentence) => (
           <p key={sentence}>{sentence}</p>
         ))}
@@ -47,7 +47,7 @@ export function FacePreview({
   const { face } = preview;
   const drawn = face.points.filter((point) => point.kind === 'drawn').length;
   return (
-    <div className="grid gap-3 *:min-w-0">
+    <div className="grid content-start gap-3 *:min-w-0">
       {face.requirements.map((requirement) => (
         <div key={requirement.id} className="grid gap-1">
           <p role="status" className="font-label font-semibold">

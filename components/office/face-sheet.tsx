@@ -58,7 +58,7 @@ export function FaceSheet({
             <RequirementTrail requirement={requirement} units={units} />
           </div>
         ))}
-        <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,22rem)_minmax(0,1fr)]">
+        <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,26rem)_minmax(0,1fr)]">
           <FacePlan face={face} state={state} name={name} units={units} />
           <ReadingsTable {...{ sheet, name, people, timeZone }} face={state} />
         </div>

@@ -51,19 +51,23 @@ export function HoldsList({
             {group.holds.map((hold) => (
               <li
                 key={hold.id}
-                className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 sm:grid-cols-[auto_1fr_auto]"
+                className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 lg:grid-cols-[auto_1fr_minmax(0,24rem)_7rem]"
               >
                 <MarkIcon kind={markOfHold[hold.kind] ?? 'not-met-low'} className="mt-1" />
                 <div className="min-w-0">
                   <p className="font-label text-lead font-semibold break-words">{hold.title}</p>
                   <p className="text-pencil">
-                    {hold.where}
-                    {hold.detail && `. ${hold.detail}`}
-                    {hold.since && ` Since ${timeAway(hold.since, viewer.now)}.`}
+                    {sentences(
+                      hold.where,
+                      hold.detail,
+                      hold.since && `For ${timeAway(hold.since, viewer.now).replace(' ago', '')}`,
+                    )}
                   </p>
-                  <p>{hold.need}</p>
                 </div>
-                <HoldAnswer {...{ sheet, hold, viewer }} />
+                <p className="col-start-2 lg:col-start-3">{hold.need}</p>
+                <div className="col-start-2 justify-self-start lg:col-start-4 lg:justify-self-end">
+                  <HoldAnswer {...{ sheet, hold, viewer }} />
+                </div>
               </li>
             ))}
           </ul>
@@ -72,6 +76,9 @@ export function HoldsList({
     </div>
   );
 }
+
+const sentences = (...parts: (string | null)[]): string =>
+  parts.flatMap((part) => (part ? [/[.!?]$/.test(part) ? part : `${part}.`] : [])).join(' ');
 
 /** The one thing that can be done about a hold from here, where the person may do it. */
 function HoldAnswer({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: OfficeViewer }) {

@@ -32,9 +32,15 @@ export function OfficeHeader({
           Cagewright
         </Link>
         {projects.length > 1 && current ? (
-          <ProjectSwitch projects={projects} currentId={current.id} />
+          <div className="order-2 w-full md:order-none md:w-auto">
+            <ProjectSwitch projects={projects} currentId={current.id} />
+          </div>
         ) : (
-          current && <p className="font-label text-body font-medium text-pencil">{current.name}</p>
+          current && (
+            <p className="order-2 w-full font-label text-body font-medium text-pencil md:order-none md:w-auto">
+              {current.name}
+            </p>
+          )
         )}
         <nav aria-label="Main" className="order-last -mx-1 w-full overflow-x-auto md:order-none md:w-auto">
           <ul className="flex gap-1">
@@ -45,7 +51,7 @@ export function OfficeHeader({
             ))}
           </ul>
         </nav>
-        <div className="ml-auto">
+        <div className="ml-auto md:order-last">
           <PersonMenu person={person} />
         </div>
       </div>

@@ -15,7 +15,7 @@ export function PourFields({ revises, timeZone }: { revises: boolean; timeZone: 
   if (revises) return <div className="grid gap-3 sm:grid-cols-2">{reason}</div>;
   return (
     <div className="grid gap-3 sm:grid-cols-2 lg:grid-cols-4">
-      <PlanText path="number" label="Pour number" />
+      <PlanText path="number" label="Pour number" hint="P-014" />
       <PlanText path="title" label="Title" hint="Quay deck, bay 3" />
       <PlanText path="location" label="Location" hint="Level, grid lines" />
       <PlanText

@@ -43,10 +43,8 @@ export function ReadingsTable({
         { key: 'point', head: 'Point' },
         { key: 'cover', head: 'Cover', figure: true },
         { key: 'verdict', head: 'Verdict', className: 'min-w-56' },
-        { key: 'steel', head: 'To', className: 'min-w-28' },
-        { key: 'instrument', head: 'Instrument', className: 'whitespace-nowrap' },
-        { key: 'when', head: 'Measured', className: 'whitespace-nowrap' },
-        { key: 'by', head: 'By', className: 'whitespace-nowrap' },
+        { key: 'steel', head: 'To', className: 'whitespace-nowrap' },
+        { key: 'measured', head: 'Measured', className: 'whitespace-nowrap' },
       ]}
       rows={rows}
       empty="No points on this face."
@@ -135,11 +133,17 @@ function readingCells(
         />
       ),
     steel: entry.body.steel,
-    instrument: entry.body.instrumentId
-      ? (context.instruments.get(entry.body.instrumentId) ?? 'not in the register')
-      : 'not named',
-    when: dayAndTime(entry.body.measuredAt, context.timeZone),
-    by: personName(entry.authorId, context.people),
+    measured: (
+      <>
+        {dayAndTime(entry.body.measuredAt, context.timeZone)}
+        <span className="block text-label text-pencil">
+          {entry.body.instrumentId
+            ? (context.instruments.get(entry.body.instrumentId) ?? 'instrument not in the register')
+            : 'instrument not named'}
+          , {personName(entry.authorId, context.people)}
+        </span>
+      </>
+    ),
   };
 }
 

@@ -1,3 +1,4 @@
+import { LinkButton } from '@/components/ui/link-button';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { unknownEntryWords } from './entry-words';
@@ -16,6 +17,8 @@ export interface ChainCheck {
   problem: string | null;
 }
 
+const LATEST = 60;
+
 /** Types that nobody queries: the server's own words, and what is itself a question. */
 const notQueried = new Set<RecordLine['type']>([
   'query',
@@ -33,17 +36,21 @@ export function RecordList({
   sheet,
   chain,
   viewer,
+  whole,
 }: {
   sheet: Sheet;
   chain: ChainCheck | null;
   viewer: OfficeViewer;
+  /** Every entry; otherwise the latest ones, with a link to the rest. */
+  whole: boolean;
 }) {
-  const lines = recordLines(sheet, wordContextOf(sheet, viewer.people, viewer.timeZone)).reverse();
+  const all = recordLines(sheet, wordContextOf(sheet, viewer.people, viewer.timeZone)).reverse();
+  const lines = whole ? all : all.slice(0, LATEST);
   const mayQuery = mayRecord('query', viewer.role);
   return (
     <div className="grid gap-2">
       <ChainState chain={chain} />
-      <ol reversed className="border-t border-ink">
+      <ol className="border-t border-ink">
         {sheet.unknown.map((entry) => {
           const words = unknownEntryWords(entry);
           return (
@@ -90,6 +97,13 @@ export function RecordList({
           </li>
         ))}
       </ol>
+      {lines.length < all.length && (
+        <div>
+          <LinkButton href={`/pours/${sheet.pourId}?record=whole#record`}>
+            Show all {all.length} entries
+          </LinkButton>
+        </div>
+      )}
     </div>
   );
 }

@@ -24,7 +24,7 @@ export function RequirementFields({
   const deviation = useWatch({ control, name: `${path}.deviation` });
   return (
     <fieldset className="border-l-[3px] border-ink pl-3">
-      <legend className="float-left w-full font-label text-label font-semibold">
+      <legend className="float-left mb-2 w-full font-label text-body font-semibold">
         Required cover{number > 1 ? `, steel ${number}` : ''}
       </legend>
       <div className="clear-left grid gap-3 sm:grid-cols-2">

@@ -27,11 +27,11 @@ export default async function ReleasedPage({ params }: { params: Promise<{ token
         titleBlock={
           <TitleBlock
             cells={[
-              { label: 'Project', value: [page.projectName, page.place].filter(Boolean).join(', '), grow: 3 },
+              { label: 'Project', value: [page.projectName, page.place].filter(Boolean).join(', '), grow: 2 },
               { label: 'Pour', value: page.pour.number },
               { label: 'Plan', value: `rev ${revisionLetter(page.body.planRevision)}` },
               { label: 'Release', value: `${page.number}`, figure: true },
-              { label: 'State', value: standing.word, tone: standing.tone, grow: 2 },
+              { label: 'State', value: standing.word, tone: standing.tone },
             ]}
           />
         }

@@ -12,6 +12,7 @@ import { photoViews } from '@/components/office/photo-views';
 import { PhotoStrip } from '@/components/office/photo-zoom';
 import { PlanFacts } from '@/components/office/plan-facts';
 import { PourActions } from '@/components/office/pour-actions';
+import { firstOf, type SearchParams } from '@/components/office/pours-query';
 import { RecordList } from '@/components/office/record-list';
 import { peopleById, wordContextOf } from '@/components/office/record-lines';
 import { ReleasesPanel } from '@/components/office/releases-panel';
@@ -27,7 +28,14 @@ import { readPourPage } from './read-pour-page';
 export const metadata: Metadata = { title: 'Pour' };
 
 /** One pour: its title block, holds, readings drawn to scale, checks, photos, releases and the whole record. */
-export default async function PourPage({ params }: { params: Promise<{ pourId: string }> }) {
+export default async function PourPage({
+  params,
+  searchParams,
+}: {
+  params: Promise<{ pourId: string }>;
+  searchParams: Promise<SearchParams>;
+}) {
+  const whole = firstOf(await searchParams).record === 'whole';
   const { header, sheet, holds, state, chain, viewer: read } = await readPourPage((await params).pourId);
   const viewer: OfficeViewer = {
     ...read,
@@ -153,7 +161,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
         <PlanFacts plan={sheet.plan} revisions={header.revisions} viewer={viewer} />
       </SheetFrame>
       <SheetFrame id="record" heading="The record" aside="newest first; nothing is ever taken out">
-        <RecordList {...{ sheet, chain, viewer }} />
+        <RecordList {...{ sheet, chain, viewer, whole }} />
       </SheetFrame>
     </PageMain>
   );
