@@ -3,6 +3,7 @@
 import Link from 'next/link';
 import { usePathname } from 'next/navigation';
 import { classNames } from '@/components/ui/class-names';
+import { LinkPending } from './link-pending';
 
 /** A link of the main navigation, underlined heavily where one is. */
 export function NavLink({ href, label }: { href: string; label: string }) {
@@ -19,6 +20,7 @@ export function NavLink({ href, label }: { href: string; label: string }) {
       )}
     >
       {label}
+      <LinkPending />
     </Link>
   );
 }

@@ -8,6 +8,7 @@ import { pourStateWords } from '@/lib/inspection/pour-state';
 import type { Role } from '@/lib/inspection/roles';
 import type { PourState } from '@/lib/inspection/sheet-types';
 import { holdCountWords } from './holds-by-role';
+import { LinkPending } from './link-pending';
 import { poursHref, type PoursQuery } from './pours-query';
 import { pourStanding } from './pours-timeline';
 import { RuledTable, type RuledColumn } from './ruled-table';
@@ -104,6 +105,7 @@ export function PoursTable({
               className="inline-block min-h-6 font-label font-semibold whitespace-nowrap text-chalk underline underline-offset-4"
             >
               {pour.number}
+              <LinkPending />
             </Link>
           ),
           title: (
