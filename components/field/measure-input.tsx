@@ -68,6 +68,7 @@ function LengthInput({
   const shown = shownPresses(presses, unit);
   useTypedKeys({
     enabled: true,
+    filled: presses.length > 0,
     onChar: (char) => onChange(pressed(presses, { kind: 'char', char })),
     onDelete: () => onChange(presses.slice(0, -1)),
     onEnter: () => document.querySelector<HTMLButtonElement>('main form button[type="submit"]')?.click(),

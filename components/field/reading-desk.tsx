@@ -45,6 +45,7 @@ export function ReadingDesk({
   const [from, setFrom] = useState<{ xMm: number; yMm: number; key?: string } | null>(null);
   const [picker, setPicker] = useState<Picker | null>(null);
   const [panel, setPanel] = useState<'how' | 'point' | null>(null);
+  const [doubted, setDoubted] = useState<readonly Press[] | null>(null);
   const [asFoundBar, setAsFoundBar] = useState('');
   const { busy, problem, kept, keep, undo, say } = useKeepReading(open, setup.settings.sound);
 
@@ -101,14 +102,20 @@ export function ReadingDesk({
 
   const keepTyped = () => {
     const read = readPresses(presses, unit);
-    if (!read.ok) say(read.problem);
-    else void keepBody({ value: read.value, goNoGo: null });
+    if (!read.ok) return say(read.problem);
+    const { thicknessMm } = place.element;
+    if (read.value.mm !== null && read.value.mm > thicknessMm && doubted !== presses) {
+      setDoubted(presses);
+      return say(`More than the section, ${withUnit(thicknessMm, unit)}. Keep again if it is so.`);
+    }
+    void keepBody({ value: read.value, goNoGo: null });
   };
   const keepBlock = (passes: boolean) =>
     void keepBody({ value: null, goNoGo: { blockMm: setup.blockMm, passes } });
 
   useTypedKeys({
     enabled: !setup.isBlock,
+    filled: presses.length > 0,
     onChar: (char) => press({ kind: 'char', char }),
     onDelete: () => setPresses((before) => before.slice(0, -1)),
     onEnter: keepTyped,
@@ -131,7 +138,7 @@ export function ReadingDesk({
   };
 
   return (
-    <div className="grid h-full min-h-0 grid-rows-[minmax(9.5rem,1fr)_auto] bg-sheet md:grid-cols-[1fr_26rem] md:grid-rows-1">
+    <div className="grid h-full min-h-0 grid-cols-[minmax(0,1fr)] grid-rows-[minmax(9.5rem,1fr)_auto] bg-sheet md:grid-cols-[minmax(0,1fr)_26rem] md:grid-rows-1">
       <div ref={drawings} className="min-h-0 overflow-y-auto">
         <WorkingMap
           place={place}

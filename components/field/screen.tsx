@@ -1,6 +1,6 @@
 'use client';
 
-import type { ReactNode } from 'react';
+import { useEffect, type ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { DeviceNotices } from './device-notices';
 import { useScreenFocus } from './field-router';
@@ -25,6 +25,9 @@ export function Screen({
   children: ReactNode;
 }) {
   useScreenFocus();
+  useEffect(() => {
+    document.title = `${title} · Cagewright`;
+  }, [title]);
   return (
     <div
       data-density="field"

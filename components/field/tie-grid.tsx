@@ -38,8 +38,8 @@ export function TieGrid({ measure, onChange }: { measure: Share; onChange: (meas
       <div
         role="group"
         aria-label="Crossings of the sample square"
-        className="grid border border-ink"
-        style={{ gridTemplateColumns: `repeat(${columns}, minmax(0, 1fr))` }}
+        className="-mx-3 grid overflow-x-auto border-y border-ink"
+        style={{ gridTemplateColumns: `repeat(${columns}, minmax(3.5rem, 1fr))` }}
       >
         {Array.from({ length: of }, (_, index) => (
           <button
@@ -48,7 +48,7 @@ export function TieGrid({ measure, onChange }: { measure: Share; onChange: (meas
             aria-pressed={tied.has(index)}
             aria-label={`Row ${Math.floor(index / columns) + 1}, bar ${(index % columns) + 1}`}
             onClick={() => toggle(index)}
-            className="relative aspect-square min-h-8 touch-manipulation"
+            className="relative min-h-14 touch-manipulation"
           >
             <span aria-hidden="true" className="absolute inset-x-0 top-1/2 h-0.5 bg-steel" />
             <span aria-hidden="true" className="absolute inset-y-0 left-1/2 w-0.5 bg-steel" />

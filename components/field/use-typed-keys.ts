@@ -13,6 +13,8 @@ const inField = (target: EventTarget | null) =>
  */
 export function useTypedKeys(handlers: {
   enabled: boolean;
+  /** Something has been entered: Enter may mean "keep". */
+  filled: boolean;
   onChar: (char: string) => void;
   onDelete: () => void;
   onEnter: () => void;
@@ -24,14 +26,13 @@ export function useTypedKeys(handlers: {
   useEffect(() => {
     let typed = false;
     const listen = (event: KeyboardEvent) => {
-      const { enabled, onChar, onDelete, onEnter } = latest.current;
+      const { enabled, filled, onChar, onDelete, onEnter } = latest.current;
       if (!enabled || event.ctrlKey || event.metaKey || event.altKey || inField(event.target)) return;
       if (document.querySelector('dialog[open]')) return;
       if (event.key === 'Enter') {
         const onControl = event.target instanceof HTMLElement && event.target.closest('button, a, summary');
-        if (onControl && !typed) return;
+        if (onControl && !(typed && filled)) return;
         event.preventDefault();
-        typed = false;
         onEnter();
       } else if (event.key === 'Backspace') {
         event.preventDefault();
