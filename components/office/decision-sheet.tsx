@@ -37,6 +37,12 @@ export function DecisionSheet({
     extent: 'Extent, and where on the drawing',
     photos: 'Photographs',
   };
+  const decide = (props: Omit<DispositionFormProps, 'unopened'>) => (
+    <DispositionForm
+      {...props}
+      unopened={parts.filter(({ key }) => !opened.has(key)).map(({ word }) => word)}
+    />
+  );
   return (
     <>
       {parts.map(({ key }) => (
@@ -59,10 +65,16 @@ export function DecisionSheet({
       ))}
       {form && (
         <SheetFrame heading="The decision" className="print:hidden">
-          <DispositionForm
-            {...form}
-            unopened={parts.filter(({ key }) => !opened.has(key)).map(({ word }) => word)}
-          />
+          {form.replaces ? (
+            <details>
+              <summary className="min-h-target w-fit font-label font-semibold text-chalk">
+                Decide again
+              </summary>
+              {decide(form)}
+            </details>
+          ) : (
+            decide(form)
+          )}
         </SheetFrame>
       )}
     </>

@@ -135,7 +135,7 @@ export function correctionAction(holds: readonly Hold[], plan: Plan): EntryActio
         kind: 'many',
         name: 'holds',
         label: 'What was put right',
-        options: correctable.map((hold) => ({ value: hold.id, label: `${hold.title}, ${hold.where}` })),
+        options: correctable.map((hold) => ({ value: hold.id, label: `${hold.title} · ${hold.where}` })),
       },
       { kind: 'long', name: 'text', label: 'What was done' },
     ],

@@ -60,7 +60,7 @@ export function HoldsList({
                     {sentences(
                       hold.where,
                       hold.detail,
-                      hold.since && `For ${timeAway(hold.since, viewer.now).replace(' ago', '')}`,
+                      hold.since && `Standing for ${timeAway(hold.since, viewer.now).replace(' ago', '')}`,
                     )}
                   </p>
                 </div>

@@ -89,7 +89,8 @@ function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFro
   const form = useForm<PlanDraft>({
     defaultValues: kept ? { ...start, ...kept.draft } : start,
     resolver,
-    mode: 'onBlur',
+    // Not on blur: a message that comes or goes while the button is being pressed would move the button away.
+    mode: 'onSubmit',
   });
   const elements = useFieldArray({ control: form.control, name: 'elements', keyName: 'key' });
 
@@ -171,11 +172,6 @@ function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFro
           </Notice>
         )}
         {failure && <ProblemNotice failure={failure} title="The plan was not issued" />}
-        {wrong && !failure && (
-          <Notice tone="hold" title="The plan cannot be issued yet">
-            <p>The fields concerned say what is wrong. Nothing you typed is lost.</p>
-          </Notice>
-        )}
         <SheetFrame heading={revises ? 'Why it is revised' : 'The pour'}>
           <PourFields revises={revises !== null} timeZone={timeZone} />
         </SheetFrame>
@@ -206,6 +202,12 @@ function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFro
             revision. The contract documents and the local code govern.
           </p>
         </div>
+        {/* Below the button: a notice that goes away above it would move it from under the pointer. */}
+        {wrong && !failure && (
+          <Notice tone="hold" title="The plan cannot be issued yet">
+            <p>The fields concerned say what is wrong. Nothing you typed is lost.</p>
+          </Notice>
+        )}
       </form>
     </FormProvider>
   );

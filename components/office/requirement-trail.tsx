@@ -47,7 +47,9 @@ export function TrailBody({ requirement, units }: { requirement: Requirement; un
             <span>
               {step.rule}
               <span className="block text-label text-pencil">
-                {[step.clause, step.edition, provenanceWords[step.provenance]].filter(Boolean).join(', ')}
+                {[...new Set([step.clause, step.edition, provenanceWords[step.provenance]])]
+                  .filter(Boolean)
+                  .join(', ')}
                 {step.note ? `. ${step.note}` : ''}
               </span>
             </span>
