@@ -57,6 +57,18 @@ export async function standingReleaseAuthor(
   return row ?? null;
 }
 
+/** Number, pour and token of the release that an entry gave, or null. */
+export async function releaseByEntry(
+  tx: Tx,
+  projectId: string,
+  entryId: string,
+): Promise<{ number: number; pourId: string; token: string } | null> {
+  const row = await tx('releases')
+    .where({ project_id: projectId, entry_id: entryId })
+    .first<{ number: number; pour_id: string; token: string } | undefined>('number', 'pour_id', 'token');
+  return row ? { number: row.number, pourId: row.pour_id, token: row.token } : null;
+}
+
 /** Project and pour of the release behind a token; the one question that needs no session. */
 export async function releaseByToken(
   tx: Tx,

@@ -1,0 +1,72 @@
+import { createHash } from 'node:crypto';
+import sharp from 'sharp';
+
+/** More than any phone makes, and little enough to decode without harm. */
+const MOST_PIXELS = 60_000_000;
+
+const signatures: { contentType: string; matches: (bytes: Buffer) => boolean }[] = [
+  {
+    contentType: 'image/jpeg',
+    matches: (bytes) => bytes[0] === 0xff && bytes[1] === 0xd8 && bytes[2] === 0xff,
+  },
+  {
+    contentType: 'image/png',
+    matches: (bytes) => bytes.subarray(0, 8).equals(Buffer.from('89504e470d0a1a0a', 'hex')),
+  },
+  {
+    contentType: 'image/webp',
+    matches: (bytes) =>
+      bytes.toString('latin1', 0, 4) === 'RIFF' && bytes.toString('latin1', 8, 12) === 'WEBP',
+  },
+];
+
+export interface Announced {
+  bytes: number;
+  sha256: string;
+  contentType: string;
+}
+
+/** `again`: the bytes are not those announced, and may still come whole; `refused`: they never can be a photograph. */
+export type Inspected =
+  | { kind: 'good'; widthPx: number; heightPx: number }
+  | { kind: 'again'; problem: string }
+  | { kind: 'refused'; problem: string };
+
+/**
+ * Looks at uploaded bytes once, before they count: length, digest, type by content, and that they can be drawn to the
+ * last row.
+ */
+export async function inspectImage(bytes: Buffer, announced: Announced): Promise<Inspected> {
+  if (bytes.length !== announced.bytes) {
+    return {
+      kind: 'again',
+      problem: `${bytes.length} of ${announced.bytes} bytes came. It has to be sent again.`,
+    };
+  }
+  if (createHash('sha256').update(bytes).digest('hex') !== announced.sha256) {
+    return {
+      kind: 'again',
+      problem: 'The bytes that came are not those of the photograph. It has to be sent again.',
+    };
+  }
+  const found = signatures.find((signature) => signature.matches(bytes));
+  if (!found) return { kind: 'refused', problem: 'This file is not a photograph. Take it again.' };
+  if (found.contentType !== announced.contentType) {
+    return {
+      kind: 'refused',
+      problem: `This file is ${found.contentType}, and was announced as ${announced.contentType}.`,
+    };
+  }
+  try {
+    const { info } = await sharp(bytes, { limitInputPixels: MOST_PIXELS, failOn: 'truncated' })
+      .rotate()
+      .raw()
+      .toBuffer({ resolveWithObject: true });
+    return { kind: 'good', widthPx: info.width, heightPx: info.height };
+  } catch {
+    return {
+      kind: 'refused',
+      problem: 'This photograph is damaged or too large to be shown. Take it again.',
+    };
+  }
+}
