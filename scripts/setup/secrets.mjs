@@ -39,6 +39,8 @@ export function environmentFor({ secrets, cluster, database, ports, host = '127.
   return {
     ...process.env,
     NEXT_TELEMETRY_DISABLED: '1',
+    // Node 20 serves it until 2027; the notice is for us, not for whoever starts the product.
+    AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
     APP_URL: appUrl,
     NEXTAUTH_URL: appUrl,
     NEXTAUTH_SECRET: secrets.NEXTAUTH_SECRET,
