@@ -18,7 +18,7 @@ export const EXAMPLE_POUR = '00000000-0000-4000-8000-000000000000';
 export function previewFace(
   element: ElementDraft,
   faceIndex: number,
-  rules: Pick<PlanDraft, 'units' | 'basis' | 'mixName' | 'mixAggregate'>,
+  rules: Pick<PlanDraft, 'units' | 'basis' | 'mixName' | 'mixAggregate' | 'concrete'>,
   pourId: string,
 ): FacePreviewOf {
   const face = element.faces[faceIndex];

@@ -21,15 +21,15 @@ export function FacePreview({
   pourId: string | null;
 }) {
   const { control } = useFormContext<PlanDraft>();
-  const [element, units, basis, mixName, mixAggregate] = useWatch({
+  const [element, units, basis, mixName, mixAggregate, concrete] = useWatch({
     control,
-    name: [`elements.${elementIndex}`, 'units', 'basis', 'mixName', 'mixAggregate'] as const,
+    name: [`elements.${elementIndex}`, 'units', 'basis', 'mixName', 'mixAggregate', 'concrete'] as const,
   });
-  const text = useDeferredValue(JSON.stringify({ element, units, basis, mixName, mixAggregate }));
+  const text = useDeferredValue(JSON.stringify({ element, units, basis, mixName, mixAggregate, concrete }));
   const preview = useMemo(() => {
     const typed = JSON.parse(text) as { element: PlanDraft['elements'][number] } & Pick<
       PlanDraft,
-      'units' | 'basis' | 'mixName' | 'mixAggregate'
+      'units' | 'basis' | 'mixName' | 'mixAggregate' | 'concrete'
     >;
     return previewFace(typed.element, faceIndex, typed, pourId ?? EXAMPLE_POUR);
   }, [text, faceIndex, pourId]);

@@ -6,7 +6,16 @@ import { draftPath } from './plan-from-draft';
 /** Fields of the computation that the form asks for one level higher than where they were missed. */
 const ofFace = new Set(['exposure', 'meeting', 'soffit']);
 const ofElement = new Set(['thickness', 'effectiveDepth', 'element']);
-const ofPlan: Record<string, string> = { basis: 'basis', aggregate: 'mixAggregate' };
+const ofPlan: Record<string, string> = {
+  basis: 'basis',
+  aggregate: 'mixAggregate',
+  structuralClass: 'concrete.structuralClass',
+  workingLifeYears: 'concrete.workingLifeYears',
+  strengthClass: 'concrete.strengthClass',
+  toleranceClass: 'concrete.toleranceClass',
+  deltaCdev: 'concrete.deltaCdev',
+  strengthMpa: 'concrete.strengthMpa',
+};
 const renamed: Record<string, string> = { barDiameter: 'barDesignation' };
 
 /**

@@ -15,6 +15,9 @@ export interface RequirementDraft {
   deviation: 'basis' | 'contract' | 'never-less';
   contractMinus: string;
   contractPlus: string;
+  mainBar: boolean;
+  /** Empty: a single bar. */
+  bundleOf: string;
 }
 
 export interface RectangleDraft {
@@ -76,6 +79,19 @@ export interface ElementDraft {
   layers: LayerDraft[];
 }
 
+/** What some codes ask of the concrete; which of it is asked for depends on the basis. */
+export interface ConcreteDraft {
+  structuralClass: '' | 'S1' | 'S2' | 'S3' | 'S4' | 'S5' | 'S6';
+  workingLifeYears: '' | '50' | '100';
+  strengthClass: string;
+  toleranceClass: '' | '1' | '2';
+  deltaCdev: string;
+  slabGeometry: boolean;
+  specialQualityControl: boolean;
+  strengthMpa: string;
+  membrane: boolean;
+}
+
 export interface PlanDraft {
   number: string;
   title: string;
@@ -91,6 +107,7 @@ export interface PlanDraft {
   rainLimit: string;
   mixName: string;
   mixAggregate: string;
+  concrete: ConcreteDraft;
   lastWalk: boolean;
   elements: ElementDraft[];
   /** The template to take; empty: by the types of the elements. */
@@ -114,6 +131,8 @@ export const emptyRequirement = (): RequirementDraft => ({
   deviation: 'contract',
   contractMinus: '',
   contractPlus: '',
+  mainBar: false,
+  bundleOf: '',
 });
 
 export const emptyFace = (name = ''): FaceDraft => ({
@@ -157,6 +176,18 @@ export const emptyElement = (): ElementDraft => ({
   layers: [],
 });
 
+export const emptyConcrete = (): ConcreteDraft => ({
+  structuralClass: '',
+  workingLifeYears: '',
+  strengthClass: '',
+  toleranceClass: '',
+  deltaCdev: '',
+  slabGeometry: false,
+  specialQualityControl: false,
+  strengthMpa: '',
+  membrane: false,
+});
+
 export const emptyPlanDraft = (): PlanDraft => ({
   number: '',
   title: '',
@@ -171,6 +202,7 @@ export const emptyPlanDraft = (): PlanDraft => ({
   rainLimit: '5',
   mixName: '',
   mixAggregate: '',
+  concrete: emptyConcrete(),
   lastWalk: true,
   elements: [emptyElement()],
   template: '',
@@ -202,6 +234,23 @@ function requirementDraft(one: Requirement, shown: (mm: number) => string): Requ
     deviation: neverLess ? 'never-less' : minus || plus ? 'contract' : 'basis',
     contractMinus: minus ? shown(one.specifiedMm - one.leastAcceptedMm) : '',
     contractPlus: plus ? shown((one.mostAcceptedMm ?? 0) - one.specifiedMm) : '',
+    mainBar: one.mainBar ?? false,
+    bundleOf: one.bundleOf === undefined ? '' : String(one.bundleOf),
+  };
+}
+
+function concreteDraft(of: Plan['concrete'], shown: (mm: number) => string): ConcreteDraft {
+  if (!of) return emptyConcrete();
+  return {
+    structuralClass: of.structuralClass ?? '',
+    workingLifeYears: of.workingLifeYears === 50 ? '50' : of.workingLifeYears === 100 ? '100' : '',
+    strengthClass: of.strengthClass ?? '',
+    toleranceClass: of.toleranceClass === 1 ? '1' : of.toleranceClass === 2 ? '2' : '',
+    deltaCdev: of.deltaCdevMm === undefined ? '' : shown(of.deltaCdevMm),
+    slabGeometry: of.slabGeometry ?? false,
+    specialQualityControl: of.specialQualityControl ?? false,
+    strengthMpa: of.strengthMpa === undefined ? '' : String(of.strengthMpa),
+    membrane: of.membrane ?? false,
   };
 }
 
@@ -222,6 +271,7 @@ export function draftOfPlan(plan: Plan): PlanDraft {
     rainLimit: exactText(plan.rainLimitMm, 'mm'),
     mixName: plan.mix?.name ?? '',
     mixAggregate: plan.mix ? shown(plan.mix.aggregateMm) : '',
+    concrete: concreteDraft(plan.concrete, shown),
     lastWalk: plan.lastWalk,
     checklist: plan.checklist,
     measurements: plan.measurements.map(({ trail: _trail, ...item }) => item),
@@ -232,7 +282,7 @@ export function draftOfPlan(plan: Plan): PlanDraft {
       location: element.location,
       level: element.level,
       thickness: shown(element.thicknessMm),
-      effectiveDepth: '',
+      effectiveDepth: element.effectiveDepthMm ? shown(element.effectiveDepthMm) : '',
       drawing: element.drawing,
       layers: element.layers.map((layer) => ({
         id: layer.id,

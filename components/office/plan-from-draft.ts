@@ -80,6 +80,8 @@ function readFace(
         contractPlusMm:
           one.deviation === 'basis' ? null : reader.optionalLength(`${path}.contractPlus`, one.contractPlus),
         neverLess: one.deviation === 'never-less',
+        ...(one.bundleOf === '' ? {} : { bundleOf: reader.number(`${path}.bundleOf`, one.bundleOf) }),
+        ...(one.mainBar ? { mainBar: true } : {}),
       };
     }),
   };
@@ -142,7 +144,27 @@ export function wholeChecklist(
   };
 }
 
+/** What the basis asks of the concrete; what it does not ask for is left out, whatever was typed for another basis. */
+function readConcrete(reader: Reader, draft: PlanDraft): PlanInput['concrete'] {
+  const { concrete: typed, basis } = draft;
+  const strength =
+    typed.strengthMpa === '' ? {} : { strengthMpa: reader.number('concrete.strengthMpa', typed.strengthMpa) };
+  if (basis === 'is-456') return strength;
+  if (basis === 'as-3600') return { ...strength, ...(typed.membrane ? { membrane: true } : {}) };
+  if (basis !== 'en-1992') return undefined;
+  return {
+    ...(typed.structuralClass ? { structuralClass: typed.structuralClass } : {}),
+    ...(typed.workingLifeYears ? { workingLifeYears: typed.workingLifeYears === '50' ? 50 : 100 } : {}),
+    ...(typed.strengthClass.trim() ? { strengthClass: typed.strengthClass } : {}),
+    ...(typed.toleranceClass ? { toleranceClass: typed.toleranceClass === '1' ? 1 : 2 } : {}),
+    ...(typed.deltaCdev === '' ? {} : { deltaCdevMm: reader.length('concrete.deltaCdev', typed.deltaCdev) }),
+    ...(typed.slabGeometry ? { slabGeometry: true } : {}),
+    ...(typed.specialQualityControl ? { specialQualityControl: true } : {}),
+  };
+}
+
 function readPlan(reader: Reader, draft: PlanDraft): PlanInput {
+  const concrete = readConcrete(reader, draft);
   const guardMm = draft.rule === 'guarded' ? reader.optionalLength('guard', draft.guard) : null;
   return {
     units: draft.units,
@@ -161,6 +183,7 @@ function readPlan(reader: Reader, draft: PlanDraft): PlanInput {
             name: draft.mixName,
             aggregateMm: reader.length('mixAggregate', draft.mixAggregate),
           },
+    ...(concrete && Object.keys(concrete).length > 0 ? { concrete } : {}),
     elements: draft.elements.map((element, index) => readElement(reader, `elements.${index}`, element)),
     measurements: draft.measurements,
     checklist: draftChecklist(draft),

@@ -2,6 +2,7 @@
 
 import { useFormContext, useWatch } from 'react-hook-form';
 import { Button } from '@/components/ui/button';
+import { Checkbox } from '@/components/ui/checkbox';
 import type { PlanDraft } from './plan-draft';
 import { PlanSelect, PlanText } from './plan-field';
 import { basisWords } from './state-words';
@@ -20,7 +21,7 @@ export function RequirementFields({
   basis: PlanDraft['basis'];
   onRemove: (() => void) | null;
 }) {
-  const { control } = useFormContext<PlanDraft>();
+  const { control, register } = useFormContext<PlanDraft>();
   const deviation = useWatch({ control, name: `${path}.deviation` });
   return (
     <fieldset className="border-l-[3px] border-ink pl-3">
@@ -33,7 +34,7 @@ export function RequirementFields({
           label="To which steel"
           hint="Outermost bar, ties, main bars of layer 2"
         />
-        <PlanText path={`${path}.barDesignation`} label="Bar" hint="#5, 16 mm or 15M" />
+        <PlanText path={`${path}.barDesignation`} label="Bar" hint="#5, 16 mm, 15M, N16 or IS 16" />
         <PlanText
           path={`${path}.contractSpecified`}
           label="Specified cover"
@@ -59,10 +60,20 @@ export function RequirementFields({
             optional={basis !== 'contract'}
           />
         )}
+        <PlanSelect
+          path={`${path}.bundleOf`}
+          label="Bundle"
+          placeholder="Single bar"
+          options={['2', '3', '4'].map((value) => ({ value, label: `${value} bars together` }))}
+        />
         {deviation !== 'basis' && (
           <PlanText path={`${path}.contractPlus`} label="Plus" optional unit={units} />
         )}
       </div>
+      <Checkbox
+        label="This is the main bar: effective depth is judged from it too"
+        {...register(`${path}.mainBar`)}
+      />
       {onRemove && (
         <Button variant="quiet" onClick={onRemove}>
           Remove this cover

@@ -10,7 +10,7 @@ import { basisWords } from './state-words';
 /** Units, basis, decision rule, validity, rain limit and mix: what every reading of the pour is judged by. */
 export function RulesFields() {
   const { control, register } = useFormContext<PlanDraft>();
-  const [units, rule] = useWatch({ control, name: ['units', 'rule'] as const });
+  const [units, rule, basis] = useWatch({ control, name: ['units', 'rule', 'basis'] as const });
   return (
     <div className="grid gap-3 sm:grid-cols-2 lg:grid-cols-4">
       <PlanSelect
@@ -55,7 +55,74 @@ export function RulesFields() {
         optional
         unit={units}
       />
+      {basis === 'en-1992' && <EnConcrete units={units} />}
+      {(basis === 'is-456' || basis === 'as-3600') && (
+        <PlanText
+          path="concrete.strengthMpa"
+          label="Strength of the concrete"
+          hint="Characteristic"
+          optional
+          unit="MPa"
+        />
+      )}
+      {basis === 'as-3600' && (
+        <Checkbox
+          label="Membrane against the ground"
+          className="self-end"
+          {...register('concrete.membrane')}
+        />
+      )}
       <Checkbox label="Last walk before the release" className="self-end" {...register('lastWalk')} />
     </div>
+  );
+}
+
+/** What EN 1992-1-1 and EN 13670 ask beside the exposure. */
+function EnConcrete({ units }: { units: 'mm' | 'in' }) {
+  const { register } = useFormContext<PlanDraft>();
+  return (
+    <>
+      <PlanSelect
+        path="concrete.workingLifeYears"
+        label="Working life"
+        hint="The structural class follows from it"
+        placeholder="Not said"
+        options={[
+          { value: '50', label: '50 years' },
+          { value: '100', label: '100 years' },
+        ]}
+      />
+      <PlanSelect
+        path="concrete.structuralClass"
+        label="Structural class"
+        hint="Where the contract names it"
+        placeholder="By working life"
+        options={(['S1', 'S2', 'S3', 'S4', 'S5', 'S6'] as const).map((value) => ({ value, label: value }))}
+      />
+      <PlanText path="concrete.strengthClass" label="Strength class" hint="C40/50" optional />
+      <PlanSelect
+        path="concrete.toleranceClass"
+        label="Tolerance class"
+        hint="EN 13670"
+        placeholder="Not said"
+        options={[
+          { value: '1', label: '1' },
+          { value: '2', label: '2' },
+        ]}
+      />
+      <PlanText
+        path="concrete.deltaCdev"
+        label="Allowance for deviation"
+        hint="Left empty: the recommended one"
+        optional
+        unit={units}
+      />
+      <Checkbox label="Slab geometry" className="self-end" {...register('concrete.slabGeometry')} />
+      <Checkbox
+        label="Special quality control"
+        className="self-end"
+        {...register('concrete.specialQualityControl')}
+      />
+    </>
   );
 }

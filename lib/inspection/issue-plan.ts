@@ -56,6 +56,8 @@ function issueRequirement(
     steel: wanted.steel,
     barDesignation: wanted.barDesignation,
     barDiameterMm,
+    ...(wanted.bundleOf === undefined ? {} : { bundleOf: wanted.bundleOf }),
+    ...(wanted.mainBar === undefined ? {} : { mainBar: wanted.mainBar }),
     ...computed,
     warnings: [...computed.warnings],
     trail: [...computed.trail],
@@ -271,6 +273,7 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
     validityHours: input.validityHours,
     rainLimitMm: input.rainLimitMm,
     mix: input.mix,
+    ...(input.concrete ? { concrete: input.concrete } : {}),
     elements: input.elements.map((element) => ({
       id: element.id,
       type: element.type,
@@ -278,6 +281,7 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
       location: element.location,
       level: element.level,
       thicknessMm: element.thicknessMm,
+      effectiveDepthMm: element.effectiveDepthMm,
       drawing: element.drawing,
       faces: element.faces.map((face) => issueFace(input, context.pourId, element, face)),
       layers: element.layers.map((layer) => ({

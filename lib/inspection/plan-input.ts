@@ -3,6 +3,7 @@ import { instant, lengthUnit, optionalText, planKey, positiveMillimetres, requir
 import {
   acceptanceBasis,
   checkItem,
+  concreteInput,
   decisionRule,
   elementType,
   layer,
@@ -64,21 +65,6 @@ export const elementInput = z.object({
   drawing: z.object({ number: requiredText(40), revision: requiredText(20) }),
   faces: z.array(faceInput).min(1, 'Add at least one face.').max(12),
   layers: z.array(layer.omit({ barDiameterMm: true })).max(24),
-});
-
-/** What some codes ask of the concrete before they give a cover; each is only needed by the basis that names it. */
-export const concreteInput = z.object({
-  /** EN 1992-1-1: the structural class, or the working life it is found from. */
-  structuralClass: z.enum(['S1', 'S2', 'S3', 'S4', 'S5', 'S6']).optional(),
-  workingLifeYears: z.union([z.literal(50), z.literal(100)]).optional(),
-  strengthClass: optionalText(20).optional(),
-  slabGeometry: z.boolean().optional(),
-  specialQualityControl: z.boolean().optional(),
-  deltaCdevMm: z.number().nonnegative().max(50).optional(),
-  toleranceClass: z.union([z.literal(1), z.literal(2)]).optional(),
-  /** IS 456 and AS 3600: characteristic strength, MPa. */
-  strengthMpa: z.number().positive().max(150).optional(),
-  membrane: z.boolean().optional(),
 });
 
 /** What a person types to say what must be in the form. */

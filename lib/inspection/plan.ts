@@ -60,6 +60,9 @@ export const requirement = z.object({
   leastAcceptedMm: millimetres,
   mostAcceptedMm: millimetres.nullable(),
   codeMinimumMm: millimetres.nullable(),
+  /** As typed: bars in a bundle, and whether this steel is the main bar. */
+  bundleOf: z.number().int().min(2).max(4).optional(),
+  mainBar: z.boolean().optional(),
   warnings: z.array(z.string()),
   trail: z.array(trailStep),
   /** Other bar sizes that would ask for more cover here: a bar found that was not planned is judged by the stricter. */
@@ -183,6 +186,8 @@ export const element = z.object({
   location: requiredText(120),
   level: optionalText(40),
   thicknessMm: positiveMillimetres,
+  /** As planned; absent in plans issued before it was kept. */
+  effectiveDepthMm: positiveMillimetres.nullable().optional(),
   drawing: z.object({ number: requiredText(40), revision: requiredText(20) }),
   faces: z.array(face).min(1).max(12),
   layers: z.array(layer).max(24),
@@ -224,6 +229,21 @@ export type CheckItem = z.infer<typeof checkItem>;
 
 export const mix = z.object({ id: planKey, name: requiredText(80), aggregateMm: positiveMillimetres });
 
+/** What some codes ask of the concrete before they give a cover; each is only needed by the basis that names it. */
+export const concreteInput = z.object({
+  /** EN 1992-1-1: the structural class, or the working life it is found from. */
+  structuralClass: z.enum(['S1', 'S2', 'S3', 'S4', 'S5', 'S6']).optional(),
+  workingLifeYears: z.union([z.literal(50), z.literal(100)]).optional(),
+  strengthClass: optionalText(20).optional(),
+  slabGeometry: z.boolean().optional(),
+  specialQualityControl: z.boolean().optional(),
+  deltaCdevMm: z.number().nonnegative().max(50).optional(),
+  toleranceClass: z.union([z.literal(1), z.literal(2)]).optional(),
+  /** IS 456 and AS 3600: characteristic strength, MPa. */
+  strengthMpa: z.number().positive().max(150).optional(),
+  membrane: z.boolean().optional(),
+});
+
 /** What must be in the form: a dated revision, never edited, its numbers frozen when it was issued. */
 export const plan = z.object({
   schema: z.literal(1),
@@ -240,6 +260,8 @@ export const plan = z.object({
   /** Rain at or over this depth voids a release; rain of unknown amount always does. */
   rainLimitMm: z.number().nonnegative().max(100),
   mix: mix.nullable(),
+  /** What was typed for it, so that a revision starts from the same figures. */
+  concrete: concreteInput.optional(),
   elements: z.array(element).min(1).max(60),
   measurements: z.array(measurementItem).max(200),
   checklist: z.object({

@@ -122,6 +122,36 @@ describe('the form of a plan', () => {
     expect(issuePlan(again.input, context).elements).toEqual(first.elements);
   });
 
+  it('keeps effective depth, main bar, bundle and what the code asks of the concrete over a revision', () => {
+    const draft = typed();
+    const element = draft.elements[0];
+    const face = element?.faces[0];
+    Object.assign(element ?? {}, { effectiveDepth: '260 mm' });
+    Object.assign(face ?? {}, { exposure: 'XS3' });
+    Object.assign(face?.requirements[0] ?? {}, {
+      barDesignation: '16 mm',
+      contractSpecified: '',
+      deviation: 'basis',
+      contractMinus: '',
+      contractPlus: '',
+      mainBar: true,
+      bundleOf: '2',
+    });
+    const read = planFromDraft({
+      ...draft,
+      basis: 'en-1992',
+      mixName: 'C40/50 marine',
+      mixAggregate: '20 mm',
+      concrete: { ...draft.concrete, workingLifeYears: '100', strengthClass: 'C40/50', toleranceClass: '1' },
+    });
+    if (!read.ok) throw new Error(JSON.stringify(read.problems));
+    const first = issuePlan(read.input, context);
+    expect(first.elements[0]?.faces[0]?.requirements[0]?.depth?.plannedMm).toBeCloseTo(260, 9);
+    const again = planFromDraft({ ...draftOfPlan(first), reason: 'Nothing changed' });
+    if (!again.ok) throw new Error(JSON.stringify(again.problems));
+    expect(issuePlan(again.input, context)).toEqual(first);
+  });
+
   it('says where the computation found a problem', () => {
     const draft = typed();
     const element = draft.elements[0];
@@ -145,7 +175,7 @@ describe('the form of a plan', () => {
   it('draws a face while names elsewhere are still empty, and says which numbers are missing', () => {
     const element = typed().elements[0];
     if (!element) throw new Error('no element');
-    const rules = { units: 'in', basis: 'contract', mixName: '', mixAggregate: '' } as const;
+    const rules = { ...emptyPlanDraft(), units: 'in', basis: 'contract' } as const;
     const drawn = previewFace({ ...element, mark: '', location: '' }, 0, rules, pourId);
     expect(drawn.kind === 'face' && drawn.face.points.filter((point) => point.kind === 'drawn')).toHaveLength(
       9,
