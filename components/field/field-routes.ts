@@ -7,6 +7,7 @@ export type PourRoute =
   | { part: 'checks'; group: string | null }
   | { part: 'measurements'; itemId: string | null }
   | { part: 'holds' }
+  | { part: 'fix-list' }
   | { part: 'photos'; about: SubjectRef | null }
   | { part: 'nonconformance'; about: SubjectRef | null }
   | { part: 'nonconformance-shown'; id: string }
@@ -69,6 +70,7 @@ function readPourRoute(parts: string[]): PourRoute | null {
     case 'entries':
       return first ? { part: 'entry', entryId: first } : null;
     case 'holds':
+    case 'fix-list':
     case 'events':
     case 'last-walk':
     case 'instruments':
@@ -115,6 +117,7 @@ export const fieldPaths = {
   correction: (pourId: string, about?: SubjectRef) => withSubject(pourId, 'correction', about),
   entry: (pourId: string, entryId: string) => join('field', 'pours', pourId, 'entries', entryId),
   holds: (pourId: string) => join('field', 'pours', pourId, 'holds'),
+  fixList: (pourId: string) => join('field', 'pours', pourId, 'fix-list'),
   events: (pourId: string) => join('field', 'pours', pourId, 'events'),
   lastWalk: (pourId: string) => join('field', 'pours', pourId, 'last-walk'),
   instruments: (pourId: string) => join('field', 'pours', pourId, 'instruments'),

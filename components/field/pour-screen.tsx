@@ -18,6 +18,7 @@ const ChecksScreen = lazy(async () => ({ default: (await import('./checks-screen
 const MeasurementsScreen = lazy(async () => ({
   default: (await import('./measurements-screen')).MeasurementsScreen,
 }));
+const FixListScreen = lazy(async () => ({ default: (await import('./fix-list-screen')).FixListScreen }));
 const HoldsScreen = lazy(async () => ({ default: (await import('./holds-screen')).HoldsScreen }));
 const PhotosScreen = lazy(async () => ({ default: (await import('./photos-screen')).PhotosScreen }));
 const NonconformanceForm = lazy(async () => ({
@@ -82,6 +83,19 @@ export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute
       </Screen>
     );
   }
+  if (!open.sheet && open.project.role === 'crew') {
+    return (
+      <Message
+        title={open.pour.number}
+        heading="The fix list of this pour"
+        text="It opens where there is a network."
+      >
+        <LeaveLink href={`/pours/${encodeURIComponent(pourId)}`} className={buttonClasses('primary')}>
+          Open the fix list
+        </LeaveLink>
+      </Message>
+    );
+  }
   if (!open.sheet) {
     return (
       <Message
@@ -114,6 +128,8 @@ function PourPart({ open, route }: { open: OpenSheet; route: PourRoute }) {
       return <ChecksScreen open={open} group={route.group} />;
     case 'measurements':
       return <MeasurementsScreen open={open} itemId={route.itemId} />;
+    case 'fix-list':
+      return <FixListScreen open={open} />;
     case 'holds':
       return <HoldsScreen open={open} />;
     case 'photos':

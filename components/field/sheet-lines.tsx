@@ -7,6 +7,7 @@ import { placesMeasured } from '@/lib/inspection/judge-measurements';
 import { checkGroups } from '@/lib/inspection/plan';
 import type { FaceState, MarkKind } from '@/lib/inspection/sheet-types';
 import { fieldPaths } from './field-routes';
+import { fixList } from './fix-list';
 import type { OpenSheet } from './open-sheet';
 import { SheetLine, SheetLines } from './sheet-line';
 import { nonconformanceWords } from './state-tone';
@@ -157,6 +158,7 @@ export function SiteLines({ open }: { open: OpenSheet }) {
   const photosWaiting = sheet.photos.filter((photo) => !photo.stored && !photo.refused).length;
   const refused = sheet.photos.filter((photo) => photo.refused && !photo.stored).length;
   const suspect = sheet.instruments.filter((one) => one.suspect.some((window) => window.to === null)).length;
+  const toFix = fixList(sheet, holds).length;
   const unsigned = (['inspector', 'superintendent'] as const).filter(
     (as) => !sheet.signatures.some((state) => state.stands && state.entry.body.as === as),
   );
@@ -167,6 +169,13 @@ export function SiteLines({ open }: { open: OpenSheet }) {
         tone={holds.length > 0 ? 'hold' : 'met'}
         title="Holds"
         count={holds.length === 0 ? 'none' : String(holds.length)}
+      />
+      <SheetLine
+        href={fieldPaths.fixList(pourId)}
+        tone={toFix > 0 ? 'hold' : 'plain'}
+        title="Fix list"
+        detail="For the crew, in English and Spanish"
+        count={toFix === 0 ? 'empty' : String(toFix)}
       />
       <SheetLine
         href={fieldPaths.photos(pourId)}

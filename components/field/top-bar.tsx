@@ -20,7 +20,7 @@ export function TopBar({
   const { sync, person } = useSnapshot();
   const trouble = sync.refusedEntries > 0 || sync.phase === 'sign-in-needed';
   return (
-    <header className="sticky top-0 z-20 flex min-h-[calc(var(--target)+1px)] items-stretch border-b border-ink bg-sheet pt-[env(safe-area-inset-top)]">
+    <header className="sticky top-0 z-20 flex min-h-[calc(var(--target)+1px)] items-stretch border-b border-ink bg-sheet print:static pt-[env(safe-area-inset-top)]">
       {back && (
         <FieldLink
           href={back.href}

@@ -1,0 +1,109 @@
+import type { FixItem } from './fix-list';
+
+export const fixLanguages = ['en', 'es'] as const;
+export type FixLanguage = (typeof fixLanguages)[number];
+
+interface Words {
+  heading: string;
+  nothing: string;
+  report: string;
+  print: string;
+  share: string;
+  language: string;
+  planned: string;
+  drawing: string;
+  afterwards: string;
+  asTyped: string;
+}
+
+/** The fix list's own words; what people typed stays as they typed it. Spanish from memory of the trade. */
+export const fixListWords: Record<FixLanguage, Words> = {
+  en: {
+    heading: 'Fix list',
+    nothing: 'Nothing to put right.',
+    report: 'Report the correction',
+    print: 'Print',
+    share: 'Share',
+    language: 'English',
+    planned: 'Planned',
+    drawing: 'Drawing',
+    afterwards: 'Report each with a photo. The inspector then looks again.',
+    asTyped: '',
+  },
+  es: {
+    heading: 'Lista de correcciones',
+    nothing: 'No hay nada que corregir.',
+    report: 'Avisar que está corregido',
+    print: 'Imprimir',
+    share: 'Compartir',
+    language: 'Español',
+    planned: 'Previsto',
+    drawing: 'Plano',
+    afterwards: 'Avise de cada una con una foto. Después el inspector vuelve a revisar.',
+    asTyped: 'Lo escrito por las personas queda en su idioma.',
+  },
+};
+
+const decisions: Record<FixLanguage, Record<'rework' | 'repair' | 'reject', string>> = {
+  en: { rework: 'Rework', repair: 'Repair', reject: 'Take out' },
+  es: { rework: 'Rehacer', repair: 'Reparar', reject: 'Retirar' },
+};
+
+/** What one item says, as a line and what stands under it. */
+export function fixItemWords({ what }: FixItem, language: FixLanguage): { title: string; lines: string[] } {
+  const english = language === 'en';
+  switch (what.kind) {
+    case 'cover': {
+      const title = english
+        ? `Cover too ${what.high ? 'large' : 'small'}: accepted ${what.high ? 'to' : 'from'} ${what.accepted}`
+        : `Recubrimiento ${what.high ? 'excesivo' : 'insuficiente'}: se acepta ${what.high ? 'hasta' : 'desde'} ${what.accepted}`;
+      return { title, lines: what.values.map(({ label, value }) => `${label}: ${value}`) };
+    }
+    case 'measurement': {
+      const limits = english
+        ? [what.least && `at least ${what.least}`, what.most && `at most ${what.most}`]
+        : [what.least && `mínimo ${what.least}`, what.most && `máximo ${what.most}`];
+      return {
+        title: `${what.title}: ${limits.filter(Boolean).join(', ')}`,
+        lines: what.values.map((value) => (english ? `Found ${value}` : `Encontrado ${value}`)),
+      };
+    }
+    case 'check':
+      return {
+        title: `${english ? 'Not met' : 'No cumple'}: ${what.question}`,
+        lines: what.note ? [what.note] : [],
+      };
+    case 'nonconformance': {
+      const head = what.decision
+        ? decisions[language][what.decision]
+        : english
+          ? 'Nonconformance'
+          : 'No conformidad';
+      return { title: `${head}: ${what.title}`, lines: what.reason ? [what.reason] : [] };
+    }
+  }
+}
+
+/** The whole list as plain text, to be shared. */
+export function fixListText(
+  items: readonly FixItem[],
+  head: { number: string; title: string; planned: string },
+  language: FixLanguage,
+): string {
+  const words = fixListWords[language];
+  const lines = items.flatMap((item, index) => {
+    const { title, lines: under } = fixItemWords(item, language);
+    return [`${index + 1}. ${title}`, `   ${item.where}`, ...under.map((line) => `   ${line}`)];
+  });
+  return [
+    `${words.heading}: ${head.number} ${head.title}`,
+    head.planned && `${words.planned}: ${head.planned}`,
+    '',
+    ...(lines.length > 0 ? lines : [words.nothing]),
+    '',
+    items.length > 0 && words.afterwards,
+  ]
+    .filter((line) => line !== false)
+    .join('\n')
+    .trim();
+}
