@@ -1,7 +1,7 @@
 'use client';
 
 import { usePathname } from 'next/navigation';
-import { useEffect, useRef, type AnchorHTMLAttributes, type MouseEvent } from 'react';
+import { useEffect, type AnchorHTMLAttributes, type MouseEvent } from 'react';
 import { readRoute, type FieldRoute } from './field-routes';
 
 /** The screen that the address bar names. All of `/field` is one page, so that moving about fetches nothing. */
@@ -42,15 +42,30 @@ export function FieldLink({
   );
 }
 
-/** Moves the focus to the new screen's heading, and to its top, each time the path changes: not on the first screen. */
+/** The path shown last, and whether the last move was back or forward: each screen is a component of its own. */
+let lastPath: string | null = null;
+let movedByBrowser = false;
+if (typeof window !== 'undefined') {
+  window.addEventListener('popstate', () => {
+    movedByBrowser = true;
+  });
+}
+
+/**
+ * Moves the focus to the new screen's heading, and to its top, each time the path changes: not on the first screen, and
+ * going back keeps the place where the browser puts it.
+ */
 export function useScreenFocus(): void {
   const path = usePathname();
-  const last = useRef<string | null>(null);
   useEffect(() => {
-    if (last.current !== null && last.current !== path) {
-      window.scrollTo(0, 0);
-      document.querySelector<HTMLElement>('main h1')?.focus({ preventScroll: true });
-    }
-    last.current = path;
+    const first = lastPath === null;
+    const moved = lastPath !== path;
+    lastPath = path;
+    if (first) return;
+    if (moved && !movedByBrowser) window.scrollTo(0, 0);
+    movedByBrowser = false;
+    // A screen that arrived after its stand-in finds the focus nowhere.
+    if (moved || document.activeElement === document.body)
+      document.querySelector<HTMLElement>('h1')?.focus({ preventScroll: true });
   }, [path]);
 }

@@ -10,6 +10,7 @@ import type { DevicePour, DeviceSnapshot } from '@/lib/device/device-types';
 import { PourRow } from './pour-row';
 import { OthersWaiting } from './others-waiting';
 import { Screen } from './screen';
+import { SignOut } from './sign-out';
 import { useSnapshot } from './use-device';
 import { LeaveLink } from './leave-link';
 
@@ -68,6 +69,7 @@ export function PoursScreen() {
             <LeaveLink href="/account" className={buttonClasses('quiet')}>
               Account
             </LeaveLink>
+            <SignOut />
           </nav>
         </footer>
       </div>
