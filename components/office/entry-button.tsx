@@ -4,8 +4,9 @@ import type { ButtonVariant } from '@/components/ui/button-classes';
 import type { EntryAction } from './entry-action';
 import { ActionDialog } from './action-dialog';
 import { EntryForm } from './entry-form';
+import { postJson } from './post-json';
 
-/** A button that opens the form of one action. */
+/** A button that opens the form of one action on a pour. */
 export function EntryButton({
   pourId,
   seenSeq,
@@ -14,6 +15,7 @@ export function EntryButton({
   about,
 }: {
   pourId: string;
+  /** The head of the pour that this person has before them: what came since, they have not seen. */
   seenSeq: number;
   action: EntryAction;
   variant?: ButtonVariant;
@@ -27,7 +29,13 @@ export function EntryButton({
       title={action.title}
       variant={variant}
     >
-      {(close) => <EntryForm pourId={pourId} seenSeq={seenSeq} action={action} onDone={close} />}
+      {(close) => (
+        <EntryForm
+          send={(type, body) => postJson(`/api/pours/${pourId}/entries`, { type, body, seenSeq })}
+          action={action}
+          onDone={close}
+        />
+      )}
     </ActionDialog>
   );
 }

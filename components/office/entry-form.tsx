@@ -13,7 +13,7 @@ import { Textarea } from '@/components/ui/textarea';
 import { bodies } from '@/lib/inspection/entry-bodies';
 import type { ActionField, ActionValues, EntryAction } from './entry-action';
 import { ProblemNotice } from './problem-notice';
-import { postJson, type Posted } from './post-json';
+import type { Posted } from './post-json';
 
 const startOf = (action: EntryAction): ActionValues =>
   Object.fromEntries(
@@ -50,22 +50,21 @@ const resolverFor =
             ? 'Tick at least one.'
             : field?.kind === 'time'
               ? "Write a day and a time that exist in the project's time zone."
-              : issue.message;
+              : issue.message.startsWith('Invalid input')
+                ? 'Write a number.'
+                : issue.message;
       errors[name] ??= { type: 'schema', message };
     }
     return { values: {}, errors };
   };
 
-/** A small form that records one entry of a pour, judged by the entry's own schema before it goes and on arrival. */
+/** A small form that records one entry, judged by the entry's own schema before it goes and on arrival. */
 export function EntryForm({
-  pourId,
-  seenSeq,
+  send,
   action,
   onDone,
 }: {
-  pourId: string;
-  /** The head of the pour that this person has before them: what came since, they have not seen. */
-  seenSeq: number;
+  send: (type: EntryAction['type'], body: unknown) => Promise<Posted>;
   action: EntryAction;
   onDone: () => void;
 }) {
@@ -82,11 +81,7 @@ export function EntryForm({
 
   const submit = handleSubmit(async (values) => {
     setFailure(null);
-    const answer = await postJson(`/api/pours/${pourId}/entries`, {
-      type: action.type,
-      body: action.toBody(values),
-      seenSeq,
-    });
+    const answer = await send(action.type, action.toBody(values));
     if (answer.ok) {
       onDone();
       router.refresh();

@@ -3,6 +3,7 @@ import { Notice } from '@/components/ui/notice';
 import type { Hold, PourState, Sheet } from '@/lib/inspection/sheet-types';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime, fullTime, timeAway } from './project-time';
+import { CertificateButton } from './certificate-button';
 import { VoidRelease } from './void-release';
 
 /** A release as the register knows it. */
@@ -101,9 +102,20 @@ export function ReleasesPanel({
                       : `Until the start of placing, at the latest ${dayAndTime(release.validUntil, viewer.timeZone)}${begun ? '' : ` (${timeAway(release.validUntil, viewer.now)})`}.`}
                   </p>
                 </div>
-                {mayVoid && !release.voidedAt && (
-                  <VoidRelease pourId={sheet.pourId} releaseId={release.releaseId} number={release.number} />
-                )}
+                <div className="flex flex-wrap content-start gap-2">
+                  <CertificateButton
+                    pourId={sheet.pourId}
+                    releaseId={release.releaseId}
+                    number={release.number}
+                  />
+                  {mayVoid && !release.voidedAt && (
+                    <VoidRelease
+                      pourId={sheet.pourId}
+                      releaseId={release.releaseId}
+                      number={release.number}
+                    />
+                  )}
+                </div>
               </li>
             );
           })}

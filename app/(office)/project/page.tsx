@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { cookies } from 'next/headers';
 import { NoProject } from '@/components/office/no-project';
+import { ProjectEntry } from '@/components/office/project-entry';
 import { PageMain } from '@/components/office/page-main';
 import { chosenProject, PROJECT_COOKIE } from '@/components/office/project-choice';
 import { fullTime } from '@/components/office/project-time';
@@ -10,7 +11,10 @@ import { TitleBlock } from '@/components/ui/title-block';
 import { readProjectPeople } from '@/db/read/project-people';
 import { readProjectRegisters } from '@/db/read/project-registers';
 import { readProjectsOfPerson } from '@/db/read/projects-of-person';
+import { streamHead } from '@/db/stores/entry-store';
 import { formatLength } from '@/lib/concrete/length';
+import type { EntryType } from '@/lib/inspection/entry';
+import { mayRecord } from '@/lib/inspection/entry-access';
 import { roleWords } from '@/lib/inspection/roles';
 import { withAccess } from '@/lib/server/with-access';
 
@@ -25,13 +29,20 @@ export default async function ProjectPage() {
     require('project.read', project.id);
     return {
       project,
-      now,
+      at: {
+        projectId: project.id,
+        authorId: person.id,
+        seenSeq: (await streamHead(tx, project.id, null)).seq,
+        now,
+        timeZone: project.timeZone,
+      },
       people: await readProjectPeople(tx, project.id),
       registers: await readProjectRegisters(tx, project.id),
     };
   });
   if (!found) return <NoProject />;
-  const { project, people, registers, now } = found;
+  const { project, people, registers, at } = found;
+  const may = (type: EntryType) => mayRecord(type, project.role);
   const time = (iso: string) => fullTime(iso, project.timeZone);
   return (
     <PageMain>
@@ -76,7 +87,16 @@ export default async function ProjectPage() {
           }))}
         />
       </SheetFrame>
-      <SheetFrame heading="Instruments" aside="block checks stand in the record">
+      <SheetFrame
+        heading="Instruments"
+        aside={
+          may('instrument-status') ? (
+            <ProjectEntry kind="instrument" at={at} />
+          ) : (
+            'block checks stand in the record'
+          )
+        }
+      >
         <RuledTable
           caption="Instruments"
           captionHidden
@@ -87,6 +107,7 @@ export default async function ProjectPage() {
             { key: 'due', head: 'Calibration due', className: 'whitespace-nowrap' },
             { key: 'u', head: 'U (k = 2), mm', figure: true },
             { key: 'state', head: 'State' },
+            ...(may('block-check') ? [{ key: 'do', head: 'Record' }] : []),
           ]}
           rows={registers.instruments.map((one) => ({
             key: one.id,
@@ -98,15 +119,30 @@ export default async function ProjectPage() {
               u: one.uncertaintyMm === null ? '–' : formatLength(one.uncertaintyMm, 'mm'),
               state: !one.inService
                 ? 'out of service'
-                : one.calibrationDue && one.calibrationDue < now
+                : one.calibrationDue && one.calibrationDue < at.now
                   ? 'calibration is over'
                   : 'in service',
+              do: (
+                <span className="flex flex-wrap">
+                  <ProjectEntry kind="block-check" instrument={one} at={at} variant="quiet" />
+                  <ProjectEntry kind="instrument" instrument={one} at={at} variant="quiet" />
+                </span>
+              ),
             },
           }))}
           empty="No instrument is registered."
         />
       </SheetFrame>
-      <SheetFrame heading="Drawings" aside="a new revision holds the pours made to the old one">
+      <SheetFrame
+        heading="Drawings"
+        aside={
+          may('drawing-received') ? (
+            <ProjectEntry kind="drawing" at={at} />
+          ) : (
+            'a new revision holds the pours made to the old one'
+          )
+        }
+      >
         <RuledTable
           caption="Drawings"
           captionHidden
@@ -122,7 +158,7 @@ export default async function ProjectPage() {
           empty="No drawing has been received."
         />
       </SheetFrame>
-      <SheetFrame heading="Mixes">
+      <SheetFrame heading="Mixes" aside={may('mix-changed') && <ProjectEntry kind="mix" at={at} />}>
         <RuledTable
           caption="Mixes"
           captionHidden
