@@ -12,7 +12,8 @@ import { PhotoQueue } from './photo-queue';
 import { RefusedLine } from './refused-line';
 import { saveBlob } from './save-blob';
 import { Screen } from './screen';
-import { SheetLine, SheetLines } from './sheet-line';
+import { SheetLines } from './sheet-line';
+import { WaitingPour } from './waiting-pour';
 import { StorageLine } from './storage-line';
 import { bytesWords, notSentCount, syncWords } from './sync-words';
 import { useDevice, useSnapshot } from './use-device';
@@ -28,6 +29,7 @@ export function NotSentScreen() {
   const [problem, setProblem] = useState<string | null>(null);
   const [saved, setSaved] = useState<string | null>(null);
   const waiting = pours.filter((pour) => pour.notSent > 0);
+  const queued = photos.filter((photo) => photo.progress !== 'stored');
   const sending = sync.phase === 'sending' || sync.phase === 'fetching';
 
   const attempt = async (what: () => Promise<void>) => {
@@ -67,12 +69,7 @@ export function NotSentScreen() {
             aside={sync.oldestWaitingAt ? `oldest from ${timeAway(sync.oldestWaitingAt, now)}` : undefined}
           >
             {waiting.map((pour) => (
-              <SheetLine
-                key={pour.id}
-                href={fieldPaths.pour(pour.id)}
-                title={`${pour.number} ${pour.title}`}
-                count={`${pour.notSent} not sent`}
-              />
+              <WaitingPour key={pour.id} pour={pour} />
             ))}
             <li className="px-3 py-2 text-label text-pencil">
               {sync.waitingEntries} {sync.waitingEntries === 1 ? 'entry' : 'entries'}, {sync.waitingPhotos}{' '}
@@ -115,7 +112,7 @@ export function NotSentScreen() {
             </ul>
           </section>
         )}
-        {photos.length > 0 && <PhotoQueue photos={photos} />}
+        {queued.length > 0 && <PhotoQueue photos={queued} />}
         <section className="grid gap-2 border border-ink bg-sheet p-3">
           <h2 className="text-heading">As a last resort</h2>
           <p>

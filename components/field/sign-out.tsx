@@ -24,7 +24,7 @@ export function SignOut() {
       const { signOut } = await import('next-auth/react');
       await signOut({ redirect: false });
       await device.signOut?.();
-      window.location.assign('/sign-in?next=/field');
+      window.location.reload();
     } catch {
       setProblem(
         'There is no answer from the server, so the session could not be ended. Try again with a network.',
