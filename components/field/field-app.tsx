@@ -9,10 +9,11 @@ import type { Device } from '@/lib/device/device-types';
 import { DeviceProvider } from './device-context';
 import { FieldLink, useFieldRoute } from './field-router';
 import { fieldPaths } from './field-routes';
-import { PourScreen } from './pour-screen';
 import { PoursScreen } from './pours-screen';
 import { Screen } from './screen';
 
+// The list of pours is what opens first; a pour's screens arrive in pieces of their own, which the worker keeps.
+const PourScreen = lazy(async () => ({ default: (await import('./pour-screen')).PourScreen }));
 const NotSentScreen = lazy(async () => ({ default: (await import('./not-sent-screen')).NotSentScreen }));
 
 let opened: Device | null = null;
@@ -51,7 +52,11 @@ function Screens() {
     case 'pours':
       return <PoursScreen />;
     case 'pour':
-      return <PourScreen key={route.pourId} pourId={route.pourId} route={route.route} />;
+      return (
+        <Suspense fallback={<Opening />}>
+          <PourScreen key={route.pourId} pourId={route.pourId} route={route.route} />
+        </Suspense>
+      );
     case 'not-sent':
       return (
         <Suspense fallback={<Opening />}>

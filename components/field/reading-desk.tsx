@@ -3,12 +3,15 @@
 import { useEffect, useRef, useState } from 'react';
 import { Dialog } from '@/components/ui/dialog';
 import { Button } from '@/components/ui/button';
+import { buttonClasses } from '@/components/ui/button-classes';
 import { withUnit } from '@/lib/concrete/length';
 import type { BodyOf } from '@/lib/inspection/entry';
 import type { FaceState } from '@/lib/inspection/sheet-types';
 import { FaceSection, FaceTable, NEW_SPOT, onTape, WorkingMap } from './face-drawings';
 import { instrumentStanding } from './instrument-words';
 import { JudgedPanel } from './judged-panel';
+import { FieldLink } from './field-router';
+import { onwardFrom } from './onward';
 import { BlockKeys, Keypad } from './keypad';
 import type { FaceOfPlan, OpenSheet } from './open-sheet';
 import { PointReadings } from './point-readings';
@@ -56,6 +59,7 @@ export function ReadingDesk({
     state.points.filter((point) => point.key !== target?.point?.key),
     here,
   );
+  const onward = target === null ? onwardFrom(open, face.id) : null;
   const standingAt = {
     now: new Date(nowMs).toISOString(),
     timeZone: open.project.timeZone,
@@ -138,7 +142,7 @@ export function ReadingDesk({
   };
 
   return (
-    <div className="grid h-full min-h-0 grid-cols-[minmax(0,1fr)] grid-rows-[minmax(9.5rem,1fr)_auto] bg-sheet md:grid-cols-[minmax(0,1fr)_26rem] md:grid-rows-1">
+    <div className="grid h-full min-h-0 grid-cols-[minmax(0,1fr)] grid-rows-[minmax(3.5rem,1fr)_auto] overflow-y-auto bg-sheet md:grid-cols-[minmax(0,1fr)_26rem] md:grid-rows-1 md:overflow-hidden">
       <div ref={drawings} className="min-h-0 overflow-y-auto">
         <WorkingMap
           place={place}
@@ -160,7 +164,8 @@ export function ReadingDesk({
         )}
         <FaceTable place={place} state={state} unit={unit} />
       </div>
-      <div className="flex flex-col justify-end border-ink bg-sheet md:border-l">
+      <div className="flex min-h-0 flex-col border-ink bg-sheet md:overflow-y-auto md:border-l">
+        <div className="flex-1" />
         <ReadingReadout
           target={target}
           presses={presses}
@@ -203,15 +208,21 @@ export function ReadingDesk({
               onPress={press}
               onDelete={() => setPresses((before) => before.slice(0, -1))}
             />
-            <Button
-              variant="primary"
-              wide
-              className="h-15 text-lead"
-              aria-disabled={presses.length === 0 || undefined}
-              onClick={keepTyped}
-            >
-              {next ? `Keep, next ${next.label}` : 'Keep'}
-            </Button>
+            {onward && presses.length === 0 ? (
+              <FieldLink href={onward.href} className={buttonClasses('primary', true, 'h-15 text-lead')}>
+                {onward.words}
+              </FieldLink>
+            ) : (
+              <Button
+                variant="primary"
+                wide
+                className="h-15 text-lead"
+                aria-disabled={presses.length === 0 || undefined}
+                onClick={keepTyped}
+              >
+                {next ? `Keep, next ${next.label}` : 'Keep'}
+              </Button>
+            )}
           </>
         )}
         <div className="pb-[env(safe-area-inset-bottom)]" />

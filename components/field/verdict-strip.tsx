@@ -88,12 +88,12 @@ export function VerdictStrip({
               <span />
             )}
             <Button variant="quiet" wide className="text-label" onClick={onAgain}>
-              Read again
+              <span className="leading-tight">
+                Read again
+                <span className="block text-xs font-medium text-pencil">erases nothing</span>
+              </span>
             </Button>
           </div>
-          <p className="px-3 pb-1.5 text-center font-label text-label font-medium text-pencil">
-            Read again: both stay, and the less favourable governs.
-          </p>
         </div>
       )}
     </div>
