@@ -2,6 +2,7 @@ import { parseLength } from '@/lib/concrete/length';
 import { judgeReading } from '@/lib/concrete/judge-reading';
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import { siteBodies } from '@/lib/inspection/entry-bodies';
+import { limitsFor } from '@/lib/inspection/judge-point';
 import { judgeMeasurement } from '@/lib/inspection/judge-measurements';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { faceOfPlan } from './open-sheet';
@@ -156,7 +157,7 @@ export function amendmentNeedsPhoto(sheet: Sheet, entry: Entry, draft: Amendment
     if (!state || !place || !body.success || state.judged.verdict !== 'not-met') return false;
     const after = judgeReading(
       { mm: body.data.value?.mm ?? null, sectionMm: place.element.thicknessMm },
-      state.requirement,
+      state.requirement && limitsFor(state.requirement, body.data.asFoundBar),
       { uncertaintyMm: null, status: 'good' },
       sheet.plan.decisionRule.kind === 'guarded' && sheet.plan.decisionRule.guardMm === undefined
         ? { kind: 'simple' }

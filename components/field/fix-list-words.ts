@@ -59,6 +59,13 @@ export function fixItemWords({ what }: FixItem, language: FixLanguage): { title:
         : `Recubrimiento ${what.high ? 'excesivo' : 'insuficiente'}: se acepta ${what.high ? 'hasta' : 'desde'} ${what.accepted}`;
       return { title, lines: what.values.map(({ label, value }) => `${label}: ${value}`) };
     }
+    case 'depth':
+      return {
+        title: english
+          ? `Effective depth too small: planned ${what.planned}`
+          : `Canto útil insuficiente: previsto ${what.planned}`,
+        lines: what.values.map(({ label, value }) => `${label}: ${value}`),
+      };
     case 'measurement': {
       const limits = english
         ? [what.least && `at least ${what.least}`, what.most && `at most ${what.most}`]

@@ -12,6 +12,7 @@ export interface FixItem {
   where: string;
   what:
     | { kind: 'cover'; values: { label: string; value: string }[]; accepted: string; high: boolean }
+    | { kind: 'depth'; values: { label: string; value: string }[]; planned: string }
     | { kind: 'measurement'; title: string; values: string[]; least: string | null; most: string | null }
     | { kind: 'check'; question: string; note: string }
     | {
@@ -33,6 +34,11 @@ export function fixList(sheet: Sheet, holds: readonly Hold[]): FixItem[] {
       case 'cover-not-met':
         return item(
           coverFix(sheet, hold),
+          hold.faceId && hold.subjects.length > 1 ? { kind: 'face', id: hold.faceId } : first,
+        );
+      case 'effective-depth':
+        return item(
+          depthFix(sheet, hold),
           hold.faceId && hold.subjects.length > 1 ? { kind: 'face', id: hold.faceId } : first,
         );
       case 'measurement-out':
@@ -83,6 +89,24 @@ function coverFix(sheet: Sheet, hold: Hold): FixItem['what'] | null {
     values: failing.map(({ point, reading }) => ({
       label: point.label,
       value: readingText(bodyShown(reading)),
+    })),
+  };
+}
+
+function depthFix(sheet: Sheet, hold: Hold): FixItem['what'] | null {
+  const low = hold.subjects.flatMap((subject) => {
+    const point = pointOf(sheet, subject.id);
+    const reading = point?.readings.find((one) => one.current && one.depth?.verdict === 'not-met');
+    return point && reading?.depth ? [{ point, reading, depth: reading.depth }] : [];
+  });
+  const planned = low[0]?.reading.requirement?.depth?.plannedMm;
+  if (planned === undefined) return null;
+  return {
+    kind: 'depth',
+    planned: withUnit(planned, sheet.plan.units),
+    values: low.map(({ point, depth }) => ({
+      label: point.label,
+      value: depth.mm === null ? '' : withUnit(depth.mm, sheet.plan.units, planned),
     })),
   };
 }

@@ -8,6 +8,8 @@ export function holdPath(hold: Hold, sheet: Sheet): string {
   const subject = hold.subjects[0];
   switch (hold.kind) {
     case 'cover-not-met':
+    case 'effective-depth':
+    case 'bar-departs':
     case 'readings-missing':
     case 'not-verified':
     case 'recheck-awaited':

@@ -55,6 +55,7 @@ export function HoldsScreen({ open }: { open: OpenSheet }) {
 
 const correctable: readonly Hold['kind'][] = [
   'cover-not-met',
+  'effective-depth',
   'measurement-out',
   'check-not-met',
   'nonconformance-open',
@@ -99,6 +100,7 @@ const wrong: readonly Hold['kind'][] = [
   ...correctable,
   'conflict',
   'superseded-drawing',
+  'bar-departs',
   'manual',
   'update-needed',
 ];

@@ -2,7 +2,7 @@
 
 import { MarkIcon } from '@/components/drawings/mark';
 import { formatLength, withUnit, type LengthUnit } from '@/lib/concrete/length';
-import { markOfReading } from '@/lib/inspection/judge-point';
+import { isOtherBar, limitsFor, markOfReading } from '@/lib/inspection/judge-point';
 import type { Plan } from '@/lib/inspection/plan';
 import type { InstrumentState, ReadingState } from '@/lib/inspection/sheet-types';
 import { RequirementTrail } from './requirement-trail';
@@ -29,6 +29,8 @@ export function JudgedPanel({
 }) {
   const body = bodyShown(reading);
   const { requirement, judged } = reading;
+  const limits = requirement && limitsFor(requirement, body.asFoundBar);
+  const otherBar = requirement !== null && isOtherBar(requirement, body.asFoundBar);
   const mm = body.value?.mm ?? null;
   const uncertainty = instrument?.status?.body.uncertaintyMm ?? null;
   return (
@@ -38,14 +40,20 @@ export function JudgedPanel({
         {readingText(body)}: {verdictWords(judged)}
       </p>
       <p>{judged.reason}</p>
-      {requirement && mm !== null && (
+      {otherBar && (
+        <p className="font-semibold text-watch">
+          Bar {body.asFoundBar} found, {requirement?.barDesignation} planned: judged by the stricter of the
+          two.
+        </p>
+      )}
+      {limits && mm !== null && (
         <table className="w-full border-collapse font-figure text-body">
           <tbody>
-            <Line label="read" value={withUnit(mm, unit, requirement.leastAcceptedMm)} />
-            <Line label="least accepted" value={withUnit(requirement.leastAcceptedMm, unit, mm)} />
-            <Line label="difference" value={withUnit(mm - requirement.leastAcceptedMm, unit, 0)} strong />
-            {requirement.mostAcceptedMm !== null && (
-              <Line label="most accepted" value={withUnit(requirement.mostAcceptedMm, unit, mm)} />
+            <Line label="read" value={withUnit(mm, unit, limits.leastAcceptedMm)} />
+            <Line label="least accepted" value={withUnit(limits.leastAcceptedMm, unit, mm)} />
+            <Line label="difference" value={withUnit(mm - limits.leastAcceptedMm, unit, 0)} strong />
+            {limits.mostAcceptedMm !== null && (
+              <Line label="most accepted" value={withUnit(limits.mostAcceptedMm, unit, mm)} />
             )}
             {uncertainty !== null && (
               <Line label="uncertainty U (k = 2)" value={withUnit(uncertainty, 'mm')} />
@@ -65,6 +73,13 @@ export function JudgedPanel({
             </p>
           ))}
           <RequirementTrail trail={requirement.trail} />
+        </section>
+      )}
+      {reading.depth && requirement?.depth && (
+        <section className="grid gap-1">
+          <h3 className="font-label font-semibold">Effective depth, judged apart from cover</h3>
+          <p>{reading.depth.reason}</p>
+          <RequirementTrail trail={requirement.depth.trail} />
         </section>
       )}
       <p className="text-label text-pencil">

@@ -1,5 +1,6 @@
 import { withUnit } from '@/lib/concrete/length';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
+import { limitsFor } from '@/lib/inspection/judge-point';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { pointOf, subjectWords } from './subject-words';
 import { bodyShown, readingText } from './verdict-words';
@@ -20,7 +21,7 @@ export function nonconformanceDraft(sheet: Sheet, about: SubjectRef): Nonconform
       const point = pointOf(sheet, about.id);
       const failed = point?.governing.find((reading) => reading.judged.verdict === 'not-met');
       if (!point || !failed) return { ...plain, title: `Cover at ${words}`.slice(0, 160) };
-      const limit = failed.requirement;
+      const limit = failed.requirement && limitsFor(failed.requirement, bodyShown(failed).asFoundBar);
       const high = failed.judged.side === 'high' && limit?.mostAcceptedMm != null;
       const accepted = limit
         ? `, accepted ${high ? 'to' : 'from'} ${withUnit(high && limit.mostAcceptedMm !== null ? limit.mostAcceptedMm : limit.leastAcceptedMm, sheet.plan.units)}`

@@ -17,6 +17,9 @@ export function signatureFigures(sheet: Sheet): { label: string; value: string }
   );
   const accepted = failing.filter((reading) => reading.acceptedBy !== null).length;
   const notVerified = [...points, ...spots].filter((point) => point.mark === 'not-verified').length;
+  const shallow = [...points, ...spots].filter((point) =>
+    point.readings.some((reading) => reading.current && reading.depth?.verdict === 'not-met'),
+  ).length;
   const answers = (answer: string) =>
     sheet.checks.filter((check) => check.governing?.body.answer === answer).length;
   const open = sheet.checks.filter((check) => check.governing === null).length;
@@ -36,6 +39,7 @@ export function signatureFigures(sheet: Sheet): { label: string; value: string }
         spots.length > 0 && `${count(spots.length, 'spot reading', 'spot readings')} besides`,
         failing.length === 0 ? 'none not met' : `${failing.length} not met`,
         accepted > 0 && `of which ${accepted} accepted by the engineer`,
+        shallow > 0 && `effective depth low at ${count(shallow, 'point', 'points')}`,
         notVerified > 0 && `${notVerified} not verified`,
       ),
     },

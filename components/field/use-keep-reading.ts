@@ -53,7 +53,10 @@ export function useKeepReading(open: OpenSheet, sound: boolean) {
       setKept({ entryId: entry.id, undoable: true });
       const sheet = device.pour(at.pourId)?.sheet;
       const found = sheet ? findReading({ sheet }, entry.id) : null;
-      if (found) signalVerdict(found.reading.judged.verdict, sound);
+      if (found) {
+        const depthLow = found.reading.depth?.verdict === 'not-met';
+        signalVerdict(depthLow ? 'not-met' : found.reading.judged.verdict, sound);
+      }
       return true;
     } catch (error) {
       const problems = problemsOf(error);

@@ -14,6 +14,8 @@ import type { OpenSheet } from './open-sheet';
 import { markTone } from './state-tone';
 import { bodyShown, marginWords, readingText, verdictWords } from './verdict-words';
 
+const depthWords = { met: 'met', 'not-met': 'not met', 'not-verified': 'not verified' } as const;
+
 /** The verdict of the reading kept last, in mark and word; what can be done where it is not met; undo while it lasts. */
 export function VerdictStrip({
   open,
@@ -68,7 +70,15 @@ export function VerdictStrip({
           </Button>
         )}
       </div>
-      {judged.verdict === 'not-met' && (
+      {reading.depth && (
+        <p className="border-t border-rule px-3 py-1.5 text-label">
+          <b className={reading.depth.verdict === 'not-met' ? 'text-hold' : undefined}>
+            Effective depth: {depthWords[reading.depth.verdict]}
+          </b>{' '}
+          {reading.depth.verdict !== 'met' && reading.depth.reason}
+        </p>
+      )}
+      {(judged.verdict === 'not-met' || reading.depth?.verdict === 'not-met') && (
         <div className="border-t border-rule">
           <div className="grid grid-cols-3">
             <FieldLink

@@ -67,7 +67,7 @@ export const isOtherBar = (requirement: Requirement, asFoundBar: string | null):
   normalised(asFoundBar) !== normalised(requirement.barDesignation);
 
 /** A bar that was not planned is judged by the stricter of the two: the plan keeps which sizes ask for more. */
-function limitsFor(
+export function limitsFor(
   requirement: Requirement,
   asFoundBar: string | null,
 ): Pick<Requirement, 'leastAcceptedMm' | 'mostAcceptedMm'> {
