@@ -4,8 +4,10 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
 import { TextInput } from '@/components/ui/text-input';
+import { holdsInScope } from '@/lib/inspection/holds';
 import { sheetStatement } from '@/lib/inspection/sheet-statement';
 import { roleWords } from '@/lib/inspection/roles';
+import { ElementsField } from './elements-field';
 import { FormProblem } from './form-problem';
 import type { OpenSheet } from './open-sheet';
 import { sha256Hex } from './sha256-hex';
@@ -15,15 +17,28 @@ import { signatureWords } from './signature-words';
 import { useRecord } from './use-record';
 
 /** Signs the sheet as it stands: drawn with a finger, or by typing the name. */
-export function SignForm({ open, as }: { open: OpenSheet; as: 'inspector' | 'superintendent' }) {
+export function SignForm({
+  open,
+  as,
+  elementIds,
+  onElements,
+}: {
+  open: OpenSheet;
+  as: 'inspector' | 'superintendent';
+  /** What is signed for; null: the whole pour. */
+  elementIds: string[] | null;
+  onElements: (elementIds: string[] | null) => void;
+}) {
   const { sheet, pour, person, holds } = open;
   const [strokes, setStrokes] = useState<Strokes>([]);
   const [typing, setTyping] = useState(false);
   const [typed, setTyped] = useState('');
   const [problem, setProblem] = useState<string | null>(null);
   const { busy, problems, record } = useRecord(open);
-  const words = signatureWords({ sheet, pour, name: person.name, as, holds });
-  const others = holds.filter((hold) => hold.kind !== 'signature-missing' && hold.kind !== 'plan-revised');
+  const words = signatureWords({ sheet, pour, name: person.name, as, holds, elementIds });
+  const others = holdsInScope(holds, { elementIds }).filter(
+    (hold) => hold.kind !== 'signature-missing' && hold.kind !== 'plan-revised',
+  );
 
   const sign = async () => {
     setProblem(null);
@@ -33,7 +48,7 @@ export function SignForm({ open, as }: { open: OpenSheet; as: 'inspector' | 'sup
       return setProblem('Sign in the field first, or type your name instead.');
     await record('signature', {
       as,
-      elementIds: null,
+      elementIds,
       words: typing ? `${words} Signed by typing the name: ${typed.trim()}.`.slice(0, 2000) : words,
       strokes: typing ? [] : strokes.map((stroke) => [...stroke]),
       sheetDigest: await sha256Hex(sheetStatement(sheet)),
@@ -49,6 +64,7 @@ export function SignForm({ open, as }: { open: OpenSheet; as: 'inspector' | 'sup
       }}
     >
       <h2 className="text-heading">You sign this, as {roleWords[as].toLowerCase()}</h2>
+      <ElementsField plan={sheet.plan} legend="You sign for" value={elementIds} onChange={onElements} />
       <p className="border-l-4 border-ink pl-3">{words}</p>
       {others.length > 0 && (
         <Notice

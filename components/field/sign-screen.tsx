@@ -1,5 +1,6 @@
 'use client';
 
+import { useState } from 'react';
 import { fieldPaths } from './field-routes';
 import type { OpenSheet } from './open-sheet';
 import { Screen } from './screen';
@@ -12,8 +13,12 @@ export function SignScreen({ open }: { open: OpenSheet }) {
   const { sheet, pour, project, person } = open;
   const { role } = project;
   const as = role === 'inspector' || role === 'superintendent' ? role : null;
-  const own = sheet.signatures.findLast(
+  const [elementIds, setElementIds] = useState<string[] | null>(null);
+  const own = sheet.signatures.filter(
     (state) => state.entry.authorId === person.id && state.setAsideBy === null,
+  );
+  const covered = sheet.plan.elements.every((element) =>
+    own.some(({ entry }) => entry.body.elementIds === null || entry.body.elementIds.includes(element.id)),
   );
   return (
     <Screen
@@ -26,7 +31,7 @@ export function SignScreen({ open }: { open: OpenSheet }) {
         <section className="border border-ink bg-sheet p-3">
           <h2 className="mb-1 text-heading">What the sheet says now</h2>
           <dl>
-            {signatureFigures(sheet).map(({ label, value }) => (
+            {signatureFigures(sheet, elementIds).map(({ label, value }) => (
               <div
                 key={label}
                 className="grid grid-cols-[9rem_1fr] gap-2 border-b border-rule py-1.5 last:border-b-0"
@@ -38,7 +43,9 @@ export function SignScreen({ open }: { open: OpenSheet }) {
           </dl>
         </section>
         <SignatureStanding open={open} />
-        {as && !own && <SignForm open={open} as={as} />}
+        {as && !covered && (
+          <SignForm open={open} as={as} elementIds={elementIds} onElements={setElementIds} />
+        )}
         {!as && (
           <p className="px-1 text-pencil">
             The inspector and the superintendent sign: two people. The engineer decides nonconformances in the

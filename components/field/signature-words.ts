@@ -1,4 +1,5 @@
 import type { DevicePour } from '@/lib/device/device-types';
+import { holdsInScope } from '@/lib/inspection/holds';
 import { placesMeasured } from '@/lib/inspection/judge-measurements';
 import { revisionLetter } from '@/lib/inspection/plan';
 import { roleWords } from '@/lib/inspection/roles';
@@ -7,8 +8,24 @@ import type { Hold, Sheet } from '@/lib/inspection/sheet-types';
 const count = (number: number, one: string, many: string) => `${number} ${number === 1 ? one : many}`;
 const parts = (...list: (string | false)[]) => list.filter(Boolean).join(', ');
 
+/** The sheet of some elements: with what belongs to none of them in particular. */
+function partOf(sheet: Sheet, elementIds: readonly string[]): Sheet {
+  const within = (elementId: string | null) => elementId === null || elementIds.includes(elementId);
+  return {
+    ...sheet,
+    faces: sheet.faces.filter((face) => within(face.elementId)),
+    checks: sheet.checks.filter((check) => within(check.item.elementId)),
+    measurements: sheet.measurements.filter((state) => within(state.item.elementId)),
+    nonconformances: sheet.nonconformances.filter((state) => within(state.entry.body.where.elementId)),
+  };
+}
+
 /** What a signature covers, in figures: one line each, as the person reads it before signing. */
-export function signatureFigures(sheet: Sheet): { label: string; value: string }[] {
+export function signatureFigures(
+  whole: Sheet,
+  elementIds: readonly string[] | null,
+): { label: string; value: string }[] {
+  const sheet = elementIds === null ? whole : partOf(whole, elementIds);
   const points = sheet.faces.flatMap((face) => face.points);
   const spots = sheet.faces.flatMap((face) => face.spots);
   const read = points.filter((point) => point.governing.length > 0);
@@ -87,17 +104,19 @@ export function signatureWords(input: {
   name: string;
   as: 'inspector' | 'superintendent';
   holds: readonly Hold[];
+  /** Null: the whole pour. */
+  elementIds: readonly string[] | null;
 }): string {
-  const { sheet, pour, name, as, holds } = input;
-  const drawings = [
-    ...new Set(sheet.plan.elements.map(({ drawing }) => `${drawing.number} rev ${drawing.revision}`)),
-  ];
+  const { sheet, pour, name, as, elementIds } = input;
+  const elements = sheet.plan.elements.filter((one) => elementIds === null || elementIds.includes(one.id));
+  const holds = holdsInScope(input.holds, { elementIds: elementIds === null ? null : [...elementIds] });
+  const drawings = [...new Set(elements.map(({ drawing }) => `${drawing.number} rev ${drawing.revision}`))];
   const others = holds.filter(
     (hold) => hold.kind !== 'signature-missing' && hold.kind !== 'plan-revised',
   ).length;
   const lines = [
-    `${name}, ${roleWords[as].toLowerCase()}, signs the inspection of pour ${pour.number} ${pour.title} to plan revision ${revisionLetter(sheet.plan.revision)}, drawing ${drawings.join(', ')}.`,
-    ...signatureFigures(sheet).map(({ label, value }) => `${label}: ${value}.`),
+    `${name}, ${roleWords[as].toLowerCase()}, signs the inspection of pour ${pour.number} ${pour.title}${elementIds === null ? '' : `, only ${elements.map((one) => one.mark).join(' and ')},`} to plan revision ${revisionLetter(sheet.plan.revision)}, drawing ${drawings.join(', ')}.`,
+    ...signatureFigures(sheet, elementIds).map(({ label, value }) => `${label}: ${value}.`),
     others === 0
       ? 'No hold stands beside the signatures.'
       : `${count(others, 'hold stands', 'holds stand')} beside the signatures.`,

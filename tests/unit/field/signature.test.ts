@@ -12,7 +12,7 @@ import { holds } from '@/lib/inspection/holds';
 import { foldSheet } from '@/lib/inspection/sheet';
 import { PourStory, smallPlan } from '../../stories/pour-story';
 
-const wordsOf = (story: PourStory) => {
+const wordsOf = (story: PourStory, elementIds: string[] | null = null) => {
   const sheet = foldSheet(smallPlan(), story.recorded);
   return signatureWords({
     sheet,
@@ -20,6 +20,7 @@ const wordsOf = (story: PourStory) => {
     name: 'Imre Kovač',
     as: 'inspector',
     holds: holds(sheet, story.now),
+    elementIds,
   });
 };
 
@@ -46,6 +47,13 @@ describe('the words that are signed', () => {
   test('with everything met no hold stands beside the signatures', () => {
     expect(wordsOf(new PourStory().inspected())).toContain('No hold stands beside the signatures');
   });
+});
+
+test('a signature for some elements says so, and counts only what lies in them', () => {
+  const story = new PourStory();
+  story.reads('A2', 31);
+  expect(wordsOf(story, ['deck'])).toContain('only Quay deck, bay 3, to plan revision A');
+  expect(wordsOf(story, ['another'])).toContain('0 of 0 points read on 0 faces, none not met');
 });
 
 describe('the drawn signature', () => {
