@@ -7,7 +7,7 @@ export function againPath(entry: Entry): string | null {
   if (pourId === null) return null;
   switch (entry.type) {
     case 'reading':
-      return fieldPaths.face(pourId, entry.body.faceId);
+      return fieldPaths.face(pourId, entry.body.faceId, entry.body.pointId ?? undefined);
     case 'answer':
       return fieldPaths.checks(pourId);
     case 'measurement':

@@ -3,7 +3,7 @@ import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 /** Screens of one pour; `part` says which of them a path names. */
 export type PourRoute =
   | { part: 'sheet' }
-  | { part: 'face'; faceId: string }
+  | { part: 'face'; faceId: string; pointKey: string | null }
   | { part: 'checks'; group: string | null }
   | { part: 'measurements'; itemId: string | null }
   | { part: 'holds' }
@@ -54,7 +54,7 @@ function readPourRoute(parts: string[]): PourRoute | null {
     case undefined:
       return { part: 'sheet' };
     case 'faces':
-      return first ? { part: 'face', faceId: first } : { part: 'sheet' };
+      return first ? { part: 'face', faceId: first, pointKey: second ?? null } : { part: 'sheet' };
     case 'checks':
       return { part: 'checks', group: first ?? null };
     case 'measurements':
@@ -104,7 +104,9 @@ export const fieldPaths = {
   pours: '/field',
   notSent: '/field/not-sent',
   pour: (pourId: string) => join('field', 'pours', pourId),
-  face: (pourId: string, faceId: string) => join('field', 'pours', pourId, 'faces', faceId),
+  /** With a point, that point is lit first. */
+  face: (pourId: string, faceId: string, pointKey?: string) =>
+    join('field', 'pours', pourId, 'faces', faceId, ...(pointKey ? [pointKey] : [])),
   checks: (pourId: string, group?: string) =>
     group ? join('field', 'pours', pourId, 'checks', group) : join('field', 'pours', pourId, 'checks'),
   measurements: (pourId: string, itemId?: string) =>

@@ -16,7 +16,7 @@ export function holdPath(hold: Hold, sheet: Sheet): string {
     case 'conflict':
       if (subject?.kind === 'point') {
         const faceId = hold.faceId ?? pointOf(sheet, subject.id)?.faceId;
-        if (faceId) return fieldPaths.face(pourId, faceId);
+        if (faceId) return fieldPaths.face(pourId, faceId, subject.id);
       }
       break;
     case 'last-walk-missing':

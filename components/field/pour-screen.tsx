@@ -123,7 +123,14 @@ function PourPart({ open, route }: { open: OpenSheet; route: PourRoute }) {
     case 'sheet':
       return <PourSheet open={open} />;
     case 'face':
-      return <ReadingScreen key={route.faceId} open={open} faceId={route.faceId} />;
+      return (
+        <ReadingScreen
+          key={`${route.faceId}/${route.pointKey ?? ''}`}
+          open={open}
+          faceId={route.faceId}
+          pointKey={route.pointKey}
+        />
+      );
     case 'checks':
       return <ChecksScreen open={open} group={route.group} />;
     case 'measurements':

@@ -33,10 +33,13 @@ export function ReadingDesk({
   open,
   place,
   state,
+  firstKey,
 }: {
   open: OpenSheet;
   place: FaceOfPlan;
   state: FaceState;
+  /** The point that was asked for; null: the next of the walk. */
+  firstKey: string | null;
 }) {
   const { face } = place;
   const setup = useReadingSettings(open, face);
@@ -44,7 +47,9 @@ export function ReadingDesk({
   const { sync } = useSnapshot();
   const nowMs = useNow();
   const [presses, setPresses] = useState<readonly Press[]>([]);
-  const [chosen, setChosen] = useState<Chosen | null>(null);
+  const [chosen, setChosen] = useState<Chosen | null>(() =>
+    firstKey ? { kind: 'point', key: firstKey } : null,
+  );
   const [from, setFrom] = useState<{ xMm: number; yMm: number; key?: string } | null>(null);
   const [picker, setPicker] = useState<Picker | null>(null);
   const [panel, setPanel] = useState<'how' | 'point' | null>(null);

@@ -14,7 +14,16 @@ import { Dialog } from '@/components/ui/dialog';
 import { pointOf } from './subject-words';
 
 /** Reading cover on one face; those who only read see the drawings and what was read. */
-export function ReadingScreen({ open, faceId }: { open: OpenSheet; faceId: string }) {
+export function ReadingScreen({
+  open,
+  faceId,
+  pointKey,
+}: {
+  open: OpenSheet;
+  faceId: string;
+  /** The point to be lit first; null: the next of the walk. */
+  pointKey: string | null;
+}) {
   const place = faceOfPlan(open.sheet, faceId);
   const state = open.sheet.faces.find((one) => one.faceId === faceId);
   const back = { href: fieldPaths.pour(open.sheet.pourId), words: open.pour.number };
@@ -39,7 +48,7 @@ export function ReadingScreen({ open, faceId }: { open: OpenSheet; faceId: strin
   }
   return (
     <Screen title={title} aside={aside} back={back} tight>
-      <ReadingDesk open={open} place={place} state={state} />
+      <ReadingDesk open={open} place={place} state={state} firstKey={pointKey} />
     </Screen>
   );
 }

@@ -8,6 +8,9 @@ test('a path that a screen links to is read as that screen', () => {
   expect(readRoute(fieldPaths.face(pourId, 'soffit:1'))).toMatchObject({
     route: { part: 'face', faceId: 'soffit:1' },
   });
+  expect(readRoute(fieldPaths.face(pourId, 'soffit', 'soffit.A1'))).toMatchObject({
+    route: { part: 'face', pointKey: 'soffit.A1' },
+  });
   expect(readRoute(fieldPaths.checks(pourId, 'steel'))).toMatchObject({
     route: { part: 'checks', group: 'steel' },
   });
