@@ -1,7 +1,7 @@
 import next from 'eslint-config-next/core-web-vitals';
 import typescript from 'eslint-config-next/typescript';
 
-export default [
+const config = [
   { ignores: ['.next*/**', '.data/**', 'node_modules/**', 'public/**', 'next-env.d.ts', 'test-results/**'] },
   ...next,
   ...typescript,
@@ -19,8 +19,14 @@ export default [
     files: ['lib/concrete/**', 'lib/inspection/**'],
     rules: {
       'no-restricted-globals': ['error', 'window', 'document', 'fetch', 'process', 'crypto'],
-      'no-restricted-properties': ['error', { object: 'Date', property: 'now' }, { object: 'Math', property: 'random' }],
+      'no-restricted-properties': [
+        'error',
+        { object: 'Date', property: 'now' },
+        { object: 'Math', property: 'random' },
+      ],
       'no-restricted-syntax': ['error', "NewExpression[callee.name='Date'][arguments.length=0]"],
     },
   },
 ];
+
+export default config;

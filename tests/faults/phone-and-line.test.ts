@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import type { RunningDevice } from '@/lib/device/create-device';
 import type { Entry } from '@/lib/inspection/entry';
 import { uuid } from '@/tests/stories/pour-story';
-import { violations, type History, type OnPhone } from './world/check-history';
+import { violations, type History } from './world/check-history';
+import { allCalm, hand, onPhone, type Hand } from './world/hand';
 import { FaultyLine } from './world/faulty-line';
 import { contentOf, type ModelFlaws, type ModelPerson } from './world/model-server';
 import { NaivePhone } from './world/naive-phone';
@@ -22,12 +22,6 @@ import { pick, seeded, seeds } from './world/seeded';
 
 const second: ModelPerson = { ...superintendent, role: 'inspector' };
 
-interface Hand {
-  phone: Phone;
-  line: FaultyLine;
-  tabs: RunningDevice[];
-}
-
 interface Run {
   site: Site;
   history: History;
@@ -41,22 +35,17 @@ async function run(seed: number, flaws: ModelFlaws = {}): Promise<Run> {
   const place = site(flaws);
   const { server, clock } = place;
   const history: History = { recorded: new Map() };
-  const hands = [inspector, second].map((person): Hand => {
-    const line = new FaultyLine((address, init) => server.handle(address, init, person), random, clock);
-    return { phone: new Phone(clock, line.line, random), line, tabs: [] };
-  });
-  for (const hand of hands) {
-    hand.line.calm = true;
-    hand.tabs.push(await hand.phone.tab());
-    hand.line.calm = false;
+  const hands: Hand[] = [];
+  for (const person of [inspector, second]) {
+    hands.push(await hand((address, init) => server.handle(address, init, person), random, clock));
   }
-  const noted = (hand: Hand, entry: Entry, poison = false) =>
-    history.recorded.set(entry.id, { content: contentOf(entry), phone: hand.phone.name, poison });
+  const noted = (by: Hand, entry: Entry, poison = false) =>
+    history.recorded.set(entry.id, { content: contentOf(entry), phone: by.phone.name, poison });
 
   for (let step = 0; step < 60; step += 1) {
-    const hand = hands[Math.floor(random() * hands.length)] ?? hands[0];
-    const tab = hand?.tabs[Math.floor(random() * hand.tabs.length)];
-    if (!hand || !tab) throw new Error('nobody there');
+    const who = hands[Math.floor(random() * hands.length)] ?? hands[0];
+    const tab = who?.tabs[Math.floor(random() * who.tabs.length)];
+    if (!who || !tab) throw new Error('nobody there');
     const what = pick(random, [
       [20, 'read'],
       [2, 'poison'],
@@ -71,14 +60,14 @@ async function run(seed: number, flaws: ModelFlaws = {}): Promise<Run> {
     const label = ['A1', 'A2', 'A3', 'B1', 'B2'][Math.floor(random() * 5)] ?? 'A1';
     switch (what) {
       case 'read':
-        noted(hand, await tab.record(at, 'reading', reading(label, Math.round(30 + random() * 30))));
+        noted(who, await tab.record(at, 'reading', reading(label, Math.round(30 + random() * 30))));
         break;
       case 'poison':
-        noted(hand, await tab.record(at, 'note', note(`poison ${step}`)), true);
+        noted(who, await tab.record(at, 'note', note(`poison ${step}`)), true);
         break;
       case 'photo':
         noted(
-          hand,
+          who,
           await tab.addPhoto(at, jpeg(step), {
             about: { kind: 'pour', id: pourId },
             shot: 'wide',
@@ -96,16 +85,16 @@ async function run(seed: number, flaws: ModelFlaws = {}): Promise<Run> {
         // In the middle of a round, when one is under way.
         const syncing = tab.syncNow();
         if (random() < 0.5) await syncing;
-        await hand.phone.kill();
+        await who.phone.kill();
         await syncing;
-        hand.tabs = [await hand.phone.tab()];
+        who.tabs = [await who.phone.tab()];
         break;
       }
       case 'another tab':
-        if (hand.tabs.length < 3) hand.tabs.push(await hand.phone.tab());
+        if (who.tabs.length < 3) who.tabs.push(await who.phone.tab());
         break;
       case 'late':
-        await hand.line.deliverLate();
+        await who.line.deliverLate();
         break;
       case 'time':
         clock.advance(Math.floor(random() * 120_000));
@@ -113,34 +102,15 @@ async function run(seed: number, flaws: ModelFlaws = {}): Promise<Run> {
     }
   }
 
-  for (const hand of hands) hand.line.calm = true;
-  clock.advance(20 * 60_000);
-  for (const hand of hands) {
-    await hand.line.deliverLate();
-    for (let turn = 0; turn < 3; turn += 1) for (const tab of hand.tabs) await tab.syncNow();
-  }
+  await allCalm(hands, clock);
   const found = violations({
     history,
     server: server.entries,
     phones: await Promise.all(hands.map(onPhone)),
     secondDevice: await fetchedAfresh(place, inspector),
   });
-  for (const hand of hands) await hand.phone.kill();
+  for (const one of hands) await one.phone.kill();
   return { site: place, history, hands, found };
-}
-
-/** What a phone shows as not sent, as its own export says it. */
-async function onPhone(hand: Hand): Promise<OnPhone> {
-  const blob = await hand.tabs[0]?.exportUnsent();
-  const file = JSON.parse((await blob?.text()) ?? '{}') as {
-    entries: { id: string }[];
-    refused: { envelope: { id: string }; sentence: string }[];
-  };
-  return {
-    name: hand.phone.name,
-    waiting: file.entries.map((entry) => entry.id),
-    refused: file.refused.map(({ envelope, sentence }) => ({ id: envelope.id, sentence })),
-  };
 }
 
 async function fetchedAfresh({ server, clock }: Site, person: ModelPerson): Promise<string[]> {
@@ -162,7 +132,7 @@ describe('two phones on a line that does its worst', () => {
     { timeout: 60_000 },
     async (seed) => {
       const { found, history, site: place, hands } = await run(seed);
-      const log = hands.map((hand) => hand.line.log.join('\n')).join('\n--\n');
+      const log = hands.map((one) => one.line.log.join('\n')).join('\n--\n');
       expect(found, `FAULT_SEED=${seed}\n${log}`).toEqual([]);
       expect(history.recorded.size).toBeGreaterThan(5);
       // Every stored photo has the digest that was recorded.

@@ -1,0 +1,45 @@
+import type { RunningDevice } from '@/lib/device/create-device';
+import type { OnPhone } from './check-history';
+import { FaultyLine } from './faulty-line';
+import { Phone, type Clock, type Line } from './phone';
+
+/** One person's phone with its tabs, and the line that it is on. */
+export interface Hand {
+  phone: Phone;
+  line: FaultyLine;
+  tabs: RunningDevice[];
+}
+
+/** A phone that was online once, and from now on is at the mercy of its line. */
+export async function hand(straight: Line, random: () => number, clock: Clock): Promise<Hand> {
+  const line = new FaultyLine(straight, random, clock);
+  const phone = new Phone(clock, line.line, random);
+  line.calm = true;
+  const tabs = [await phone.tab()];
+  line.calm = false;
+  return { phone, line, tabs };
+}
+
+/** The line is good again, waits are over, and everybody sends what they have. */
+export async function allCalm(hands: readonly Hand[], clock: Clock): Promise<void> {
+  for (const one of hands) one.line.calm = true;
+  clock.advance(20 * 60_000);
+  for (const one of hands) {
+    await one.line.deliverLate();
+    for (let turn = 0; turn < 3; turn += 1) for (const tab of one.tabs) await tab.syncNow();
+  }
+}
+
+/** What a phone shows as not sent, as its own export says it. */
+export async function onPhone(one: Hand): Promise<OnPhone> {
+  const blob = await one.tabs[0]?.exportUnsent();
+  const file = JSON.parse((await blob?.text()) ?? '{}') as {
+    entries: { id: string }[];
+    refused: { envelope: { id: string }; sentence: string }[];
+  };
+  return {
+    name: one.phone.name,
+    waiting: file.entries.map((entry) => entry.id),
+    refused: file.refused.map(({ envelope, sentence }) => ({ id: envelope.id, sentence })),
+  };
+}
