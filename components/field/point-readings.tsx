@@ -1,7 +1,9 @@
 'use client';
 
 import { MarkIcon } from '@/components/drawings/mark';
+import { buttonClasses } from '@/components/ui/button-classes';
 import { classNames } from '@/components/ui/class-names';
+import { mayRecord } from '@/lib/inspection/entry-access';
 import { markOfReading } from '@/lib/inspection/judge-point';
 import type { PointState } from '@/lib/inspection/sheet-types';
 import { FieldLink } from './field-router';
@@ -46,5 +48,36 @@ export function PointReadings({ open, point }: { open: OpenSheet; point: PointSt
         );
       })}
     </ul>
+  );
+}
+
+/** What can be done about a point: show it, raise it, or report that it was put right. */
+export function PointActions({ open, point }: { open: OpenSheet; point: PointState }) {
+  const about = { kind: 'point', id: point.key } as const;
+  const { pourId } = open.sheet;
+  const { role } = open.project;
+  const failing = point.governing.some((reading) => reading.judged.verdict === 'not-met');
+  const actions = [
+    { may: mayRecord('photo', role), words: 'Photo', href: fieldPaths.photos(pourId, about) },
+    {
+      may: failing && mayRecord('nonconformance', role),
+      words: 'Nonconformance',
+      href: fieldPaths.nonconformance(pourId, about),
+    },
+    {
+      may: failing && mayRecord('correction', role),
+      words: 'Report the correction',
+      href: fieldPaths.correction(pourId, about),
+    },
+  ].filter((action) => action.may);
+  if (actions.length === 0) return null;
+  return (
+    <nav aria-label={`About ${point.label}`} className="mt-3 flex flex-wrap gap-2">
+      {actions.map(({ words, href }) => (
+        <FieldLink key={words} href={href} className={buttonClasses('secondary')}>
+          {words}
+        </FieldLink>
+      ))}
+    </nav>
   );
 }

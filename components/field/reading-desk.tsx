@@ -14,7 +14,7 @@ import { FieldLink } from './field-router';
 import { onwardFrom } from './onward';
 import { BlockKeys, Keypad } from './keypad';
 import type { FaceOfPlan, OpenSheet } from './open-sheet';
-import { PointReadings } from './point-readings';
+import { PointActions, PointReadings } from './point-readings';
 import { pressed, readPresses, type Press } from './reading-keys';
 import { ReadingContextBar, type Picker } from './reading-context-bar';
 import { ReadingPicker } from './reading-pickers';
@@ -267,7 +267,12 @@ export function ReadingDesk({
         onClose={() => setPanel(null)}
         closeOutside
       >
-        {target?.point && <PointReadings open={open} point={target.point} />}
+        {target?.point && (
+          <>
+            <PointReadings open={open} point={target.point} />
+            <PointActions open={open} point={target.point} />
+          </>
+        )}
         {target?.point?.point?.reason && (
           <p className="mt-3 text-pencil">Chosen: {target.point.point.reason}.</p>
         )}
