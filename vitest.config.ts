@@ -16,6 +16,8 @@ export default defineConfig({
           name: 'integration',
           include: ['tests/integration/**/*.test.ts'],
           globalSetup: ['tests/integration/global-setup.ts'],
+          // They import folders by name, which Node alone does not resolve.
+          server: { deps: { inline: ['mailparser', 'smtp-server'] } },
           testTimeout: 30_000,
           hookTimeout: 60_000,
           maxWorkers: 2,

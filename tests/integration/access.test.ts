@@ -4,11 +4,15 @@ import path from 'node:path';
 import { v7 as uuid } from 'uuid';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { access, allowed, type Action } from '@/lib/server/access';
+import { mayRecord } from '@/lib/inspection/entry-access';
 import { roles, type Role } from '@/lib/inspection/roles';
+import { startLocalServices } from './local-services';
+import { announce, photograph, send } from './photo-routes';
 import { planPour, pointsOf, pushKept, receiptOf, registerGauge, push, outcomesOf } from './record-routes';
+import { runJobs } from './run-jobs';
 import { deckPlan, deckPour, PASSWORD, openWorld, type CallOptions, type TestPerson } from './world';
 
-const world = openWorld();
+const world = openWorld(startLocalServices);
 
 /** What the rows below ask about: one pour with something in it to be asked for. */
 interface Ground {
@@ -17,6 +21,10 @@ interface Ground {
   nonconformanceId: string;
   releaseId: string;
   signatures: Partial<Record<Role, string>>;
+  /** A photograph that is stored. */
+  photoId: string;
+  /** Photographs announced and not sent yet, by the role of who took them: nobody else sends them. */
+  waitingPhotos: Partial<Record<Role, string>>;
 }
 let ground: Ground;
 
@@ -26,6 +34,11 @@ type Row = (ground: Ground, role: Role, person: TestPerson) => CallOptions;
 const onPour =
   (body?: unknown): Row =>
   (g) => ({ params: { pourId: g.pourId }, ...(body === undefined ? {} : { body }) });
+
+const onOwnPhoto: Row = (g, role) => ({
+  params: { photoId: g.waitingPhotos[role] ?? g.waitingPhotos.inspector ?? '' },
+  body: {},
+});
 
 /** One valid request for every route: a route without a row fails the test. */
 const rows: Record<string, Row> = {
@@ -72,7 +85,13 @@ const rows: Record<string, Row> = {
     params: { pourId: g.pourId, releaseId: g.releaseId },
     body: { reason: 'Rain is coming' },
   }),
+  'GET pours/[pourId]/releases/[releaseId]/certificate': (g) => ({
+    params: { pourId: g.pourId, releaseId: g.releaseId },
+  }),
   'GET pours/[pourId]/live': onPour(),
+  'GET photos/[photoId]/address': (g) => ({ params: { photoId: g.photoId } }),
+  'POST photos/[photoId]/upload-address': onOwnPhoto,
+  'POST photos/[photoId]/uploaded': onOwnPhoto,
   'POST signatures/[signatureId]/confirm': (g, role) => ({
     params: { signatureId: g.signatures[role] ?? g.signatures.inspector ?? '' },
     body: { password: PASSWORD },
@@ -132,23 +151,34 @@ beforeAll(async () => {
     receiptOf(outcomesOf(await push(w, device, [entry]))[0]);
     return entry.id;
   };
+  // So that a refusal of crew is about the role, and not about the pour being none of theirs.
+  await w
+    .owner('assignments')
+    .insert({ project_id: w.projectId, pour_id: pourId, person_id: w.team.crew.id });
+  const seen = await announce(w, phone, await photograph());
+  await send(w, w.team.inspector, seen);
+  await runJobs(w);
+  const waitingPhotos: Ground['waitingPhotos'] = {};
+  for (const role of roles.filter((one) => mayRecord('photo', one))) {
+    const taken = await announce(w, w.device(w.team[role], pourId), await photograph());
+    waitingPhotos[role] = taken.photoId;
+  }
   ground = {
     pourId,
     point: points[0]!,
     nonconformanceId: nonconformance.id,
     signatures: { inspector: await sign('inspector'), superintendent: await sign('superintendent') },
     releaseId: await writeRelease(w.projectId, pourId),
+    photoId: seen.photoId,
+    waitingPhotos,
   };
-  // So that a refusal of crew is about the role, and not about the pour being none of theirs.
-  await w
-    .owner('assignments')
-    .insert({ project_id: w.projectId, pour_id: pourId, person_id: w.team.crew.id });
 });
 
 /** A release put on record as the server does, without what would have to be inspected before. */
 async function writeRelease(projectId: string, pourId: string): Promise<string> {
   const { OpenRecord } = await import('@/lib/server/open-record');
   const { enterProject } = await import('@/db/stores/session-store');
+  const { insertRelease } = await import('@/db/stores/release-store');
   const { database } = await import('@/db/connection');
   return database().transaction(async (tx) => {
     await enterProject(tx, projectId);
@@ -156,8 +186,10 @@ async function writeRelease(projectId: string, pourId: string): Promise<string> 
     const author = { id: world().team.superintendent.id, role: 'superintendent' } as const;
     const record = await OpenRecord.open(tx, projectId, author, now);
     await record.load([pourId]);
+    const number = record.nextReleaseNumber();
+    const validUntil = new Date(Date.now() + 3_600_000).toISOString();
     const entry = record.write(pourId, 'release', {
-      number: record.nextReleaseNumber(),
+      number,
       scope: { elementIds: null, limits: '' },
       sheetDigest: 'a'.repeat(64),
       planRevision: 1,
@@ -167,11 +199,13 @@ async function writeRelease(projectId: string, pourId: string): Promise<string> 
       dispositionIds: [],
       readings: 0,
       conditions: [],
-      validUntil: new Date(Date.now() + 3_600_000).toISOString(),
+      validUntil,
       headSeq: 1,
       headHash: null,
     });
     await record.close();
+    const row = { projectId, number, entryId: entry.id, pourId, token: uuid(), releasedBy: author.id };
+    await insertRelease(tx, { ...row, releasedAt: now, validUntil });
     return entry.id;
   });
 }

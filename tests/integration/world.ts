@@ -4,9 +4,11 @@ import { afterAll, beforeAll } from 'vitest';
 import type { EntryEnvelope } from '@/lib/inspection/entry';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import { roles, type Role } from '@/lib/inspection/roles';
+import { testSecrets } from '../../scripts/setup/test-cluster.mjs';
 import { createTestDatabase, type TestDatabase } from './test-database';
 
 export const PASSWORD = 'a long enough password';
+export const APP_ORIGIN = 'http://localhost:3000';
 
 export interface TestPerson {
   id: string;
@@ -54,20 +56,22 @@ export class World {
     readonly owner: Knex,
   ) {}
 
-  static async open(): Promise<World> {
+  /** @param env where services run that the tests of this file use; the others answer nothing */
+  static async open(env: Record<string, string> = {}): Promise<World> {
     const database = await createTestDatabase();
     Object.assign(process.env, {
-      APP_URL: 'http://localhost:3000',
+      APP_URL: APP_ORIGIN,
       DATABASE_URL: database.appUrl,
-      NEXTAUTH_SECRET: 'a-secret-for-tests-only',
+      NEXTAUTH_SECRET: testSecrets.NEXTAUTH_SECRET,
       S3_ENDPOINT: 'http://127.0.0.1:9',
       S3_REGION: 'local',
       S3_BUCKET: 'photos',
-      S3_ACCESS_KEY: 'tests-only',
-      S3_SECRET_KEY: 'tests-only-secret',
+      S3_ACCESS_KEY: testSecrets.S3_ACCESS_KEY,
+      S3_SECRET_KEY: testSecrets.S3_SECRET_KEY,
       SMTP_URL: 'smtp://127.0.0.1:9',
       MAIL_FROM: 'Cagewright <mail@example.test>',
       LOG_LEVEL: process.env.LOG_LEVEL ?? 'fatal',
+      ...env,
     });
     const owner = knexFactory({ client: 'pg', connection: database.ownerUrl, pool: { min: 0, max: 4 } });
     const world = new World(database, owner);
@@ -125,10 +129,10 @@ export class World {
     handler: Handler,
     { as, params, query, body, headers, method }: CallOptions = {},
   ): Promise<Answer> {
-    const request = new Request(`http://localhost:3000/api/test${query ?? ''}`, {
+    const request = new Request(`${APP_ORIGIN}/api/test${query ?? ''}`, {
       method: method ?? (body === undefined ? 'GET' : 'POST'),
       headers: {
-        origin: 'http://localhost:3000',
+        origin: APP_ORIGIN,
         'content-type': 'application/json',
         ...(as ? { cookie: as.cookie } : {}),
         ...headers,
@@ -149,14 +153,22 @@ export class World {
   }
 }
 
-/** Opens a world before the tests of a file and drops it afterwards. */
-export function openWorld(): () => World {
+/**
+ * Opens a world before the tests of a file and drops it afterwards.
+ * @param start starts the services that the file uses; they are stopped afterwards
+ */
+export function openWorld(
+  start?: () => Promise<{ env: Record<string, string>; stop(): Promise<void> }>,
+): () => World {
   let world: World | undefined;
+  let services: Awaited<ReturnType<NonNullable<typeof start>>> | undefined;
   beforeAll(async () => {
-    world = await World.open();
+    services = await start?.();
+    world = await World.open(services?.env);
   });
   afterAll(async () => {
     await world?.close();
+    await services?.stop();
   });
   return () => {
     if (!world) throw new Error('The world is not open yet.');

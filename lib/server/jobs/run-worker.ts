@@ -9,6 +9,7 @@ import { sendEventMail } from '../mail/send-event-mail';
 import { writeCertificate } from '../pdf/write-certificate';
 import { verifyPhoto } from '../photos/verify-photo';
 import { expireReleases } from '../void-releases';
+import { queueLog } from './queue-log';
 
 const mailPayload = z.object({
   kind: z.enum(['hold', 'disposition-asked', 'decided', 'released', 'void']),
@@ -82,6 +83,7 @@ export async function runWorker(): Promise<void> {
     concurrency: 2,
     pollInterval: 2000,
     taskList: tasks,
+    logger: queueLog,
     parsedCronItems: parseCronItems([{ task: 'expire-releases', match: '*/2 * * * *' }]),
   });
   logger.info({ event: 'worker started' });
