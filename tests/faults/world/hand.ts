@@ -1,7 +1,7 @@
 import type { RunningDevice } from '@/lib/device/create-device';
 import type { OnPhone } from './check-history';
 import { FaultyLine } from './faulty-line';
-import { Phone, type Clock, type Line } from './phone';
+import { Phone, until, type Clock, type Line } from './phone';
 
 /** One person's phone with its tabs, and the line that it is on. */
 export interface Hand {
@@ -10,14 +10,24 @@ export interface Hand {
   tabs: RunningDevice[];
 }
 
-/** A phone that was online once, and from now on is at the mercy of its line. */
-export async function hand(straight: Line, random: () => number, clock: Clock): Promise<Hand> {
+/**
+ * A phone that was online once, and from now on is at the mercy of its line.
+ * @param pourId a pour to keep on it, where it does not keep it by itself
+ */
+export async function hand(
+  straight: Line,
+  random: () => number,
+  clock: Clock,
+  pourId?: string,
+): Promise<Hand> {
   const line = new FaultyLine(straight, random, clock);
   const phone = new Phone(clock, line.line, random);
   line.calm = true;
-  const tabs = [await phone.tab()];
+  const tab = await phone.tab();
+  if (pourId) await tab.keepPour(pourId);
+  await tab.syncNow();
   line.calm = false;
-  return { phone, line, tabs };
+  return { phone, line, tabs: [tab] };
 }
 
 /** The line is good again, waits are over, and everybody sends what they have. */
@@ -42,4 +52,16 @@ export async function onPhone(one: Hand): Promise<OnPhone> {
     waiting: file.entries.map((entry) => entry.id),
     refused: file.refused.map(({ envelope, sentence }) => ({ id: envelope.id, sentence })),
   };
+}
+
+/** The ids of a pour's entries as a phone that was never there before gets them. */
+export async function fetchedAfresh(line: Line, clock: Clock, pourId: string): Promise<string[]> {
+  const phone = new Phone(clock, line);
+  const tab = await phone.tab();
+  await tab.keepPour(pourId);
+  await tab.syncNow();
+  await until(() => Boolean(tab.pour(pourId)?.sheet), 'the pour is open');
+  const entries = tab.pour(pourId)?.sheet?.entries ?? [];
+  await phone.kill();
+  return entries.filter((entry) => entry.pourId === pourId).map((entry) => entry.id);
 }

@@ -21,10 +21,23 @@ export function pick<T>(random: () => number, choices: readonly (readonly [weigh
   return last[1];
 }
 
-/** The seeds of this run: a few fixed ones, or `FAULT_SEEDS=200` for as many, or `FAULT_SEED=17` for that one. */
+/** Any one of them. */
+export function chance<T>(random: () => number, of: readonly T[]): T {
+  const one = of[Math.floor(random() * of.length)];
+  if (one === undefined) throw new Error('nothing to choose from');
+  return one;
+}
+
+/** Everything that there is to try, and not only what fits between two commits. */
+export const everything = process.env.FAULTS === 'all';
+
+/**
+ * The seeds of this run: a few fixed ones, ten times as many with `FAULTS=all`, `FAULT_SEEDS=200` for as many as that,
+ * or `FAULT_SEED=17` for that one.
+ */
 export function seeds(usual: number): number[] {
   const one = Number(process.env.FAULT_SEED);
   if (Number.isInteger(one) && one > 0) return [one];
-  const count = Number(process.env.FAULT_SEEDS) || usual;
+  const count = Number(process.env.FAULT_SEEDS) || (everything ? usual * 10 : usual);
   return Array.from({ length: count }, (_, index) => index + 1);
 }
