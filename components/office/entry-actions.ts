@@ -1,3 +1,4 @@
+import { recordedBy } from '@/lib/inspection/entry-access';
 import { siteEventKinds, type SubjectRef } from '@/lib/inspection/entry-bodies';
 import type { Plan } from '@/lib/inspection/plan';
 import { roleWords, type Role } from '@/lib/inspection/roles';
@@ -5,7 +6,8 @@ import type { Hold } from '@/lib/inspection/sheet-types';
 import { idsIn, textIn, type ActionField, type ActionValues, type EntryAction } from './entry-action';
 import { instantFromField, localFieldText } from './project-time';
 
-const clears: Role[] = ['inspector', 'superintendent', 'engineer', 'crew', 'coordinator'];
+/** Only who can lift a hold can be named as the one who clears it. */
+const clears: readonly Role[] = recordedBy['hold-lifted'];
 
 const elementOptions = (plan: Plan) =>
   plan.elements.map((element) => ({ value: element.id, label: `${element.mark}, ${element.location}` }));

@@ -1,6 +1,8 @@
 import { isAmendable } from './amendments';
+import { mayRecord } from './entry-access';
 import { siteBodies, type SubjectRef } from './entry-bodies';
 import type { Entry } from './entry';
+import { roleWords, type Role } from './roles';
 import type { Sheet } from './sheet-types';
 
 export interface Refusal {
@@ -79,14 +81,22 @@ export function admitEntry(entry: Entry, sheet: Sheet): Refusal | null {
       return sheet.conditions.some((state) => state.condition.id === entry.body.conditionId)
         ? null
         : absent('The condition', 'conditionId');
+    case 'hold':
+      return mayRecord('hold-lifted', entry.body.clearedBy)
+        ? null
+        : {
+            code: 'invalid',
+            sentence: `The ${roleWords[entry.body.clearedBy].toLowerCase()} cannot lift a hold. Name somebody who can.`,
+            field: 'clearedBy',
+          };
     case 'hold-lifted': {
-      const state = sheet.manualHolds.find((one) => one.entry.id === entry.body.holdId);
-      if (!state) return absent('The hold', 'holdId');
-      return state.entry.body.clearedBy === entry.authorRole
+      const lifter = lifterOf(entry.body.holdId, sheet);
+      if (!lifter) return absent('The hold', 'holdId');
+      return lifter === entry.authorRole
         ? null
         : {
             code: 'not-allowed',
-            sentence: `Only the ${state.entry.body.clearedBy} lifts this hold.`,
+            sentence: `Only the ${roleWords[lifter].toLowerCase()} lifts this hold.`,
             field: 'holdId',
           };
     }
@@ -101,6 +111,13 @@ export function admitEntry(entry: Entry, sheet: Sheet): Refusal | null {
     default:
       return null;
   }
+}
+
+/** Who lifts a hold that was placed by hand, or that a verbal instruction brings; null: there is no such hold. */
+function lifterOf(holdId: string, sheet: Sheet): Role | null {
+  const placed = sheet.manualHolds.find((one) => one.entry.id === holdId);
+  if (placed) return placed.entry.body.clearedBy;
+  return sheet.verbalInstructions.some((one) => one.entry.id === holdId) ? 'engineer' : null;
 }
 
 const exists = (sheet: Sheet, id: string) => sheet.entries.some((entry) => entry.id === id);

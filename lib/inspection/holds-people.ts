@@ -48,8 +48,8 @@ export function decisionHolds(sheet: Sheet, now: string): Hold[] {
         }),
       ),
     ...sheet.verbalInstructions
-      .filter((entry) => !entry.body.signedBy)
-      .map((entry) =>
+      .filter(({ entry, confirmed }) => !entry.body.signedBy && confirmed === null)
+      .map(({ entry }) =>
         hold({
           id: `verbal-instruction:${entry.id}`,
           kind: 'verbal-instruction',
@@ -57,7 +57,7 @@ export function decisionHolds(sheet: Sheet, now: string): Hold[] {
           detail: `Given by ${entry.body.from}.`,
           since: entry.recordedAt,
           clearedBy: 'engineer',
-          need: 'Have it confirmed in writing and signed.',
+          need: 'Confirm it in writing and lift the hold, naming the paper that is signed.',
           subjects: [{ kind: 'entry', id: entry.id }],
         }),
       ),

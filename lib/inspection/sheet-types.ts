@@ -163,7 +163,11 @@ export interface Sheet {
   instruments: InstrumentState[];
   queries: { entry: EntryOf<'query'>; answer: EntryOf<'query-answered'> | null }[];
   manualHolds: { entry: EntryOf<'hold'>; lifted: EntryOf<'hold-lifted'> | null }[];
-  verbalInstructions: EntryOf<'verbal-instruction'>[];
+  /** `confirmed`: the engineer has lifted its hold, once it was in writing. */
+  verbalInstructions: {
+    entry: EntryOf<'verbal-instruction'>;
+    confirmed: EntryOf<'hold-lifted'> | null;
+  }[];
   corrections: EntryOf<'correction'>[];
   lastWalk: EntryOf<'last-walk'> | null;
   siteEvents: EntryOf<'site-event'>[];

@@ -88,7 +88,10 @@ export function foldSheet(
       entry,
       lifted: listOf(facts, 'hold-lifted').find((one) => one.body.holdId === entry.id) ?? null,
     })),
-    verbalInstructions: listOf(facts, 'verbal-instruction'),
+    verbalInstructions: listOf(facts, 'verbal-instruction').map((entry) => ({
+      entry,
+      confirmed: listOf(facts, 'hold-lifted').find((one) => one.body.holdId === entry.id) ?? null,
+    })),
     corrections: corrections.map(({ entry }) => entry),
     lastWalk: standingLastWalk(facts, plan),
     siteEvents: listOf(facts, 'site-event'),
