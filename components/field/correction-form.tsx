@@ -3,12 +3,14 @@
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { buttonClasses } from '@/components/ui/button-classes';
+import { Checkbox } from '@/components/ui/checkbox';
 import { EmptyState } from '@/components/ui/empty-state';
+import { FieldError } from '@/components/ui/field';
 import { Notice } from '@/components/ui/notice';
 import { Textarea } from '@/components/ui/textarea';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
-import { correctedTogether } from './corrected-together';
+import { correctedTogether, failingOnFace } from './corrected-together';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { FormProblem } from './form-problem';
@@ -25,6 +27,11 @@ export function CorrectionForm({ open, about: given }: { open: OpenSheet; about:
   const [about, setAbout] = useState<SubjectRef>(given ?? { kind: 'pour', id: sheet.pourId });
   const [text, setText] = useState('');
   const [kept, setKept] = useState(false);
+  const [choices] = useState(() => (given?.kind === 'face' ? failingOnFace(sheet, given.id) : []));
+  const [chosen, setChosen] = useState<readonly string[]>(() =>
+    choices.filter((one) => !one.asked).map((one) => one.key),
+  );
+  const [unchosen, setUnchosen] = useState(false);
   const { busy, problems, record } = useRecord(open);
   const back = { href: fieldPaths.holds(sheet.pourId), words: 'holds' };
   if (!mayRecord('correction', open.project.role)) {
@@ -36,8 +43,10 @@ export function CorrectionForm({ open, about: given }: { open: OpenSheet; about:
       </Screen>
     );
   }
-  const all = correctedTogether(sheet, about);
+  // One hold gathers the failing points of a face; a report names those that were put right, and no other.
+  const all = choices.length > 0 ? chosen.map(point) : correctedTogether(sheet, about);
   const keep = async () => {
+    if (all.length === 0) return setUnchosen(true);
     const entry = await record('correction', { about: all, text, where: whereOf(sheet, about) });
     if (entry) setKept(true);
   };
@@ -65,7 +74,28 @@ export function CorrectionForm({ open, about: given }: { open: OpenSheet; about:
               void keep();
             }}
           >
-            {given ? (
+            {choices.length > 0 ? (
+              <fieldset>
+                <legend className="font-label text-label font-semibold text-pencil">
+                  What was put right on {subjectWords(sheet, about)}
+                </legend>
+                {choices.map((one) => (
+                  <Checkbox
+                    key={one.key}
+                    label={one.label}
+                    {...(one.asked ? { hint: 'the engineer is asked to decide on it' } : {})}
+                    checked={chosen.includes(one.key)}
+                    onChange={(event) => {
+                      setUnchosen(false);
+                      setChosen(
+                        event.target.checked ? [...chosen, one.key] : chosen.filter((key) => key !== one.key),
+                      );
+                    }}
+                  />
+                ))}
+                <FieldError id="corrected-points" error={unchosen ? 'Tick what was put right.' : undefined} />
+              </fieldset>
+            ) : given ? (
               <div>
                 <p className="font-label text-label font-semibold text-pencil">What was put right</p>
                 <ul className="list-inside list-disc">
@@ -101,3 +131,5 @@ export function CorrectionForm({ open, about: given }: { open: OpenSheet; about:
     </Screen>
   );
 }
+
+const point = (id: string): SubjectRef => ({ kind: 'point', id });

@@ -52,15 +52,24 @@ const failing = (point: PointState): ReadingState[] =>
   point.governing.filter((reading) => reading.judged.verdict === 'not-met' && reading.acceptedBy === null);
 
 function notMet(sheet: Sheet, place: Place, requirement: Requirement, points: PointState[]): Hold[] {
-  const rounds = new Map<number, { point: PointState; reading: ReadingState }[]>();
+  // What the engineer has been asked about stands apart from what only has to be put right.
+  const groups = new Map<
+    string,
+    { round: number; asked: boolean; found: { point: PointState; reading: ReadingState }[] }
+  >();
   for (const point of points) {
     if (point.recheck === 'failed') continue;
+    const asked = decisionAskedFor(sheet, point);
     for (const reading of failing(point)) {
       if (reading.requirement?.id !== requirement.id) continue;
-      rounds.set(reading.round, [...(rounds.get(reading.round) ?? []), { point, reading }]);
+      const { round } = reading;
+      const key = asked ? `${round}:asked` : `${round}`;
+      const group = groups.get(key) ?? { round, asked, found: [] };
+      group.found.push({ point, reading });
+      groups.set(key, group);
     }
   }
-  return [...rounds].map(([round, found]) => {
+  return [...groups].map(([key, { round, asked, found }]) => {
     const worst = found.reduce((least, one) =>
       (one.reading.judged.marginMm ?? 0) < (least.reading.judged.marginMm ?? 0) ? one : least,
     );
@@ -69,9 +78,8 @@ function notMet(sheet: Sheet, place: Place, requirement: Requirement, points: Po
     const limit =
       high && requirement.mostAcceptedMm !== null ? requirement.mostAcceptedMm : requirement.leastAcceptedMm;
     const shown = mm === null ? 'block does not pass' : withUnit(mm, place.plan.units, limit);
-    const asked = found.every(({ point }) => decisionAskedFor(sheet, point.key));
     return {
-      id: `cover-not-met:${place.face.id}:${requirement.id}:${round}`,
+      id: `cover-not-met:${place.face.id}:${requirement.id}:${key}`,
       kind: 'cover-not-met',
       title: `Cover ${shown}, accepted ${high ? 'to' : 'from'} ${withUnit(limit, place.plan.units)}`,
       detail: `${found.length === 1 ? 'One point' : `${found.length} points`} to ${requirement.steel}: ${listed(found.map(({ point }) => point.label))}${round > 1 ? ` (round ${round})` : ''}.`,
@@ -147,11 +155,15 @@ const placed = (place: Place, points: PointState[]) => ({
   subjects: points.map((point) => ({ kind: 'point' as const, id: point.key })),
 });
 
-function decisionAskedFor(sheet: Sheet, pointKey: string): boolean {
+function decisionAskedFor(sheet: Sheet, point: PointState): boolean {
   return sheet.nonconformances.some(
     (state) =>
       (state.status === 'decision-asked' || state.status === 'open') &&
-      state.entry.body.about.some((about) => about.kind === 'point' && about.id === pointKey) &&
+      state.entry.body.about.some(
+        (about) =>
+          (about.kind === 'point' && about.id === point.key) ||
+          (about.kind === 'entry' && point.readings.some((reading) => reading.entry.id === about.id)),
+      ) &&
       (state.entry.body.proposal ?? '') !== '',
   );
 }
