@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
-import { LinkButton } from '@/components/ui/link-button';
+import { buttonClasses } from '@/components/ui/button-classes';
+import { LeaveLink } from '@/components/ui/leave-link';
 import { SheetFrame } from '@/components/ui/sheet-frame';
 
 export const metadata: Metadata = { title: 'Not here' };
@@ -12,9 +13,9 @@ export default function NotFound() {
         <div className="grid gap-3">
           <p>The address may be wrong, or it belongs to a project that you are not in.</p>
           <div>
-            <LinkButton href="/" variant="primary">
+            <LeaveLink href="/" className={buttonClasses('primary')}>
               Go to the start
-            </LinkButton>
+            </LeaveLink>
           </div>
         </div>
       </SheetFrame>
