@@ -172,8 +172,12 @@ export class PersonWork {
     const known = this.#opening.get(pourId);
     if (known) return known;
     const opening = (async () => {
-      await Promise.all([this.#loadStream(pourId), this.#loadStream(projectStream(projectId))]);
-      this.memory.open(pourId, projectId, (await this.db.get('plans', pourId)) ?? null);
+      const [{ sheetEngine }] = await Promise.all([
+        import('./sheet-engine'),
+        this.#loadStream(pourId),
+        this.#loadStream(projectStream(projectId)),
+      ]);
+      this.memory.open(pourId, projectId, (await this.db.get('plans', pourId)) ?? null, sheetEngine);
     })().finally(() => this.#opening.delete(pourId));
     this.#opening.set(pourId, opening);
     return opening;

@@ -1,8 +1,7 @@
-import { holds } from '@/lib/inspection/holds';
 import type { Plan } from '@/lib/inspection/plan';
-import { pourState } from '@/lib/inspection/pour-state';
-import { foldSheet, newFoldMemo, type FoldMemo, type RecordedEntry } from '@/lib/inspection/sheet';
+import type { FoldMemo, RecordedEntry } from '@/lib/inspection/sheet';
 import type { Hold, PourState, Sheet } from '@/lib/inspection/sheet-types';
+import type { SheetEngine } from './sheet-engine';
 import { projectStream } from './store/person-database';
 
 interface Stream {
@@ -20,6 +19,7 @@ export interface FoldedPour {
 
 interface Opened {
   projectId: string;
+  engine: SheetEngine;
   memo: FoldMemo;
   sheet: Sheet | null;
   stale: boolean;
@@ -72,14 +72,15 @@ export class SheetMemory {
   }
 
   /** Opens a pour whose two streams are loaded. */
-  open(pourId: string, projectId: string, plan: Plan | null): void {
+  open(pourId: string, projectId: string, plan: Plan | null, engine: SheetEngine): void {
     if (plan) this.#plans.set(pourId, plan);
     const known = this.#opened.get(pourId);
     if (known) known.stale = true;
     else {
       this.#opened.set(pourId, {
         projectId,
-        memo: newFoldMemo(),
+        engine,
+        memo: engine.newFoldMemo(),
         sheet: null,
         stale: true,
         folded: null,
@@ -133,11 +134,11 @@ export class SheetMemory {
         ...(this.#streams.get(pourId)?.entries.values() ?? []),
         ...(this.#streams.get(projectStream(opened.projectId))?.entries.values() ?? []),
       ];
-      opened.sheet = plan ? foldSheet(plan, recorded, opened.memo) : null;
+      opened.sheet = plan ? opened.engine.foldSheet(plan, recorded, opened.memo) : null;
     }
     const at = new Date(now).toISOString();
-    const found = opened.sheet ? holds(opened.sheet, at) : [];
-    const state = opened.sheet ? pourState(opened.sheet, found, at) : 'no-plan';
+    const found = opened.sheet ? opened.engine.holds(opened.sheet, at) : [];
+    const state = opened.sheet ? opened.engine.pourState(opened.sheet, found, at) : 'no-plan';
     const judgement = `${state}:${found.map((hold) => hold.id).join(',')}`;
     if (opened.stale || judgement !== opened.judgement || !opened.folded) {
       opened.folded = { sheet: opened.sheet, holds: found, state };
