@@ -268,6 +268,8 @@ export async function startObjectStore(
   await mkdir(options.folder, { recursive: true });
   const server = createServer((request, response) => {
     serve(request, response, options).catch((error: unknown) => {
+      // Whoever asked has gone away: there is nobody to answer, and nothing failed here.
+      if (error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE') return;
       const known =
         error instanceof StoreError ? error : new StoreError(500, 'InternalError', 'The store failed');
       if (!(error instanceof StoreError)) console.error(error);

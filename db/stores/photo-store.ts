@@ -77,8 +77,9 @@ export async function findPhoto(tx: Tx, photoId: string): Promise<KeptPhoto | nu
 }
 
 /**
- * Notes how a photo ended. Only one that waits (or was refused, and has been sent again) can still be settled.
- * @returns false when it was stored before: then nothing is changed
+ * Notes how a photo ended. One that was refused can still be stored, when it was sent again; what is stored stays so,
+ * and a refusal is noted once.
+ * @returns false when nothing was left to note: then nothing is changed
  */
 export async function settlePhoto(
   tx: Tx,
@@ -91,7 +92,7 @@ export async function settlePhoto(
   const stored = outcome.state === 'stored';
   const changed = await tx('photos')
     .where({ project_id: projectId, id: photoId })
-    .whereNot({ state: 'stored' })
+    .whereIn('state', stored ? ['waiting', 'refused'] : ['waiting'])
     .update({
       state: outcome.state,
       object_key: stored ? outcome.objectKey : null,

@@ -1,3 +1,4 @@
+import { Readable } from 'node:stream';
 import { DeleteObjectCommand, GetObjectCommand, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
 import { getSignedUrl } from '@aws-sdk/s3-request-presigner';
 import { environment } from './environment';
@@ -61,13 +62,22 @@ export function downloadAddress(key: string): Promise<string> {
   });
 }
 
-/** The bytes of an object, or null when there is none. @param most bytes read before giving up */
+/**
+ * The bytes of an object, or null when there is none.
+ * @param most bytes wanted: of a larger object the rest is left where it is, and what comes back is longer than this
+ */
 export async function readObject(key: string, most: number): Promise<Buffer | null> {
   try {
-    const answer = await storage().send(new GetObjectCommand({ Bucket: Bucket(), Key: key }));
-    if ((answer.ContentLength ?? 0) > most)
-      throw new Error(`The object ${key} is larger than ${most} bytes.`);
-    return Buffer.from((await answer.Body?.transformToByteArray()) ?? []);
+    const { Body: body } = await storage().send(new GetObjectCommand({ Bucket: Bucket(), Key: key }));
+    if (!(body instanceof Readable)) throw new Error(`The object ${key} came without a body.`);
+    const chunks: Buffer[] = [];
+    let length = 0;
+    for await (const chunk of body) {
+      chunks.push(chunk as Buffer);
+      length += (chunk as Buffer).length;
+      if (length > most) break;
+    }
+    return Buffer.concat(chunks);
   } catch (error) {
     if (error instanceof Error && (error.name === 'NoSuchKey' || error.name === 'NotFound')) return null;
     throw error;

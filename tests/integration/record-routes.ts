@@ -1,4 +1,5 @@
 import type { EntryEnvelope, Receipt } from '@/lib/inspection/entry';
+import type { PlanInput } from '@/lib/inspection/plan-input';
 import type { PullResponse, PushOutcome } from '@/lib/inspection/wire';
 import { deckPour, type Answer, type TestDevice, type TestPerson, type World } from './world';
 
@@ -22,9 +23,10 @@ export async function planPour(
   world: World,
   number: string,
   as: TestPerson = world.team.engineer,
+  more: Partial<PlanInput> = {},
 ): Promise<string> {
   const { POST } = await import('@/app/api/pours/route');
-  const answer = await world.call(POST, { as, body: deckPour(world.projectId, number) });
+  const answer = await world.call(POST, { as, body: deckPour(world.projectId, number, more) });
   if (answer.status !== 201) throw new Error(`not planned: ${JSON.stringify(answer.body)}`);
   return String(answer.body.pourId);
 }

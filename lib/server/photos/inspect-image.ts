@@ -38,10 +38,8 @@ export type Inspected =
  */
 export async function inspectImage(bytes: Buffer, announced: Announced): Promise<Inspected> {
   if (bytes.length !== announced.bytes) {
-    return {
-      kind: 'again',
-      problem: `${bytes.length} of ${announced.bytes} bytes came. It has to be sent again.`,
-    };
+    const came = bytes.length < announced.bytes ? String(bytes.length) : 'More than the announced';
+    return { kind: 'again', problem: `${came} of ${announced.bytes} bytes came. It has to be sent again.` };
   }
   if (createHash('sha256').update(bytes).digest('hex') !== announced.sha256) {
     return {
@@ -54,19 +52,27 @@ export async function inspectImage(bytes: Buffer, announced: Announced): Promise
   if (found.contentType !== announced.contentType) {
     return {
       kind: 'refused',
-      problem: `This file is ${found.contentType}, and was announced as ${announced.contentType}.`,
+      problem: `This file is ${found.contentType}, and was announced as ${announced.contentType}. Take it again.`,
     };
   }
+  return draw(bytes);
+}
+
+/** Reads the head first, so that an image made to fill the memory is never decoded; then all of it. */
+async function draw(bytes: Buffer): Promise<Inspected> {
   try {
+    const head = await sharp(bytes, { limitInputPixels: false }).metadata();
+    if (head.width * head.height > MOST_PIXELS) {
+      const [found, most] = [head.width * head.height, MOST_PIXELS].map((pixels) => Math.ceil(pixels / 1e6));
+      const problem = `This image has ${found} megapixels, and at most ${most} can be shown. Take it again, smaller.`;
+      return { kind: 'refused', problem };
+    }
     const { info } = await sharp(bytes, { limitInputPixels: MOST_PIXELS, failOn: 'truncated' })
       .rotate()
       .raw()
       .toBuffer({ resolveWithObject: true });
     return { kind: 'good', widthPx: info.width, heightPx: info.height };
   } catch {
-    return {
-      kind: 'refused',
-      problem: 'This photograph is damaged or too large to be shown. Take it again.',
-    };
+    return { kind: 'refused', problem: 'This photograph is damaged and cannot be shown. Take it again.' };
   }
 }

@@ -9,8 +9,6 @@ import { OpenRecord } from '../open-record';
 import { inspectImage, type Inspected } from './inspect-image';
 import { incomingKey, storedKey } from './photo-keys';
 
-const MOST_BYTES = 25_000_000;
-
 interface PhotoWithRole {
   photo: KeptPhoto;
   role: Role;
@@ -25,7 +23,7 @@ export async function verifyPhoto(projectId: string, photoId: string, now: () =>
   const found = await load(projectId, photoId);
   if (!found) return 'unknown';
   if (found.photo.state === 'stored') return 'stored before';
-  const bytes = await readObject(incomingKey(photoId), MOST_BYTES);
+  const bytes = await readObject(incomingKey(photoId), found.photo.bytes);
   if (!bytes) return 'nothing came';
   const inspected = await inspectImage(bytes, found.photo);
   // The key holds the digest, so writing it again changes nothing; these very bytes were looked at, not a later upload.
