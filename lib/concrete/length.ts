@@ -201,6 +201,7 @@ const DECIMALS: Record<LengthUnit, { per: number; exact: number; rounded: number
 function decimal(mm: number, unit: LengthUnit): string {
   const { per, exact, rounded } = DECIMALS[unit];
   const value = mm / per;
+  if (Number.isInteger(value) && Math.abs(value) <= LONGEST_MM) return String(value);
   for (let places = 0; places <= exact; places += 1) {
     const text = value.toFixed(places);
     if (Math.abs(Number(text) * per - mm) <= LENGTH_SLACK_MM) return unsigned(text);

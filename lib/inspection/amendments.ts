@@ -74,7 +74,7 @@ function bodyAfter<T extends AmendableType>(
   const parsed = siteBodies[root.type].safeParse(amendment.body.replacement);
   if (!parsed.success) return { body: before, problem: 'The amended values cannot be read.' };
   const after = parsed.data as EntryOf<T>['body'];
-  const shown = amendment.body.photoId !== null && photoTaken(facts, amendment.body.photoId);
+  const shown = amendment.body.photoId !== null && facts.photoIds.has(amendment.body.photoId);
   if (before !== null && needsPhoto(before, after) && !shown) {
     return {
       body: before,
@@ -82,8 +82,4 @@ function bodyAfter<T extends AmendableType>(
     };
   }
   return { body: after, problem: null };
-}
-
-function photoTaken(facts: Facts, photoId: string): boolean {
-  return (facts.listed.photo ?? []).some((photo) => photo.body.photoId === photoId);
 }

@@ -24,8 +24,33 @@ export function saw(later: Placed, earlier: Placed): boolean {
  * was said last. More than one: people spoke without having heard each other.
  */
 export function headsOf<T extends Placed>(facts: readonly T[]): T[] {
-  return facts.filter((fact) => !facts.some((other) => saw(other, fact)));
+  if (facts.length < 2) return [...facts];
+  // A fact is unseen unless its own device went on after it, or another device had fetched past it: how far each device
+  // had got answers that for all of its facts at once.
+  const devices: Reach[] = [];
+  for (const fact of facts) {
+    const reach = reachOf(devices, fact);
+    if (!reach) {
+      const { authorId, deviceId, deviceSeq, seenSeq } = fact;
+      devices.push({ authorId, deviceId, deviceSeq, seenSeq });
+      continue;
+    }
+    if (fact.deviceSeq > reach.deviceSeq) reach.deviceSeq = fact.deviceSeq;
+    if (fact.seenSeq > reach.seenSeq) reach.seenSeq = fact.seenSeq;
+  }
+  return facts.filter((fact) => {
+    const { seq } = fact;
+    const own = reachOf(devices, fact);
+    if (own && own.deviceSeq > fact.deviceSeq) return false;
+    return seq === null || !devices.some((other) => other !== own && other.seenSeq >= seq);
+  });
 }
+
+/** How far one person on one device had got: the last act, and the furthest that was fetched. */
+type Reach = Pick<Placed, 'authorId' | 'deviceId' | 'deviceSeq' | 'seenSeq'>;
+
+const reachOf = (devices: readonly Reach[], fact: Placed): Reach | undefined =>
+  devices.find((device) => device.deviceId === fact.deviceId && device.authorId === fact.authorId);
 
 /** Order of the record: by seq; what still waits on the device comes last, in the order it was made. */
 export function inRecordOrder(a: Placed, b: Placed): number {

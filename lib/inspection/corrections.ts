@@ -17,6 +17,27 @@ export function correctedSubjects(facts: Facts): CorrectedSubjects[] {
   });
 }
 
+/** The same by what they reach, so that each thing finds its own without asking every correction of the pour. */
+export function correctionsByKey(corrections: readonly CorrectedSubjects[]): CorrectionsByKey {
+  const byKey = new Map<string, CorrectedSubjects[]>();
+  for (const correction of corrections) {
+    for (const key of correction.keys) {
+      const known = byKey.get(key);
+      if (known) known.push(correction);
+      else byKey.set(key, [correction]);
+    }
+  }
+  return { all: corrections, of: (key) => byKey.get(key) ?? none };
+}
+
+const none: readonly CorrectedSubjects[] = [];
+
+/** Every correction of a pour, and those that reach one subject, in the order of the record. */
+export interface CorrectionsByKey {
+  all: readonly CorrectedSubjects[];
+  of(key: string): readonly CorrectedSubjects[];
+}
+
 function reach(facts: Facts, about: SubjectRef, keys: Set<string>): void {
   const key = subjectKey(about);
   if (keys.has(key)) return;

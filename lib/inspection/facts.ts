@@ -27,8 +27,14 @@ export interface Facts {
   answersByCheck: Map<string, EntryOf<'answer'>[]>;
   measurementsByItem: Map<string, EntryOf<'measurement'>[]>;
   photosBySubject: Map<string, EntryOf<'photo'>[]>;
-  /** Rises with each fact about a subject, so that only what changed is judged again. */
+  /** Ids of the photographs taken, and how many amendments name one as what shows them right. */
+  photoIds: Set<string>;
+  amendmentsWithPhoto: number;
+  /** Spot readings, each of which makes a place of its own. */
+  spots: EntryOf<'reading'>[];
+  /** Rises with each fact about a subject, so that only what changed is judged again; places of readings by their key. */
   versions: Map<string, number>;
+  placeVersions: Map<string, number>;
 }
 
 export const noFacts = (): Facts => ({
@@ -42,7 +48,11 @@ export const noFacts = (): Facts => ({
   answersByCheck: new Map(),
   measurementsByItem: new Map(),
   photosBySubject: new Map(),
+  photoIds: new Set(),
+  amendmentsWithPhoto: 0,
+  spots: [],
   versions: new Map(),
+  placeVersions: new Map(),
 });
 
 /** The key of the place that a reading is about: a point of the plan, or the place of a spot reading. */
@@ -92,14 +102,15 @@ export function addFact(facts: Facts, recorded: RecordedEntry): void {
   facts.entries.push(entry);
   facts.byId.set(entry.id, entry);
   ((facts.listed[entry.type] ??= []) as Entry[]).push(entry);
-  const subject = subjectOf(facts, entry);
-  facts.versions.set(subject, (facts.versions.get(subject) ?? 0) + 1);
+  countVersion(facts, entry);
   switch (entry.type) {
     case 'amendment':
       push(facts.amendmentsByRoot, entry.body.rootId, entry);
+      if (entry.body.photoId !== null) facts.amendmentsWithPhoto += 1;
       break;
     case 'reading':
       push(facts.readingsByPoint, pointKeyOf(entry), entry);
+      if (entry.body.spot !== null) facts.spots.push(entry);
       break;
     case 'answer':
       push(facts.answersByCheck, entry.body.checkId, entry);
@@ -109,27 +120,20 @@ export function addFact(facts: Facts, recorded: RecordedEntry): void {
       break;
     case 'photo':
       push(facts.photosBySubject, subjectKey(entry.body.about), entry);
+      facts.photoIds.add(entry.body.photoId);
       break;
   }
 }
 
-/** The subject whose judgement an entry changes; entries of a wider reach share one subject per type. */
-function subjectOf(facts: Facts, entry: Entry): string {
-  switch (entry.type) {
-    case 'reading':
-      return subjectKey({ kind: 'point', id: pointKeyOf(entry) });
-    case 'answer':
-      return subjectKey({ kind: 'check', id: entry.body.checkId });
-    case 'measurement':
-      return subjectKey({ kind: 'measurement', id: entry.body.itemId });
-    case 'amendment': {
-      const root = facts.byId.get(entry.body.rootId);
-      return root && root.type !== 'amendment' ? subjectOf(facts, root) : entry.type;
-    }
-    default:
-      return entry.type;
-  }
+/** Counts an entry for what it changes: the place of a reading, or its type; an amendment counts as what it amends. */
+function countVersion(facts: Facts, entry: Entry): void {
+  const root = entry.type === 'amendment' ? facts.byId.get(entry.body.rootId) : entry;
+  const counted = root && root.type !== 'amendment' ? root : entry;
+  if (counted.type === 'reading') countUp(facts.placeVersions, pointKeyOf(counted));
+  else countUp(facts.versions, counted.type);
 }
+
+const countUp = (map: Map<string, number>, key: string) => map.set(key, (map.get(key) ?? 0) + 1);
 
 const placed = (entry: RecordedEntry) => ({ ...entry, seq: entry.seq ?? null });
 
@@ -137,9 +141,18 @@ const placed = (entry: RecordedEntry) => ({ ...entry, seq: entry.seq ?? null });
 const follows = (entry: RecordedEntry, before: RecordedEntry | undefined): boolean =>
   entry.seq !== undefined && (before === undefined || (before.seq !== undefined && before.seq < entry.seq));
 
+function isInOrder(recorded: readonly RecordedEntry[]): boolean {
+  let before: RecordedEntry | undefined;
+  for (const entry of recorded) {
+    if (!follows(entry, before)) return false;
+    before = entry;
+  }
+  return true;
+}
+
 /** The record's own order, with what waits on the device last; the same id is taken once. */
 export function inOrder(recorded: readonly RecordedEntry[]): readonly RecordedEntry[] {
-  if (recorded.every((entry, index) => follows(entry, recorded[index - 1]))) return recorded;
+  if (isInOrder(recorded)) return recorded;
   const once = new Map<string, RecordedEntry>();
   for (const entry of recorded) {
     const known = once.get(entry.id);

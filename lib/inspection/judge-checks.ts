@@ -23,6 +23,10 @@ export function judgeChecks(context: JudgingContext): CheckState[] {
     for (const entry of context.facts.answersByCheck.get(item.id) ?? []) {
       const result = amended(context.facts, entry);
       amendmentConflict ||= result.conflict;
+      if (result.amendments.length === 0) {
+        answers.push(entry);
+        continue;
+      }
       const standing = result.rivals.filter((body): body is EntryOf<'answer'>['body'] => body !== null);
       const least = standing.sort((a, b) => favour[a.answer] - favour[b.answer])[0];
       if (least) answers.push({ ...entry, body: least });
@@ -30,7 +34,7 @@ export function judgeChecks(context: JudgingContext): CheckState[] {
     const heads = headsOf(answers);
     const governing = heads.length === 0 ? null : heads.reduce(lessFavourable);
     const key = subjectKey({ kind: 'check', id: item.id });
-    const corrections = context.corrections.filter(({ keys }) => keys.has(key)).map(({ entry }) => entry);
+    const corrections = context.corrections.of(key).map(({ entry }) => entry);
     const correctedSince =
       corrections.findLast((correction) => governing !== null && !saw(governing, correction)) ?? null;
     return {

@@ -73,7 +73,7 @@ export function judgeMeasurements(context: JudgingContext): MeasurementState[] {
   const { plan, facts } = context;
   return plan.measurements.map((item) => {
     const key = subjectKey({ kind: 'measurement', id: item.id });
-    const corrections = context.corrections.filter(({ keys }) => keys.has(key)).map(({ entry }) => entry);
+    const corrections = context.corrections.of(key).map(({ entry }) => entry);
     let conflict = false;
     const eventsByPlace = new Map<string, Placed[]>();
     const places: Place[] = (facts.measurementsByItem.get(item.id) ?? []).map((entry) => {

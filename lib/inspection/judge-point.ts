@@ -3,7 +3,7 @@ import { judgeReading, type JudgedReading } from '@/lib/concrete/judge-reading';
 import { acceptedAsSeen } from './acceptances';
 import { amended } from './amendments';
 import { headsOf, saw, type Placed } from './causality';
-import type { CorrectedSubjects } from './corrections';
+import type { CorrectionsByKey } from './corrections';
 import type { EntryOf } from './entry';
 import { subjectKey, type Facts } from './facts';
 import { standingAt } from './instruments';
@@ -18,7 +18,7 @@ export interface JudgingContext {
   plan: Plan;
   facts: Facts;
   instruments: Map<string, InstrumentState>;
-  corrections: CorrectedSubjects[];
+  corrections: CorrectionsByKey;
   accepted: Map<string, EntryOf<'disposition'>>;
 }
 
@@ -111,18 +111,17 @@ function correctionsOf(
   place: PointPlace,
   readings: ReadingState[],
 ): EntryOf<'correction'>[] {
-  const own = subjectKey({ kind: 'point', id: place.key });
-  const whole = subjectKey({ kind: 'face', id: place.face.id });
-  return context.corrections
-    .filter(({ entry, keys }) => {
-      if (keys.has(own)) return true;
-      // A correction of a face puts right what its author could see failing there, and nothing else.
-      return (
-        keys.has(whole) &&
-        readings.some((reading) => reading.judged.verdict === 'not-met' && saw(entry, reading.entry))
-      );
-    })
-    .map(({ entry }) => entry);
+  const own = context.corrections.of(subjectKey({ kind: 'point', id: place.key })).map(({ entry }) => entry);
+  const ofFace = context.corrections
+    .of(subjectKey({ kind: 'face', id: place.face.id }))
+    .map(({ entry }) => entry)
+    .filter(
+      (entry) =>
+        !own.includes(entry) &&
+        // A correction of a face puts right what its author could see failing there, and nothing else.
+        readings.some((reading) => reading.judged.verdict === 'not-met' && saw(entry, reading.entry)),
+    );
+  return [...own, ...ofFace];
 }
 
 /**

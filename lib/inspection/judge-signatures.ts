@@ -49,11 +49,13 @@ const overlaps = (a: string[] | null, b: string[] | null): boolean =>
 
 /** Signatures with what sets them aside: any later material entry in their scope. */
 export function judgeSignatures(facts: Facts, plan: Plan): SignatureState[] {
-  const material = facts.entries.filter((entry) => isMaterial(entry, plan));
   return listOf(facts, 'signature').map((entry) => {
     const setAsideBy =
-      material.find(
-        (other) => !saw(entry, other) && overlaps(entry.body.elementIds, elementsOf(other, facts.byId, plan)),
+      facts.entries.find(
+        (other) =>
+          !saw(entry, other) &&
+          isMaterial(other, plan) &&
+          overlaps(entry.body.elementIds, elementsOf(other, facts.byId, plan)),
       ) ?? null;
     const confirmed =
       listOf(facts, 'signature-confirmed').find((one) => one.body.signatureId === entry.id) ?? null;

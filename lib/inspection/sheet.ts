@@ -1,12 +1,12 @@
 import { acceptances, dispositionsInForce } from './acceptances';
 import { amended } from './amendments';
 import { saw } from './causality';
-import { correctedSubjects } from './corrections';
+import { correctedSubjects, correctionsByKey } from './corrections';
 import type { EntryOf } from './entry';
 import { addFact, inOrder, listOf, noFacts, type Facts, type RecordedEntry } from './facts';
 import { instrumentStates } from './instruments';
 import { judgeChecks } from './judge-checks';
-import { judgeFaces, type PointMemo } from './judge-faces';
+import { judgeFaces, newPointMemo, type PointMemo } from './judge-faces';
 import { judgeMeasurements } from './judge-measurements';
 import { judgeNonconformances, withdrawnNonconformances } from './judge-nonconformances';
 import type { JudgingContext } from './judge-point';
@@ -23,22 +23,41 @@ export const FOLD_VERSION = 1;
 export interface FoldMemo {
   facts: Facts;
   points: PointMemo;
-  planRevision: number;
+  /** The last judgement of all checks and of all measurements, with the version of what they rest on. */
+  checks: Judged<Sheet['checks']> | null;
+  measurements: Judged<Sheet['measurements']> | null;
 }
-export const newFoldMemo = (): FoldMemo => ({ facts: noFacts(), points: new Map(), planRevision: 0 });
+interface Judged<T> {
+  version: string;
+  states: T;
+}
+const nothingJudged = () => ({ points: newPointMemo(), checks: null, measurements: null });
+export const newFoldMemo = (): FoldMemo => ({ facts: noFacts(), ...nothingJudged() });
 
 /** Facts of the memo when the given entries only add to them at the end; otherwise collected afresh. */
 function collect(recorded: readonly RecordedEntry[], memo: FoldMemo): Facts {
   const ordered = inOrder(recorded);
   const known = memo.facts.recorded;
-  const extendsKnown =
-    known.length <= ordered.length && known.every((entry, index) => entry === ordered[index]);
-  if (!extendsKnown) {
+  if (!beginsWith(ordered, known)) {
     memo.facts = noFacts();
-    memo.points = new Map();
+    Object.assign(memo, nothingJudged());
   }
-  for (const entry of ordered.slice(memo.facts.recorded.length)) addFact(memo.facts, entry);
+  for (let index = memo.facts.recorded.length; index < ordered.length; index += 1) {
+    const entry = ordered[index];
+    if (entry) addFact(memo.facts, entry);
+  }
   return memo.facts;
+}
+
+function beginsWith(ordered: readonly RecordedEntry[], known: readonly RecordedEntry[]): boolean {
+  if (known.length > ordered.length) return false;
+  for (let index = 0; index < known.length; index += 1) if (known[index] !== ordered[index]) return false;
+  return true;
+}
+
+/** The highest seq: the record is in its own order, with what still waits on a device last. */
+function headOf(recorded: readonly RecordedEntry[]): number {
+  return recorded.findLast((entry) => entry.seq !== undefined)?.seq ?? 0;
 }
 
 /**
@@ -52,22 +71,30 @@ export function foldSheet(
   memo: FoldMemo = newFoldMemo(),
 ): Sheet {
   const facts = collect(recorded, memo);
-  memo.planRevision = plan.revision;
 
   const withdrawn = withdrawnNonconformances(facts);
   const inForce = dispositionsInForce(facts, (id) => withdrawn.has(id));
   const instruments = instrumentStates(facts);
   const corrections = correctedSubjects(facts);
-  const context: JudgingContext = { plan, facts, instruments, corrections, accepted: acceptances(inForce) };
+  const context: JudgingContext = {
+    plan,
+    facts,
+    instruments,
+    corrections: correctionsByKey(corrections),
+    accepted: acceptances(inForce),
+  };
 
   const faces = judgeFaces(context, memo.points);
-  const checks = judgeChecks(context);
-  const measurements = judgeMeasurements(context);
+  memo.checks = judgedBy(memo.checks, versionOf(context, 'answer'), () => judgeChecks(context));
+  memo.measurements = judgedBy(memo.measurements, versionOf(context, 'measurement'), () =>
+    judgeMeasurements(context),
+  );
+  const [checks, measurements] = [memo.checks.states, memo.measurements.states];
   const nonconformances = judgeNonconformances(facts, corrections, withdrawn, inForce);
   return {
     pourId: plan.pourId,
     plan,
-    headSeq: facts.recorded.reduce((head, entry) => Math.max(head, entry.seq ?? 0), 0),
+    headSeq: headOf(facts.recorded),
     entries: [...facts.entries],
     unknown: [...facts.unknown],
     faces,
@@ -109,6 +136,16 @@ export function foldSheet(
       withoutRelease: listOf(facts, 'placing-without-release').length > 0,
     },
   };
+}
+
+/** What the judgement of all checks, or of all measurements, rests on. */
+function versionOf({ plan, facts }: JudgingContext, type: 'answer' | 'measurement'): string {
+  const rests = [type, 'correction', 'disposition', 'nonconformance', 'photo'] as const;
+  return [plan.revision, ...rests.map((of) => facts.versions.get(of) ?? 0)].join('.');
+}
+
+function judgedBy<T>(known: Judged<T> | null, version: string, judge: () => T): Judged<T> {
+  return known?.version === version ? known : { version, states: judge() };
 }
 
 function photoStates(facts: Facts): Sheet['photos'] {

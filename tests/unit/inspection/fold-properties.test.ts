@@ -6,7 +6,8 @@ import { pourState } from '@/lib/inspection/pour-state';
 import { decideRelease } from '@/lib/inspection/release-decision';
 import { foldSheet, newFoldMemo } from '@/lib/inspection/sheet';
 import { sheetStatement } from '@/lib/inspection/sheet-statement';
-import { gauge, PourStory, smallPlan, type Person } from '../../stories/pour-story';
+import { headsOf, saw, type Placed } from '@/lib/inspection/causality';
+import { gauge, PourStory, smallPlan, uuid, type Person } from '../../stories/pour-story';
 
 const everything = { elementIds: null, limits: '' };
 const labels = ['A1', 'A2', 'A3', 'B1', 'B2'] as const;
@@ -28,6 +29,20 @@ const act = fc.oneof(
     hears: fc.boolean(),
   }),
   fc.record({ act: fc.constant('correct' as const), label: fc.constantFrom(...labels), hears: fc.boolean() }),
+  fc.record({ act: fc.constant('correct-face' as const), hears: fc.boolean() }),
+  fc.record({
+    act: fc.constant('amend' as const),
+    label: fc.constantFrom(...labels),
+    mm: fc.option(fc.integer({ min: 10, max: 70 })),
+    /** The photograph that shows it is taken before the amendment, after it, or never. */
+    photo: fc.constantFrom('before', 'after', 'never'),
+  }),
+  fc.record({
+    act: fc.constant('decide' as const),
+    label: fc.constantFrom(...labels),
+    decision: fc.constantFrom('use-as-is', 'repair', 'rework'),
+    withdrawn: fc.boolean(),
+  }),
   fc.record({ act: fc.constant('block' as const), readMm: fc.constantFrom(50, 53) }),
   fc.record({ act: fc.constant('walk' as const), met: fc.boolean() }),
   fc.record({
@@ -56,6 +71,20 @@ function perform(story: PourStory, step: Act): void {
         where: { elementId: null, faceId: null, text: '' },
       });
       break;
+    case 'correct-face':
+      if (step.hears) story.hears('superintendent');
+      story.say('superintendent', 'correction', {
+        about: [{ kind: 'face', id: 'soffit' }],
+        text: 'Chairs added',
+        where: { elementId: null, faceId: null, text: '' },
+      });
+      break;
+    case 'amend':
+      amend(story, step);
+      break;
+    case 'decide':
+      decide(story, step);
+      break;
     case 'block':
       story.tells('coordinator', 'block-check', {
         instrumentId: gauge,
@@ -80,6 +109,66 @@ function perform(story: PourStory, step: Act): void {
       story.inspected();
       break;
   }
+}
+
+const lastReadingAt = (story: PourStory, label: string) =>
+  story.recorded.findLast((entry) => entry.type === 'reading' && entry.body.pointId === `soffit.${label}`);
+
+function amend(story: PourStory, step: Extract<Act, { act: 'amend' }>): void {
+  const reading = lastReadingAt(story, step.label);
+  if (!reading) return;
+  const photoId = uuid(8, 100_000 + story.head);
+  const takePhoto = () =>
+    story.say('inspector', 'photo', {
+      photoId,
+      sha256: 'c'.repeat(64),
+      bytes: 10,
+      contentType: 'image/jpeg',
+      takenAt: story.now,
+      about: { kind: 'point', id: `soffit.${step.label}` },
+      shot: 'close',
+      caption: '',
+    });
+  if (step.photo === 'before') takePhoto();
+  story.say('inspector', 'amendment', {
+    rootId: reading.id,
+    sawAmendmentId: null,
+    reason: 'recording error',
+    replacement:
+      step.mm === null ? null : { ...story.readingBody(step.label, step.mm), measuredAt: story.now },
+    photoId: step.photo === 'never' ? null : photoId,
+  });
+  if (step.photo === 'after') takePhoto();
+}
+
+function decide(story: PourStory, step: Extract<Act, { act: 'decide' }>): void {
+  const reading = lastReadingAt(story, step.label);
+  const nonconformanceId = story.tells('inspector', 'nonconformance', {
+    title: `Low cover at ${step.label}`,
+    about: [{ kind: 'point', id: `soffit.${step.label}` }],
+    where: { elementId: 'deck', faceId: 'soffit', text: step.label },
+    extent: 'One bar',
+    description: '',
+    proposal: '',
+    neededBy: null,
+  });
+  story.tells('engineer', 'disposition', {
+    nonconformanceId,
+    decision: step.decision,
+    reason: 'Checked by calculation',
+    accepts: reading ? [reading.id] : [],
+    extent: step.label,
+    conditions: [],
+    licence: 'PE-0000',
+  });
+  if (!step.withdrawn) return;
+  story.say('inspector', 'amendment', {
+    rootId: nonconformanceId,
+    sawAmendmentId: null,
+    reason: 'raised in error',
+    replacement: null,
+    photoId: null,
+  });
 }
 
 const told = (steps: Act[]): PourStory => {
@@ -157,6 +246,25 @@ describe('the fold', () => {
         const whole = foldSheet(smallPlan(), story.recorded);
         expect(sheetStatement(stepwise)).toBe(sheetStatement(whole));
         expect(holds(stepwise, story.now)).toEqual(holds(whole, story.now));
+      }),
+    );
+  });
+});
+
+describe('the facts that nobody spoke in sight of', () => {
+  it('are those of the definition: no other fact had seen them', () => {
+    const fact = fc.record({
+      authorId: fc.constantFrom('a', 'b'),
+      deviceId: fc.constantFrom('1', '2'),
+      deviceSeq: fc.nat(6),
+      seq: fc.option(fc.integer({ min: 1, max: 8 })),
+      seenSeq: fc.nat(9),
+    });
+    fc.assert(
+      fc.property(fc.array(fact, { maxLength: 9 }), (made) => {
+        const facts: Placed[] = made.map((one, index) => ({ ...one, id: String(index) }));
+        const defined = facts.filter((one) => !facts.some((other) => saw(other, one)));
+        expect(headsOf(facts)).toEqual(defined);
       }),
     );
   });
