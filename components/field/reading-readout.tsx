@@ -50,7 +50,7 @@ export function ReadingReadout({
           className="min-h-16 min-w-0 flex-1 py-1 pl-3 text-left font-label leading-tight"
         >
           <span className="block text-lead font-semibold">
-            {placeWords(target)}
+            {placeWords(target)}{' '}
             {count > 0 && (
               <span className="ml-2 text-label text-chalk underline underline-offset-4">
                 {count === 1 ? '1 reading' : `${count} readings`}
