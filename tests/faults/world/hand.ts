@@ -40,18 +40,24 @@ export async function allCalm(hands: readonly Hand[], clock: Clock): Promise<voi
   }
 }
 
-/** What a phone shows as not sent, as its own export says it. */
-export async function onPhone(one: Hand): Promise<OnPhone> {
-  const blob = await one.tabs[0]?.exportUnsent();
-  const file = JSON.parse((await blob?.text()) ?? '{}') as {
+/** What a tab shows as not sent, as its own export says it. */
+export async function exported(
+  tab: Pick<RunningDevice, 'exportUnsent'>,
+): Promise<{ entries: { id: string }[]; refused: { id: string; sentence: string }[] }> {
+  const file = JSON.parse(await (await tab.exportUnsent()).text()) as {
     entries: { id: string }[];
     refused: { envelope: { id: string }; sentence: string }[];
   };
-  return {
-    name: one.phone.name,
-    waiting: file.entries.map((entry) => entry.id),
-    refused: file.refused.map(({ envelope, sentence }) => ({ id: envelope.id, sentence })),
-  };
+  const refused = file.refused.map(({ envelope, sentence }) => ({ id: envelope.id, sentence }));
+  return { entries: file.entries, refused };
+}
+
+/** What a phone shows as not sent. */
+export async function onPhone(one: Hand): Promise<OnPhone> {
+  const [tab] = one.tabs;
+  if (!tab) throw new Error('no tab is open');
+  const { entries, refused } = await exported(tab);
+  return { name: one.phone.name, waiting: entries.map(({ id }) => id), refused };
 }
 
 /** The ids of a pour's entries as a phone that was never there before gets them. */
