@@ -394,7 +394,7 @@ export const pumpPitRoof = (): PlanInput => {
             meeting: 'finished-top',
             exposure: 'weather-or-ground',
             widthMm: 6096,
-            heightMm: 3658,
+            heightMm: 3657.6,
             drawnPoints: 10,
             openings: [{ id: 'hatch', name: 'Hatch', xMm: 4300, yMm: 400, widthMm: 900, heightMm: 900 }],
             chosenPoints: [
