@@ -82,15 +82,16 @@ export function limitsFor(
 function depthOf(
   place: PointPlace,
   requirement: Requirement | null,
-  reading: { mm: number | null; verdict: string },
+  { body, judged: reading }: { body: ReadingBody; judged: JudgedReading },
   units: Plan['units'],
 ): DepthState | null {
-  if (!requirement?.depth || reading.mm === null || reading.verdict === 'not-verified') return null;
+  const mm = body.value?.mm ?? null;
+  if (!requirement?.depth || mm === null || reading.verdict === 'not-verified') return null;
   const judged = judgeEffectiveDepth(
     {
       section: { sectionMm: place.element.thicknessMm, barDiameterMm: requirement.barDiameterMm },
       plannedMm: requirement.depth.plannedMm,
-      readingMm: reading.mm,
+      readingMm: mm,
       touched: 'main',
       tolerance: requirement.depth,
     },
@@ -124,53 +125,67 @@ function correctionsOf(
   return [...own, ...ofFace];
 }
 
+/** One reading with what has been said of it since; its round follows from the corrections of its place. */
+function judgeRecorded(
+  context: JudgingContext,
+  place: PointPlace,
+  entry: ReadingEntry,
+): { state: ReadingState; conflict: boolean } {
+  const result = amended(context.facts, entry, (before, after) => {
+    const was = judgeBody(context, place, entry, before).verdict;
+    return was === 'not-met' && judgeBody(context, place, entry, after).verdict !== 'not-met';
+  });
+  const counts = leastFavourable(context, place, entry, result.rivals);
+  const shown = counts?.body ?? entry.body;
+  const requirement = place.face.requirements.find((one) => one.id === shown.requirementId) ?? null;
+  const state: ReadingState = {
+    entry,
+    current: counts?.body ?? null,
+    amendments: result.amendments,
+    requirement,
+    depth: counts && depthOf(place, requirement, counts, context.plan.units),
+    judged: counts?.judged ?? judgeBody(context, place, entry, entry.body),
+    round: 1,
+    acceptedBy: acceptedAsSeen(context.facts, entry, context.accepted),
+    pending: entry.seq === null,
+  };
+  return { state, conflict: result.conflict };
+}
+
+/** The least favourable of the bodies that may count, judged; null where the reading was withdrawn. */
+function leastFavourable(
+  context: JudgingContext,
+  place: PointPlace,
+  entry: ReadingEntry,
+  rivals: readonly (ReadingBody | null)[],
+): { body: ReadingBody; judged: JudgedReading } | null {
+  let least: { body: ReadingBody; judged: JudgedReading } | null = null;
+  for (const body of rivals) {
+    if (body === null) continue;
+    const judged = judgeBody(context, place, entry, body);
+    if (least === null || favour(judged) < favour(least.judged)) least = { body, judged };
+  }
+  return least;
+}
+
 /**
  * Judges one place: every reading by the requirement of the steel it touched, rounds by the corrections it had seen,
  * and per requirement the least favourable reading of the latest round that was verified.
  */
 export function judgePoint(context: JudgingContext, place: PointPlace): PointState {
-  const entries = context.facts.readingsByPoint.get(place.key) ?? [];
   let amendmentConflict = false;
   const events: Placed[] = [];
-  const readings: ReadingState[] = entries
-    .filter((entry) => entry.body.phase === 'before')
-    .map((entry) => {
-      const result = amended(context.facts, entry, (before, after) => {
-        const was = judgeBody(context, place, entry, before).verdict;
-        return was === 'not-met' && judgeBody(context, place, entry, after).verdict !== 'not-met';
-      });
-      amendmentConflict ||= result.conflict;
-      events.push(entry, ...result.amendments.map((amendment) => amendment.entry));
-      const judgedRivals = result.rivals
-        .filter((body): body is ReadingBody => body !== null)
-        .map((body) => ({ body, judged: judgeBody(context, place, entry, body) }))
-        .sort((a, b) => favour(a.judged) - favour(b.judged));
-      const governing = judgedRivals[0];
-      const requirement =
-        place.face.requirements.find((one) => one.id === (governing?.body ?? entry.body).requirementId) ??
-        null;
-      return {
-        entry,
-        current: governing?.body ?? null,
-        amendments: result.amendments,
-        requirement,
-        depth: governing
-          ? depthOf(
-              place,
-              requirement,
-              { mm: governing.body.value?.mm ?? null, verdict: governing.judged.verdict },
-              context.plan.units,
-            )
-          : null,
-        judged: governing?.judged ?? judgeBody(context, place, entry, entry.body),
-        round: 1,
-        acceptedBy: acceptedAsSeen(context.facts, entry, context.accepted),
-        pending: entry.seq === null,
-      };
-    });
+  const readings: ReadingState[] = [];
+  for (const entry of context.facts.readingsByPoint.get(place.key) ?? []) {
+    if (entry.body.phase !== 'before') continue;
+    const { state, conflict } = judgeRecorded(context, place, entry);
+    amendmentConflict ||= conflict;
+    readings.push(state);
+    events.push(entry, ...state.amendments.map((amendment) => amendment.entry));
+  }
 
   const corrections = correctionsOf(context, place, readings);
-  for (const reading of readings) {
+  for (const reading of corrections.length > 0 ? readings : []) {
     if (reading.entry.authorRole !== 'inspector') continue;
     reading.round = 1 + corrections.filter((correction) => saw(reading.entry, correction)).length;
   }
@@ -207,7 +222,9 @@ function governingOf(standing: ReadingState[]): ReadingState[] {
   for (const reading of standing) {
     if (reading.judged.verdict === 'not-verified') continue;
     const key = reading.requirement?.id ?? '';
-    byRequirement.set(key, [...(byRequirement.get(key) ?? []), reading]);
+    const group = byRequirement.get(key);
+    if (group) group.push(reading);
+    else byRequirement.set(key, [reading]);
   }
   return [...byRequirement.values()].map((group) => {
     const latest = Math.max(...group.map((reading) => reading.round));
