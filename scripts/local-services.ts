@@ -10,14 +10,14 @@ const wanted = (key: string): string => {
 };
 const folder = wanted('LOCAL_SERVICES_FOLDER');
 const store = await startObjectStore({
-  port: Number(new URL(wanted('S3_ENDPOINT')).port),
+  port: Number(wanted('OBJECTS_PORT')),
   folder: path.join(folder, 'objects'),
   accessKey: wanted('S3_ACCESS_KEY'),
   secretKey: wanted('S3_SECRET_KEY'),
   origin: new URL(wanted('APP_URL')).origin,
 });
 const mail = await startMailSink({
-  smtpPort: Number(new URL(wanted('SMTP_URL')).port),
+  smtpPort: Number(wanted('SMTP_PORT')),
   webPort: Number(wanted('MAIL_WEB_PORT')),
   folder: path.join(folder, 'mail'),
 });

@@ -55,7 +55,7 @@ async function main() {
   try {
     cluster.start();
     await prepareDatabase(cluster, 'cagewright', secrets);
-    const env = environmentFor({ secrets, cluster, database: 'cagewright', ports });
+    const env = environmentFor({ secrets, cluster, database: 'cagewright', ports, given: process.env });
     const tsx = ['--import', 'tsx'];
     companions.start('local services', process.execPath, [...tsx, 'scripts/local-services.ts'], {
       env: { ...env, LOCAL_SERVICES_FOLDER: dataFolder, MAIL_WEB_PORT: String(ports.mail) },

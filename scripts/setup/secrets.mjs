@@ -33,11 +33,28 @@ export function localSecrets() {
   return known;
 }
 
-/** The environment of the application and its companions, from the secrets and the ports in use. */
-export function environmentFor({ secrets, cluster, database, ports, host = '127.0.0.1' }) {
+/** What somebody may set to use hosted services, or addresses that a phone can reach, in place of this machine's own. */
+const hosted = [
+  'S3_ENDPOINT',
+  'S3_REGION',
+  'S3_BUCKET',
+  'S3_ACCESS_KEY',
+  'S3_SECRET_KEY',
+  'SMTP_URL',
+  'MAIL_FROM',
+];
+
+/**
+ * The environment of the application and its companions, from the secrets and the ports in use. `given` may name
+ * hosted services; without it, everything is this machine's own.
+ */
+export function environmentFor({ secrets, cluster, database, ports, host = '127.0.0.1', given = {} }) {
   const appUrl = process.env.APP_URL ?? `http://localhost:${ports.app}`;
+  const chosen = Object.fromEntries(hosted.filter((key) => given[key]).map((key) => [key, given[key]]));
   return {
     ...process.env,
+    OBJECTS_PORT: String(ports.objects),
+    SMTP_PORT: String(ports.smtp),
     NEXT_TELEMETRY_DISABLED: '1',
     // Node 20 serves it until 2027; the notice is for us, not for whoever starts the product.
     AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
@@ -53,5 +70,6 @@ export function environmentFor({ secrets, cluster, database, ports, host = '127.
     S3_SECRET_KEY: secrets.S3_SECRET_KEY,
     SMTP_URL: `smtp://${host}:${ports.smtp}`,
     MAIL_FROM: 'Cagewright <cagewright@example.test>',
+    ...chosen,
   };
 }
