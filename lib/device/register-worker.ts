@@ -1,3 +1,5 @@
+import type { Workbox } from 'workbox-window';
+
 const HOUR_MS = 3_600_000;
 
 export interface Updates {
@@ -6,55 +8,48 @@ export interface Updates {
 }
 
 /**
- * Registers the service worker and watches for a new version. It waits until somebody agrees; only the tab where
+ * Registers the service worker and tells when a new version waits. Only a person lets it in; and only the tab in which
  * that happened loads again, so that no form is lost under anybody's hands elsewhere.
  */
 export function watchUpdates(): Updates {
-  const workers = navigator.serviceWorker;
   const listeners = new Set<() => void>();
-  let registration: ServiceWorkerRegistration | null = null;
-  let ready = false;
+  let worker: Workbox | null = null;
+  let waits = false;
   let agreed = false;
 
-  const tellOnceInstalled = (worker: ServiceWorker | null) => {
-    const installed = () => {
-      // The first worker of all takes over from nobody: there is nothing to ask.
-      if (worker?.state !== 'installed' || !workers.controller) return;
-      ready = true;
-      listeners.forEach((tell) => tell());
-    };
-    installed();
-    worker?.addEventListener('statechange', installed);
-  };
   const register = async () => {
-    const found = await workers.register('/sw.js', { scope: '/' });
-    registration = found;
-    tellOnceInstalled(found.waiting);
-    tellOnceInstalled(found.installing);
-    found.addEventListener('updatefound', () => tellOnceInstalled(found.installing));
+    // Loaded apart and last: the worker's files are many, and come after what this page itself needs.
+    const { Workbox } = await import('workbox-window');
+    const found = new Workbox('/sw.js', { scope: '/' });
+    worker = found;
+    found.addEventListener('waiting', () => {
+      waits = true;
+      listeners.forEach((tell) => tell());
+    });
+    found.addEventListener('controlling', () => {
+      waits = false;
+      if (agreed) location.reload();
+    });
+    await found.register();
   };
-  workers.addEventListener('controllerchange', () => {
-    if (agreed) location.reload();
-  });
-  // Its files are many: they come after what this page itself needs.
   const begin = () => void register().catch(() => undefined);
   if (process.env.NODE_ENV === 'production') {
     if (document.readyState === 'complete') begin();
     else window.addEventListener('load', begin, { once: true });
   }
   // A phone's page lives for days: without asking, it would never hear of a new version.
-  const ask = () => void registration?.update().catch(() => undefined);
+  const ask = () => void worker?.update().catch(() => undefined);
   document.addEventListener('visibilitychange', () => document.visibilityState === 'visible' && ask());
   setInterval(ask, HOUR_MS);
   return {
     onReady(run) {
       listeners.add(run);
-      if (ready) run();
+      if (waits) run();
     },
     apply() {
       agreed = true;
       // Where another tab has let the new version in already, loading again is all that is left to do.
-      if (registration?.waiting) registration.waiting.postMessage({ type: 'SKIP_WAITING' });
+      if (worker && waits) worker.messageSkipWaiting();
       else location.reload();
     },
   };
