@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { optionalText } from '@/lib/inspection/primitives';
 import { roles } from '@/lib/inspection/roles';
 
 const pourStates = [
@@ -17,7 +18,7 @@ export const pourSorts = ['planned', 'number', 'title', 'state', 'holds', 'read'
 /** What the address of the list of pours says; what it does not know is left out rather than refused. */
 const poursQuery = z.object({
   state: z.enum(pourStates).optional().catch(undefined),
-  text: z.string().trim().max(80).optional().catch(undefined),
+  text: optionalText(80).optional().catch(undefined),
   clears: z.enum(roles).optional().catch(undefined),
   sort: z.enum(pourSorts).catch('planned'),
   order: z.enum(['up', 'down']).catch('up'),

@@ -1,3 +1,4 @@
+import { z } from 'zod';
 import type { NonconformanceStatus } from '@/lib/inspection/sheet-types';
 import type { Tx } from '@/db/connection';
 import { readCursor, writeCursor } from './page-cursor';
@@ -46,6 +47,8 @@ interface Row {
   planned_at: string | null;
 }
 
+const listKey = z.tuple([z.number().int().nonnegative().max(Number.MAX_SAFE_INTEGER)]);
+
 /** Nonconformances of a project, newest first. */
 export async function readNonconformanceList(
   tx: Tx,
@@ -66,7 +69,8 @@ export async function readNonconformanceList(
       'p.planned_at',
     );
   if (filter.statuses) void query.whereIn('n.status', filter.statuses);
-  if (filter.cursor) void query.where('n.seq', '<', Number(readCursor(filter.cursor, 1)[0]));
+  const after = filter.cursor ? readCursor(filter.cursor, listKey) : null;
+  if (after) void query.where('n.seq', '<', after[0]);
   const rows = (await query) as Row[];
   const page = rows.slice(0, limit);
   const last = page.at(-1);

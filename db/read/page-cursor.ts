@@ -1,20 +1,21 @@
-import { AppError } from '@/lib/inspection/app-error';
+import type { z } from 'zod';
 
 /** Keyset paging: the sort key of the last row shown, as one opaque string that fits a query parameter. */
 export function writeCursor(parts: readonly (string | number)[]): string {
   return Buffer.from(JSON.stringify(parts)).toString('base64url');
 }
 
-/** @throws AppError invalid when the cursor was not made by `writeCursor` with as many parts */
-export function readCursor(cursor: string, parts: number): (string | number)[] {
+/**
+ * @param key the shape of the list's own sort key
+ * @returns the key; null for a cursor that this list did not make: the list then begins at its beginning
+ */
+export function readCursor<T>(cursor: string, key: z.ZodType<T>): T | null {
+  let read: unknown;
   try {
-    const read: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
-    if (Array.isArray(read) && read.length === parts && read.every(isPart)) return read;
+    read = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
   } catch {
-    // Falls through: what cannot be read was not made here.
+    return null;
   }
-  throw new AppError('invalid', 'This page of the list cannot be found. Start again from its beginning.');
+  const parsed = key.safeParse(read);
+  return parsed.success ? parsed.data : null;
 }
-
-const isPart = (part: unknown): part is string | number =>
-  typeof part === 'string' || typeof part === 'number';

@@ -1,3 +1,5 @@
+import { z } from 'zod';
+import { instant, recordId } from '@/lib/inspection/primitives';
 import type { Role } from '@/lib/inspection/roles';
 import type { PourState } from '@/lib/inspection/sheet-types';
 import type { Tx } from '@/db/connection';
@@ -44,7 +46,6 @@ interface Row {
   title: string;
   location: string;
   planned_at: string | null;
-  planned_key: string;
   plan_revision: number;
   state: PourState;
   holds_total: number;
@@ -61,6 +62,10 @@ interface Row {
 const stateNow = `case when s.state = 'released' and s.valid_until < cast(:now as timestamptz) then 'held'
   else coalesce(s.state, 'no-plan') end`;
 
+/** As PostgreSQL spells the time of what has none: after everything that has one. */
+const UNPLANNED = 'infinity';
+const listKey = z.tuple([z.union([instant, z.literal(UNPLANNED)]), recordId]);
+
 /**
  * Pours of a project by planned time, those without a time last; page by page from a key, so that the last page costs
  * what the first does.
@@ -72,12 +77,11 @@ export async function readPoursList(
   now: string,
 ): Promise<{ rows: PoursListRow[]; next: string | null }> {
   const limit = Math.min(Math.max(filter.limit ?? 50, 1), 200);
-  const [afterTime, afterId] = filter.cursor ? readCursor(filter.cursor, 2) : [null, null];
+  const after = filter.cursor ? readCursor(filter.cursor, listKey) : null;
+  const [afterTime, afterId] = after ?? [null, null];
   const conditions = [
     'p.project_id = :projectId',
-    filter.cursor
-      ? '(p.planned_order, p.id) > (cast(:afterTime as timestamptz), cast(:afterId as uuid))'
-      : null,
+    after ? '(p.planned_order, p.id) > (cast(:afterTime as timestamptz), cast(:afterId as uuid))' : null,
     filter.plannedFrom ? 'p.planned_order >= :plannedFrom' : null,
     filter.plannedBefore ? 'p.planned_order < :plannedBefore' : null,
     filter.text ? `(p.number || ' ' || p.title || ' ' || p.location) ilike :pattern` : null,
@@ -89,7 +93,7 @@ export async function readPoursList(
       : null,
   ].filter((condition) => condition !== null);
   const { rows } = await tx.raw<{ rows: Row[] }>(
-    `select p.id, p.number, p.title, p.location, p.planned_at, p.planned_order::text as planned_key, p.plan_revision,
+    `select p.id, p.number, p.title, p.location, p.planned_at, p.plan_revision,
        ${stateNow} as state, coalesce(s.holds_total, 0) as holds_total, coalesce(s.holds_by_role, '{}') as holds_by_role,
        coalesce(s.not_met, 0) as not_met, coalesce(s.readings, 0) as readings,
        coalesce(s.points_read, 0) as points_read, coalesce(s.points_total, 0) as points_total,
@@ -131,6 +135,6 @@ export async function readPoursList(
       releaseNumber: row.release_number,
       validUntil: row.valid_until,
     })),
-    next: rows.length > limit && last ? writeCursor([last.planned_key, last.id]) : null,
+    next: rows.length > limit && last ? writeCursor([last.planned_at ?? UNPLANNED, last.id]) : null,
   };
 }
