@@ -62,9 +62,21 @@ export function proxy(request: NextRequest): NextResponse {
   const value = policy(`'self' 'nonce-${nonce}' 'strict-dynamic'${development}`);
   // Next.js takes the nonce for its own scripts from this request header.
   headers.set('Content-Security-Policy', value);
-  const response = NextResponse.next({ request: { headers } });
+  const response = readable(pathname)
+    ? NextResponse.next({ request: { headers } })
+    : NextResponse.rewrite(new URL('/missing', request.url), { request: { headers } });
   response.headers.set('Content-Security-Policy', value);
   return response;
+}
+
+/** An address whose percent signs spell nothing would be an error of the server instead of a page that is not there. */
+function readable(pathname: string): boolean {
+  try {
+    decodeURIComponent(pathname);
+    return true;
+  } catch {
+    return false;
+  }
 }
 
 /** Pages only: the API answers JSON and sets its own headers, and files need no policy. */
