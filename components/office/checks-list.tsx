@@ -4,6 +4,7 @@ import { checkGroupWords } from '@/lib/inspection/holds-work';
 import { checkGroups } from '@/lib/inspection/plan';
 import type { CheckState, Sheet } from '@/lib/inspection/sheet-types';
 import { personName } from './entry-words';
+import { Fold } from './fold';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
 
@@ -13,28 +14,34 @@ const answered: Record<'met' | 'not-met' | 'not-applicable', { mark: MarkKind; w
   'not-applicable': { mark: 'not-verified', word: 'not applicable' },
 };
 
-/** The checklist as it stands, by group; what each item rests on and who answered it. */
+/** Is there nothing more to see to: answered, and not against it? */
+const settled = (check: CheckState): boolean =>
+  check.governing !== null &&
+  !check.conflict &&
+  (check.governing.body.answer !== 'not-met' || check.acceptedBy !== null);
+
+/** The checklist as it stands, by group; groups in which nothing is left are folded away. */
 export function ChecksList({ sheet, viewer }: { sheet: Sheet; viewer: OfficeViewer }) {
   if (sheet.checks.length === 0) return <p className="text-pencil">The plan asks for no checks.</p>;
   return (
-    <div className="grid gap-x-8 gap-y-4 lg:grid-cols-2">
+    <div className="grid items-start gap-x-8 gap-y-2 lg:grid-cols-2">
       {checkGroups.map((group) => {
         const checks = sheet.checks.filter((check) => check.item.group === group);
         if (checks.length === 0) return null;
-        const done = checks.filter((check) => check.governing !== null).length;
+        const left = checks.filter((check) => !settled(check)).length;
         return (
-          <section key={group} aria-label={checkGroupWords[group]}>
-            <h3 className="flex items-baseline justify-between border-b border-ink pb-0.5 text-lead">
-              {checkGroupWords[group]}
-              <span className="font-figure text-label font-medium text-pencil">
-                {done} of {checks.length}
-              </span>
-            </h3>
-            <ul>
-              {checks.map((check) => (
-                <Check key={check.item.id} {...{ check, viewer }} />
-              ))}
-            </ul>
+          <section key={group} aria-label={checkGroupWords[group]} className="min-w-0">
+            <Fold
+              open={left > 0}
+              summary={checkGroupWords[group]}
+              aside={left > 0 ? `${left} of ${checks.length} to see to` : `all ${checks.length} answered`}
+            >
+              <ul>
+                {checks.map((check) => (
+                  <Check key={check.item.id} {...{ check, viewer }} />
+                ))}
+              </ul>
+            </Fold>
           </section>
         );
       })}
@@ -46,7 +53,10 @@ function Check({ check, viewer }: { check: CheckState; viewer: OfficeViewer }) {
   const answer = check.governing?.body ?? null;
   const shown = answer ? answered[answer.answer] : { mark: 'unread' as const, word: 'not answered' };
   return (
-    <li className="grid grid-cols-[auto_1fr] gap-x-2.5 border-b border-rule py-1.5">
+    <li
+      id={`check-${check.item.id}`}
+      className="grid scroll-mt-14 grid-cols-[auto_1fr] gap-x-2.5 border-b border-rule py-1.5 target:bg-paper"
+    >
       <MarkIcon kind={shown.mark} className="mt-0.5" />
       <div>
         <p>

@@ -24,7 +24,7 @@ export function ConditionsList({
       {conditions.map(({ condition, verified }) => (
         <li
           key={condition.id}
-          className="grid gap-x-3 border-b border-rule py-2 sm:grid-cols-[auto_1fr_auto]"
+          className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 sm:grid-cols-[auto_1fr_auto]"
         >
           <MarkIcon
             kind={verified ? (verified.body.outcome === 'met' ? 'met' : 'not-met-low') : 'unread'}
@@ -40,17 +40,19 @@ export function ConditionsList({
               {condition.dueAt && ` Due ${dayAndTime(condition.dueAt, viewer.timeZone)}.`}{' '}
               {verified
                 ? `${verified.body.outcome === 'met' ? 'Verified' : 'Found not met'} ${dayAndTime(verified.recordedAt, viewer.timeZone)}${verified.body.text ? `: ${verified.body.text}` : ''}.`
-                : 'Not verified yet.'}
+                : 'Not verified yet; the inspector verifies it.'}
             </p>
           </div>
           {verified?.body.outcome !== 'met' && mayRecord('condition-verified', viewer.role) && (
-            <RowAction
-              kind="verify"
-              id={condition.id}
-              pourId={pourId}
-              seenSeq={seenSeq}
-              about={condition.text}
-            />
+            <div className="col-start-2 -ml-pad sm:col-start-3">
+              <RowAction
+                kind="verify"
+                id={condition.id}
+                pourId={pourId}
+                seenSeq={seenSeq}
+                about={condition.text}
+              />
+            </div>
           )}
         </li>
       ))}

@@ -42,17 +42,6 @@ const whereOf = (values: ActionValues) => ({
   text: textIn(values, 'place'),
 });
 
-const outcomeField: ActionField = {
-  kind: 'select',
-  name: 'outcome',
-  label: 'Outcome',
-  options: [
-    { value: 'met', label: 'Met' },
-    { value: 'not-met', label: 'Not met' },
-  ],
-  placeholder: 'Choose',
-};
-
 const instantOf = (values: ActionValues, name: string, timeZone: string) =>
   instantFromField(textIn(values, name), timeZone) ?? textIn(values, name);
 
@@ -84,15 +73,6 @@ export const holdAction = (plan: Plan): EntryAction => ({
     need: textIn(values, 'need'),
     onBehalfOf: textIn(values, 'onBehalfOf'),
   }),
-});
-
-export const liftAction = (holdId: string): EntryAction => ({
-  type: 'hold-lifted',
-  label: 'Lift',
-  title: 'Lift this hold',
-  submit: 'Lift the hold',
-  fields: [{ kind: 'long', name: 'reason', label: 'Why it may be lifted' }],
-  toBody: (values) => ({ holdId, reason: textIn(values, 'reason') }),
 });
 
 export const noteAction = (plan: Plan): EntryAction => ({
@@ -164,34 +144,6 @@ export function correctionAction(holds: readonly Hold[], plan: Plan): EntryActio
     fieldOf: { about: 'holds' },
   };
 }
-
-export const queryAction = (entryId: string): EntryAction => ({
-  type: 'query',
-  label: 'Query',
-  title: 'Query this entry',
-  says: 'A query holds the pour until it is answered.',
-  submit: 'Send the query',
-  fields: [{ kind: 'long', name: 'text', label: 'What is not clear' }],
-  toBody: (values) => ({ entryId, text: textIn(values, 'text') }),
-});
-
-export const answerQueryAction = (queryId: string): EntryAction => ({
-  type: 'query-answered',
-  label: 'Answer',
-  title: 'Answer the query',
-  submit: 'Record the answer',
-  fields: [{ kind: 'long', name: 'text', label: 'Answer' }],
-  toBody: (values) => ({ queryId, text: textIn(values, 'text') }),
-});
-
-export const conditionAction = (conditionId: string): EntryAction => ({
-  type: 'condition-verified',
-  label: 'Verify',
-  title: 'Verify the condition',
-  submit: 'Record it',
-  fields: [outcomeField, { kind: 'long', name: 'text', label: 'What was seen', optional: true }],
-  toBody: (values) => ({ conditionId, outcome: textIn(values, 'outcome'), text: textIn(values, 'text') }),
-});
 
 /** The start or the end of placing; the time is the project's own. */
 export const placementAction = (

@@ -368,7 +368,12 @@ const replacementWords = (context: WordContext, body: BodyOf<'amendment'>): stri
   const root = context.entries.get(body.rootId);
   if (!root || body.replacement === null) return null;
   const parsed = bodies[root.type].safeParse(body.replacement);
-  return parsed.success ? `Now: ${wordsOf(root.type, parsed.data as never, context).title}` : null;
+  if (!parsed.success) return null;
+  const { title, lines } = wordsOf(root.type, parsed.data as never, context);
+  // Of what consists of words, the title says only the kind.
+  const words = root.type === 'note' || root.type === 'query' ? lines[0] : null;
+  const extent = root.type === 'nonconformance' ? lines.find((line) => line.startsWith('Extent: ')) : null;
+  return `Now: ${words ?? extent ?? title}`;
 };
 
 // The table is indexed by the very type whose body it is given; TypeScript cannot follow that through a union.

@@ -5,6 +5,8 @@ import { SheetFrame } from '@/components/ui/sheet-frame';
 import { formatLength } from '@/lib/concrete/length';
 import type { Element, Face, Requirement } from '@/lib/inspection/plan';
 import type { FaceState, PointState, Sheet } from '@/lib/inspection/sheet-types';
+import { Fold } from './fold';
+import { PointsToSee } from './points-to-see';
 import { ReadingsTable } from './readings-table';
 import { governingFor, readingMark, requirementWords } from './reading-words';
 import { RequirementTrail } from './requirement-trail';
@@ -31,6 +33,7 @@ export function FaceSheet({
   return (
     <SheetFrame
       id={`face-${face.id}`}
+      className="scroll-mt-14"
       heading={name}
       aside={`drawn ${state.drawnRead} of ${state.drawnTotal}, chosen ${state.chosenRead} of ${state.chosenTotal} read${state.spots.length ? `, ${state.spots.length} spot` : ''}`}
     >
@@ -60,9 +63,17 @@ export function FaceSheet({
         ))}
         <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,26rem)_minmax(0,1fr)]">
           <FacePlan face={face} state={state} name={name} units={units} />
-          <ReadingsTable {...{ sheet, name, people, timeZone }} face={state} />
+          <div className="grid gap-3 *:min-w-0">
+            <PointsToSee sheet={sheet} face={state} />
+            <MarkLegend kinds={[...new Set(all.map((point) => point.mark))]} />
+          </div>
         </div>
-        <MarkLegend kinds={[...new Set(all.map((point) => point.mark))]} />
+        <Fold
+          summary={`Every reading of ${name}`}
+          aside={`${all.length} ${all.length === 1 ? 'point' : 'points'}`}
+        >
+          <ReadingsTable {...{ sheet, name, people, timeZone }} face={state} />
+        </Fold>
       </div>
     </SheetFrame>
   );

@@ -1,9 +1,13 @@
 import { roleWords, roles, type Role } from '@/lib/inspection/roles';
 import type { Hold } from '@/lib/inspection/sheet-types';
 
-/** Holds grouped by who clears them, in the order of the roles; roles without holds are left out. */
-export function holdsByRole(holds: readonly Hold[]): { role: Role; holds: Hold[] }[] {
-  return roles
+/**
+ * Holds grouped by who clears them, in the order of the roles; roles without holds are left out.
+ * @param own the reader's role, whose holds come first
+ */
+export function holdsByRole(holds: readonly Hold[], own?: Role): { role: Role; holds: Hold[] }[] {
+  return [...roles]
+    .sort((a, b) => Number(b === own) - Number(a === own))
     .map((role) => ({ role, holds: holds.filter((hold) => hold.clearedBy === role) }))
     .filter((group) => group.holds.length > 0);
 }

@@ -1,12 +1,12 @@
 import { MarkIcon } from '@/components/drawings/mark';
 import type { MarkKind } from '@/components/drawings/mark-words';
-import { mayRecord } from '@/lib/inspection/entry-access';
 import { roleWords } from '@/lib/inspection/roles';
 import type { Hold, HoldKind, Sheet } from '@/lib/inspection/sheet-types';
+import { HoldAnswer } from './hold-answer';
+import { holdPlace } from './hold-place';
 import { holdsByRole } from './holds-by-role';
 import type { OfficeViewer } from './office-viewer';
 import { timeAway } from './project-time';
-import { RowAction } from './row-action';
 
 /** What is wrong is a square, what is decided or read again a ring with a bar, what is undone a cross. */
 const markOfHold: Partial<Record<HoldKind, MarkKind>> = {
@@ -24,7 +24,7 @@ const markOfHold: Partial<Record<HoldKind, MarkKind>> = {
   'condition-not-verified': 'met-flagged',
 };
 
-/** Every hold: what, where, who clears it, what is needed; grouped by who clears them. */
+/** Every hold: what, where, who clears it, what is needed; grouped by who clears them, the reader's own first. */
 export function HoldsList({
   sheet,
   holds,
@@ -41,34 +41,23 @@ export function HoldsList({
   }
   return (
     <div className="grid gap-4">
-      {holdsByRole(holds).map((group) => (
-        <section key={group.role} aria-label={`Cleared by ${roleWords[group.role].toLowerCase()}`}>
-          <h3 className="flex items-baseline justify-between border-b border-ink pb-0.5 text-lead">
-            {roleWords[group.role]}
-            <span className="font-figure text-label font-medium text-pencil">{group.holds.length}</span>
+      {holdsByRole(holds, viewer.role).map(({ role, holds: group }) => (
+        <section
+          key={role}
+          id={`holds-${role}`}
+          aria-label={`Cleared by ${roleWords[role].toLowerCase()}`}
+          className="scroll-mt-14"
+        >
+          <h3 className="flex items-baseline justify-between gap-4 border-b border-ink pb-0.5 text-lead">
+            <span>
+              {roleWords[role]}
+              {role === viewer.role && <span className="font-medium text-pencil">, for you to clear</span>}
+            </span>
+            <span className="font-figure text-label font-medium text-pencil">{group.length}</span>
           </h3>
           <ul>
-            {group.holds.map((hold) => (
-              <li
-                key={hold.id}
-                className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 lg:grid-cols-[auto_1fr_minmax(0,24rem)_7rem]"
-              >
-                <MarkIcon kind={markOfHold[hold.kind] ?? 'not-met-low'} className="mt-1" />
-                <div className="min-w-0">
-                  <p className="font-label text-lead font-semibold break-words">{hold.title}</p>
-                  <p className="text-pencil">
-                    {sentences(
-                      hold.where,
-                      hold.detail,
-                      hold.since && `Standing for ${timeAway(hold.since, viewer.now).replace(' ago', '')}`,
-                    )}
-                  </p>
-                </div>
-                <p className="col-start-2 lg:col-start-3">{hold.need}</p>
-                <div className="col-start-2 justify-self-start lg:col-start-4 lg:justify-self-end">
-                  <HoldAnswer {...{ sheet, hold, viewer }} />
-                </div>
-              </li>
+            {group.map((hold) => (
+              <HoldRow key={hold.id} {...{ sheet, hold, viewer }} />
             ))}
           </ul>
         </section>
@@ -77,35 +66,33 @@ export function HoldsList({
   );
 }
 
-const sentences = (...parts: (string | null)[]): string =>
-  parts.flatMap((part) => (part ? [/[.!?]$/.test(part) ? part : `${part}.`] : [])).join(' ');
-
-/** The one thing that can be done about a hold from here, where the person may do it. */
-function HoldAnswer({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: OfficeViewer }) {
-  const entryId = hold.subjects.find((subject) => subject.kind === 'entry')?.id;
-  const common = { pourId: sheet.pourId, seenSeq: sheet.headSeq, about: hold.title };
-  if (
-    hold.kind === 'manual' &&
-    entryId &&
-    hold.clearedBy === viewer.role &&
-    mayRecord('hold-lifted', viewer.role)
-  ) {
-    return <RowAction kind="lift" id={entryId} {...common} />;
-  }
-  if (hold.kind === 'query-open' && entryId && mayRecord('query-answered', viewer.role)) {
-    return <RowAction kind="answer-query" id={entryId} {...common} />;
-  }
-  const nonconformance = hold.subjects.find((subject) => subject.kind === 'nonconformance')?.id;
-  if (nonconformance) {
-    return (
-      <a
-        className="inline-flex min-h-6 items-center self-start font-label font-medium text-chalk underline underline-offset-4"
-        href={`/nonconformances/${nonconformance}`}
-        aria-label={`Open the decision sheet: ${hold.title}`}
-      >
-        Decision sheet
-      </a>
-    );
-  }
-  return null;
+function HoldRow({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: OfficeViewer }) {
+  const place = holdPlace(hold, sheet);
+  const standing = hold.since && `Standing for ${timeAway(hold.since, viewer.now).replace(' ago', '')}`;
+  return (
+    <li className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 xl:grid-cols-[auto_1fr_minmax(0,17rem)]">
+      <MarkIcon kind={markOfHold[hold.kind] ?? 'not-met-low'} className="mt-1" />
+      <div className="min-w-0">
+        <p className="font-label text-lead font-semibold break-words">{hold.title}</p>
+        <p className="text-pencil">
+          {place ? (
+            <a href={place} className="underline decoration-rule underline-offset-4 hover:text-chalk">
+              {sentence(hold.where)}
+            </a>
+          ) : (
+            sentence(hold.where)
+          )}{' '}
+          {[hold.detail, standing].map((part) => (part ? sentence(part) : '')).join(' ')}
+        </p>
+      </div>
+      <div className="col-start-2 xl:col-start-3">
+        <p>{hold.need}</p>
+        <div className="*:[button]:-ml-pad">
+          <HoldAnswer {...{ sheet, hold, viewer }} />
+        </div>
+      </div>
+    </li>
+  );
 }
+
+const sentence = (text: string): string => (/[.!?]$/.test(text) ? text : `${text}.`);

@@ -51,11 +51,10 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
       captionHidden
       empty="The plan asks for no measurements."
       columns={[
-        { key: 'what', head: 'What', className: 'min-w-48' },
-        { key: 'limit', head: 'Limits', figure: true },
-        { key: 'place', head: 'Place' },
+        { key: 'what', head: 'What, and its limits', className: 'min-w-40' },
         { key: 'value', head: 'Measured', figure: true },
-        { key: 'verdict', head: 'Verdict', className: 'min-w-48' },
+        { key: 'verdict', head: 'Verdict', className: 'min-w-40' },
+        { key: 'place', head: 'Place' },
         { key: 'by', head: 'By', className: 'whitespace-nowrap' },
       ]}
       rows={sheet.measurements.flatMap((state): RuledRow[] => {
@@ -64,12 +63,12 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
             <>
               {state.item.title}
               <span className="block text-label text-pencil">
+                {limitText(state.item, sheet.plan.units)}.{' '}
                 {new Set(state.places.map((one) => one.current?.place ?? one.entry.body.place)).size} of{' '}
                 {state.item.required} places{state.item.loaded ? ', before, under and after load' : ''}
               </span>
             </>
           ),
-          limit: limitText(state.item, sheet.plan.units),
         };
         if (state.places.length === 0) {
           return [
@@ -82,7 +81,7 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
         return state.places.map((place, index) => ({
           key: place.entry.id,
           cells: {
-            ...(index === 0 ? head : {}),
+            ...(index === 0 ? head : { what: <span className="sr-only">{state.item.title}</span> }),
             place: [
               place.entry.body.place || 'not named',
               place.entry.body.stage === 'single' ? '' : `${place.entry.body.stage} load`,

@@ -1,6 +1,7 @@
 import { formatLength } from '@/lib/concrete/length';
 import { revisionLetter, type Plan } from '@/lib/inspection/plan';
 import { personName } from './entry-words';
+import { Fold } from './fold';
 import type { OfficeViewer } from './office-viewer';
 import { fullTime } from './project-time';
 import { RuledTable } from './ruled-table';
@@ -43,51 +44,57 @@ export function PlanFacts({
         ))}
       </dl>
       {layers.length > 0 && (
+        <Fold summary="Layers" aside={`${layers.length}`}>
+          <RuledTable
+            caption="Layers"
+            captionHidden
+            columns={[
+              { key: 'element', head: 'Element' },
+              { key: 'layer', head: 'Layer' },
+              { key: 'face', head: 'From face' },
+              { key: 'order', head: 'Order', figure: true },
+              { key: 'bar', head: 'Bar', figure: true },
+              { key: 'spacing', head: 'Spacing or count', figure: true },
+              { key: 'direction', head: 'Direction' },
+            ]}
+            rows={layers.map(({ element, layer }) => ({
+              key: layer.id,
+              cells: {
+                element: element.mark,
+                layer: layer.name,
+                face: element.faces.find((face) => face.id === layer.faceId)?.name ?? '–',
+                order: layer.order,
+                bar: layer.barDesignation,
+                spacing: layer.spacingMm !== null ? show(layer.spacingMm) : (layer.count ?? '–'),
+                direction: layer.direction,
+              },
+            }))}
+          />
+        </Fold>
+      )}
+      <Fold summary="Revisions of the plan" aside={`${revisions.length}`}>
         <RuledTable
-          caption="Layers"
+          caption="Revisions of the plan"
+          captionHidden
           columns={[
-            { key: 'element', head: 'Element' },
-            { key: 'layer', head: 'Layer' },
-            { key: 'face', head: 'From face' },
-            { key: 'order', head: 'Order', figure: true },
-            { key: 'bar', head: 'Bar', figure: true },
-            { key: 'spacing', head: 'Spacing or count', figure: true },
-            { key: 'direction', head: 'Direction' },
+            { key: 'revision', head: 'Revision' },
+            { key: 'when', head: 'Issued', className: 'whitespace-nowrap' },
+            { key: 'by', head: 'By' },
+            { key: 'reason', head: 'Why', className: 'min-w-48' },
+            { key: 'digest', head: 'Digest', figure: true },
           ]}
-          rows={layers.map(({ element, layer }) => ({
-            key: layer.id,
+          rows={[...revisions].reverse().map((one) => ({
+            key: String(one.revision),
             cells: {
-              element: element.mark,
-              layer: layer.name,
-              face: element.faces.find((face) => face.id === layer.faceId)?.name ?? '–',
-              order: layer.order,
-              bar: layer.barDesignation,
-              spacing: layer.spacingMm !== null ? show(layer.spacingMm) : (layer.count ?? '–'),
-              direction: layer.direction,
+              revision: revisionLetter(one.revision),
+              when: fullTime(one.issuedAt, viewer.timeZone),
+              by: personName(one.authorId, viewer.people),
+              reason: one.reason,
+              digest: one.digest.slice(0, 12),
             },
           }))}
         />
-      )}
-      <RuledTable
-        caption="Revisions of the plan"
-        columns={[
-          { key: 'revision', head: 'Revision' },
-          { key: 'when', head: 'Issued', className: 'whitespace-nowrap' },
-          { key: 'by', head: 'By' },
-          { key: 'reason', head: 'Why', className: 'min-w-48' },
-          { key: 'digest', head: 'Digest', figure: true },
-        ]}
-        rows={[...revisions].reverse().map((one) => ({
-          key: String(one.revision),
-          cells: {
-            revision: revisionLetter(one.revision),
-            when: fullTime(one.issuedAt, viewer.timeZone),
-            by: personName(one.authorId, viewer.people),
-            reason: one.reason,
-            digest: one.digest.slice(0, 12),
-          },
-        }))}
-      />
+      </Fold>
     </div>
   );
 }

@@ -16,8 +16,12 @@ import {
   verbalInstructionAction,
 } from './entry-actions';
 import { EntryButton } from './entry-button';
+import { Fold } from './fold';
 
-/** What this person may record of the pour from here, one button each. */
+/** How many stand in sight; the rest is a press away, so that the holds are not pushed down by buttons. */
+const IN_SIGHT = 3;
+
+/** What this person may record of the pour from here, one button each, the likeliest first. */
 export function PourActions({
   plan,
   seenSeq,
@@ -35,28 +39,40 @@ export function PourActions({
   timeZone: string;
   placing: 'before' | 'started' | 'finished';
 }) {
+  const before = placing === 'before';
   const offered: (EntryAction | null)[] = [
-    correctionAction(holds, plan),
-    placing === 'before' ? inspectionAskedAction(now, timeZone) : null,
-    placing === 'before' ? releaseAskedAction(plan) : null,
-    holdAction(plan),
-    noteAction(plan),
-    verbalInstructionAction(),
-    placing === 'finished' ? null : siteEventAction(plan, now, timeZone),
-    placing === 'before' ? placementAction('started', plan, now, timeZone) : null,
     placing === 'started' ? placementAction('finished', plan, now, timeZone) : null,
+    before ? correctionAction(holds, plan) : null,
+    before ? inspectionAskedAction(now, timeZone) : null,
+    before ? releaseAskedAction(plan) : null,
+    before ? holdAction(plan) : null,
+    noteAction(plan),
+    placing === 'finished' ? null : siteEventAction(plan, now, timeZone),
+    before ? verbalInstructionAction() : null,
+    before ? placementAction('started', plan, now, timeZone) : null,
   ];
   const actions = offered.filter(
     (action): action is EntryAction => action !== null && mayRecord(action.type, role),
   );
   if (actions.length === 0) return null;
+  const buttons = (some: EntryAction[]) =>
+    some.map((action) => (
+      <li key={action.label}>
+        <EntryButton pourId={plan.pourId} seenSeq={seenSeq} action={action} />
+      </li>
+    ));
   return (
-    <ul aria-label="What you can record here" className="flex flex-wrap gap-2">
-      {actions.map((action) => (
-        <li key={action.label}>
-          <EntryButton pourId={plan.pourId} seenSeq={seenSeq} action={action} />
-        </li>
-      ))}
-    </ul>
+    <div className="grid gap-2 border-t border-ink pt-3 print:hidden">
+      <ul aria-label="What you can record here" className="flex flex-wrap gap-2">
+        {buttons(actions.slice(0, IN_SIGHT))}
+      </ul>
+      {actions.length > IN_SIGHT && (
+        <Fold summary="Record something else">
+          <ul aria-label="What else you can record here" className="flex flex-wrap gap-2">
+            {buttons(actions.slice(IN_SIGHT))}
+          </ul>
+        </Fold>
+      )}
+    </div>
   );
 }

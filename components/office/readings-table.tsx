@@ -42,7 +42,7 @@ export function ReadingsTable({
       columns={[
         { key: 'point', head: 'Point' },
         { key: 'cover', head: 'Cover', figure: true },
-        { key: 'verdict', head: 'Verdict', className: 'min-w-56' },
+        { key: 'verdict', head: 'Verdict', className: 'min-w-40' },
         { key: 'steel', head: 'To', className: 'whitespace-nowrap' },
         { key: 'measured', head: 'Measured', className: 'whitespace-nowrap' },
       ]}
@@ -61,9 +61,11 @@ const pointKind = (point: PointState): string =>
 
 function pointRows(point: PointState, context: TableContext): RuledRow[] {
   const label = (
-    <span className="font-label font-semibold whitespace-nowrap">
+    <span className="font-label font-semibold">
       {point.label}
-      {pointKind(point) && <span className="font-medium text-pencil"> {pointKind(point)}</span>}
+      {pointKind(point) && (
+        <span className="block text-label font-medium text-pencil">{pointKind(point)}</span>
+      )}
     </span>
   );
   if (point.readings.length === 0) {

@@ -22,6 +22,7 @@ export interface RecordLine {
   hash: string | null;
   wording: EntryWording;
   by: string;
+  authorId: string;
   role: Role;
   recordedAt: string;
   receivedAt: string | null;
@@ -29,7 +30,11 @@ export interface RecordLine {
   clockDoubtful: boolean;
   ofProject: boolean;
   amendments: AmendmentLine[];
+  /** The body as it stands now, whose words its author may correct from the office; null where it has none. */
+  correctable: { key: string; body: Json } | null;
 }
+
+type Json = NonNullable<EntryOf<'amendment'>['body']['replacement']>;
 
 const FIVE_MINUTES = 300_000;
 
@@ -67,6 +72,21 @@ const problemsOf = (sheet: Sheet): ReadonlyMap<string, string> => {
   );
 };
 
+/** Where the words of an entry stand in its body, for the kinds whose words are all there is to correct. */
+const wordsKey: Partial<Record<Entry['type'], string>> = {
+  note: 'text',
+  query: 'text',
+  nonconformance: 'extent',
+};
+
+function correctable(entry: Entry, amendments: readonly EntryOf<'amendment'>[]): RecordLine['correctable'] {
+  const key = wordsKey[entry.type];
+  if (!key) return null;
+  const latest = amendments.at(-1);
+  if (latest) return latest.body.replacement && { key, body: latest.body.replacement };
+  return { key, body: JSON.parse(JSON.stringify(entry.body)) as Json };
+}
+
 /** Every entry, oldest first, with what was said of it since; those not received yet come last. */
 export function recordLines(sheet: Sheet, context: WordContext): RecordLine[] {
   const problems = problemsOf(sheet);
@@ -84,6 +104,7 @@ export function recordLines(sheet: Sheet, context: WordContext): RecordLine[] {
       hash: entry.hash,
       wording: entryWords(entry, context),
       by: personName(entry.authorId, context.people),
+      authorId: entry.authorId,
       role: entry.authorRole,
       recordedAt: entry.recordedAt,
       receivedAt: entry.receivedAt,
@@ -101,6 +122,7 @@ export function recordLines(sheet: Sheet, context: WordContext): RecordLine[] {
             ?.slice(5) ?? null,
         problem: problems.get(amendment.id) ?? null,
       })),
+      correctable: correctable(entry, amendments.get(entry.id) ?? []),
     }));
 }
 

@@ -10,6 +10,7 @@ import { Notice } from '@/components/ui/notice';
 import { Textarea } from '@/components/ui/textarea';
 import { holdsInScope } from '@/lib/inspection/holds';
 import { roleWords } from '@/lib/inspection/roles';
+import { inScope } from '@/lib/inspection/scope';
 import type { Hold } from '@/lib/inspection/sheet-types';
 import { postJson, type Posted } from './post-json';
 import { ProblemNotice } from './problem-notice';
@@ -24,10 +25,16 @@ export function ReleaseForm({
   pourId,
   elements,
   holds,
+  standing,
+  endsEarly,
 }: {
   pourId: string;
   elements: { id: string; name: string }[];
   holds: Hold[];
+  /** Releases that stand now, by number and scope: no second one is given for what they cover. */
+  standing: { number: number; elementIds: string[] | null }[];
+  /** Where a release given now would end before placing is planned to start: that, in words. */
+  endsEarly: string | null;
 }) {
   const router = useRouter();
   const [chosen, setChosen] = useState<string[] | null>(null);
@@ -39,7 +46,8 @@ export function ReleaseForm({
 
   const partial = chosen !== null && chosen.length < elements.length;
   const scope = { elementIds: partial ? chosen : null, limits: partial ? limits.trim() : '' };
-  const standing = chosen?.length === 0 ? [] : holdsInScope(holds, scope);
+  const against = chosen?.length === 0 ? [] : holdsInScope(holds, scope);
+  const already = standing.find((one) => inScope(one.elementIds, scope));
   const incomplete = chosen?.length === 0 || (partial && limits.trim() === '');
 
   const ask = async () => {
@@ -143,9 +151,19 @@ export function ReleaseForm({
       )}
       {incomplete ? (
         <p className="text-pencil">Tick the elements and say where the release ends.</p>
-      ) : standing.length === 0 ? (
+      ) : already ? (
+        <p>
+          Release {already.number} stands for this scope already. A new one can be given once it is void or
+          its validity is over.
+        </p>
+      ) : against.length === 0 ? (
         <div className="grid gap-2">
           <p>No hold stands in this scope, at the points read and for the items checked.</p>
+          {endsEarly && (
+            <Notice tone="watch" role="note">
+              <p>{endsEarly}</p>
+            </Notice>
+          )}
           <div>
             <Button variant="primary" busy={busy} onClick={() => void ask()}>
               Give the release
@@ -156,10 +174,10 @@ export function ReleaseForm({
         <>
           <div role="status">
             <h3 className="text-lead">
-              {standing.length} {standing.length === 1 ? 'hold stands' : 'holds stand'} in this scope
+              {against.length} {against.length === 1 ? 'hold stands' : 'holds stand'} in this scope
             </h3>
             <ul>
-              {standing.map((hold) => (
+              {against.map((hold) => (
                 <li
                   key={hold.id}
                   className="grid gap-x-4 border-b border-rule py-1.5 sm:grid-cols-[1fr_auto]"

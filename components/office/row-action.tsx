@@ -1,7 +1,7 @@
 'use client';
 
 import type { ButtonVariant } from '@/components/ui/button-classes';
-import { answerQueryAction, conditionAction, liftAction, queryAction } from './entry-actions';
+import { answerQueryAction, conditionAction, liftAction, queryAction } from './row-actions';
 import { EntryButton } from './entry-button';
 
 /** What a row of a list can be answered with; ids only, so that a page drawn on the server can offer it. */

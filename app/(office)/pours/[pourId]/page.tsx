@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import { ChainState } from '@/components/office/chain-state';
 import { ChecksList } from '@/components/office/checks-list';
 import { ConditionsList } from '@/components/office/conditions-list';
 import { FaceSheet } from '@/components/office/face-sheet';
@@ -12,9 +13,11 @@ import { photoViews } from '@/components/office/photo-views';
 import { PhotoStrip } from '@/components/office/photo-zoom';
 import { PlanFacts } from '@/components/office/plan-facts';
 import { PourActions } from '@/components/office/pour-actions';
-import { firstOf, type SearchParams } from '@/components/office/pours-query';
+import { QueriesList } from '@/components/office/queries-list';
+import { peopleById, recordLines, wordContextOf } from '@/components/office/record-lines';
 import { RecordList } from '@/components/office/record-list';
-import { peopleById, wordContextOf } from '@/components/office/record-lines';
+import { recordPage } from '@/components/office/record-page';
+import { ReleaseStanding } from '@/components/office/release-standing';
 import { ReleasesPanel } from '@/components/office/releases-panel';
 import { RememberProject } from '@/components/office/remember-project';
 import { SheetNav } from '@/components/office/sheet-nav';
@@ -27,15 +30,12 @@ import { readPourPage } from './read-pour-page';
 
 export const metadata: Metadata = { title: 'Pour' };
 
-/** One pour: its title block, holds, readings drawn to scale, checks, photos, releases and the whole record. */
-export default async function PourPage({
-  params,
-  searchParams,
-}: {
-  params: Promise<{ pourId: string }>;
-  searchParams: Promise<SearchParams>;
-}) {
-  const whole = firstOf(await searchParams).record === 'whole';
+/** How much of the record stands here; the rest has a page of its own. */
+const LATEST = 6;
+const part = 'scroll-mt-14';
+
+/** One pour: first whether concrete may come and what holds it, then what was read, checked, decided and recorded. */
+export default async function PourPage({ params }: { params: Promise<{ pourId: string }> }) {
   const { header, sheet, holds, state, chain, viewer: read } = await readPourPage((await params).pourId);
   const viewer: OfficeViewer = {
     ...read,
@@ -45,6 +45,8 @@ export default async function PourPage({
   const context = wordContextOf(sheet, viewer.people, viewer.timeZone);
   const photos = photoViews(sheet, context);
   const placing = sheet.placing.finished ? 'finished' : sheet.placing.started ? 'started' : 'before';
+  const lines = recordLines(sheet, context);
+  const here = `/pours/${sheet.pourId}`;
   return (
     <PageMain>
       <RememberProject projectId={header.project.id} />
@@ -61,21 +63,35 @@ export default async function PourPage({
             timeZone={viewer.timeZone}
           />
         }
-      >
-        <div className="grid gap-3">
-          <SheetNav
-            items={[
-              { href: '#holds', label: 'Holds', count: holds.length },
-              { href: '#faces', label: 'Cover' },
-              { href: '#checks', label: 'Checks' },
-              { href: '#measurements', label: 'Measurements' },
-              { href: '#nonconformances', label: 'Nonconformances', count: sheet.nonconformances.length },
-              { href: '#photos', label: 'Photos', count: photos.length },
-              { href: '#release', label: 'Release' },
-              { href: '#record', label: 'Record', count: sheet.entries.length },
-            ]}
-          />
-          <div className="flex flex-wrap gap-2 print:hidden">
+      />
+      <SheetNav
+        items={[
+          { href: '#release', label: 'Release' },
+          { href: '#holds', label: 'Holds', count: holds.length },
+          { href: '#nonconformances', label: 'Nonconformances', count: sheet.nonconformances.length },
+          { href: '#faces', label: 'Cover' },
+          { href: '#checks', label: 'Checks' },
+          { href: '#measurements', label: 'Measurements' },
+          { href: '#photos', label: 'Photos', count: photos.length },
+          { href: '#signatures', label: 'Signatures', count: sheet.signatures.length },
+          { href: '#plan', label: 'Plan' },
+          { href: '#record', label: 'Record', count: lines.length },
+        ]}
+      />
+
+      <div className="grid items-start gap-6 *:min-w-0 lg:grid-cols-[21rem_minmax(0,1fr)]">
+        <SheetFrame id="release" heading="Release" className={`${part} lg:sticky lg:top-12`}>
+          <div className="grid gap-4">
+            <ReleaseStanding
+              {...{ sheet, holds, state, viewer }}
+              plannedAt={header.pour.plannedAt}
+              mayGive={allowed('release.give', viewer.role)}
+            />
+            <ReleasesPanel
+              {...{ sheet, viewer }}
+              releases={header.releases}
+              mayVoid={allowed('release.void', viewer.role)}
+            />
             <PourActions
               plan={sheet.plan}
               seenSeq={sheet.headSeq}
@@ -85,31 +101,45 @@ export default async function PourPage({
               timeZone={viewer.timeZone}
               placing={placing}
             />
-            {allowed('plan.revise', viewer.role) && placing === 'before' && (
-              <LinkButton href={`/pours/${sheet.pourId}/plan`}>Revise the plan</LinkButton>
-            )}
-            {allowed('pour.create', viewer.role) && (
-              <LinkButton href={`/pours/new?from=${sheet.pourId}`} variant="quiet">
-                Plan another like it
-              </LinkButton>
-            )}
           </div>
+        </SheetFrame>
+        <div className="grid gap-6 *:min-w-0">
+          <SheetFrame id="holds" heading="Holds" aside="by who clears them" className={part}>
+            <HoldsList {...{ sheet, holds, viewer }} />
+          </SheetFrame>
+          <SheetFrame id="nonconformances" heading="Nonconformances and decisions" className={part}>
+            <div className="grid gap-4">
+              <NonconformanceRows nonconformances={sheet.nonconformances} viewer={viewer} />
+              <div id="conditions" className={part}>
+                <h3 className="text-lead">Conditions</h3>
+                <ConditionsList
+                  conditions={sheet.conditions}
+                  pourId={sheet.pourId}
+                  seenSeq={sheet.headSeq}
+                  viewer={viewer}
+                />
+              </div>
+              {sheet.queries.length > 0 && (
+                <div id="queries" className={part}>
+                  <h3 className="text-lead">Queries</h3>
+                  <QueriesList {...{ sheet, context, viewer }} />
+                </div>
+              )}
+            </div>
+          </SheetFrame>
         </div>
-      </SheetFrame>
+      </div>
 
-      <SheetFrame id="holds" heading="Holds" aside="by who clears them">
-        <HoldsList {...{ sheet, holds, viewer }} />
-      </SheetFrame>
-
-      <div id="faces" className="grid gap-6 *:min-w-0">
+      <div id="faces" className={`grid gap-6 *:min-w-0 ${part}`}>
         {sheet.plan.elements.flatMap((element) =>
           element.faces.map((face) => {
-            const state = sheet.faces.find((one) => one.faceId === face.id);
+            const faceState = sheet.faces.find((one) => one.faceId === face.id);
             return (
-              state && (
+              faceState && (
                 <FaceSheet
                   key={face.id}
-                  {...{ sheet, element, face, state }}
+                  {...{ sheet, element, face }}
+                  state={faceState}
                   people={viewer.people}
                   timeZone={viewer.timeZone}
                 />
@@ -123,45 +153,51 @@ export default async function PourPage({
         id="checks"
         heading="Checks"
         aside={`${sheet.plan.checklist.template}, version ${sheet.plan.checklist.version}`}
+        className={part}
       >
         <ChecksList sheet={sheet} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame id="measurements" heading="Measurements">
+      <SheetFrame id="measurements" heading="Measurements" className={part}>
         <MeasurementsTable sheet={sheet} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame id="nonconformances" heading="Nonconformances and decisions">
-        <div className="grid gap-4">
-          <NonconformanceRows nonconformances={sheet.nonconformances} viewer={viewer} />
-          <div>
-            <h3 className="text-lead">Conditions</h3>
-            <ConditionsList
-              conditions={sheet.conditions}
-              pourId={sheet.pourId}
-              seenSeq={sheet.headSeq}
-              viewer={viewer}
-            />
-          </div>
-        </div>
-      </SheetFrame>
-      <SheetFrame id="photos" heading="Photos">
+      <SheetFrame id="photos" heading="Photos" className={part}>
         <PhotoStrip photos={photos} />
       </SheetFrame>
-      <SheetFrame id="release" heading="Signatures and release">
-        <div className="grid gap-6 lg:grid-cols-2">
-          <SignaturesPanel {...{ sheet, context, viewer }} />
-          <ReleasesPanel
-            {...{ sheet, holds, state, viewer }}
-            releases={header.releases}
-            mayGive={allowed('release.give', viewer.role)}
-            mayVoid={allowed('release.void', viewer.role)}
-          />
-        </div>
+      <SheetFrame id="signatures" heading="Signatures" aside="two different persons" className={part}>
+        <SignaturesPanel {...{ sheet, context, viewer }} />
       </SheetFrame>
-      <SheetFrame id="plan" heading="Plan">
+      <SheetFrame
+        id="plan"
+        heading="Plan"
+        className={part}
+        aside={
+          <span className="flex flex-wrap gap-2 print:hidden">
+            {allowed('plan.revise', viewer.role) && placing === 'before' && (
+              <LinkButton href={`${here}/plan`}>Revise the plan</LinkButton>
+            )}
+            {allowed('pour.create', viewer.role) && (
+              <LinkButton href={`/pours/new?from=${sheet.pourId}`} variant="quiet">
+                Plan another like it
+              </LinkButton>
+            )}
+          </span>
+        }
+      >
         <PlanFacts plan={sheet.plan} revisions={header.revisions} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame id="record" heading="The record" aside="newest first; nothing is ever taken out">
-        <RecordList {...{ sheet, chain, viewer, whole }} />
+      <SheetFrame
+        id="record"
+        heading="The record"
+        aside="the latest; nothing is ever taken out"
+        className={part}
+      >
+        <div className="grid gap-3">
+          <ChainState chain={chain} />
+          <RecordList {...{ sheet, viewer }} lines={recordPage(lines, {}, LATEST).lines} />
+          <div className="print:hidden">
+            <LinkButton href={`${here}/record`}>The whole record, {lines.length} entries</LinkButton>
+          </div>
+        </div>
       </SheetFrame>
     </PageMain>
   );

@@ -3,6 +3,7 @@ import { Caution } from '@/components/office/caution';
 import { LivePour } from '@/components/office/live-pour';
 import type { OfficeViewer } from '@/components/office/office-viewer';
 import { PageMain } from '@/components/office/page-main';
+import { dayAndTime } from '@/components/office/project-time';
 import { peopleById, wordContextOf } from '@/components/office/record-lines';
 import { ReleaseForm } from '@/components/office/release-form';
 import { ReleaseRests } from '@/components/office/release-rests';
@@ -11,6 +12,7 @@ import { RememberProject } from '@/components/office/remember-project';
 import { SignaturesPanel } from '@/components/office/signatures-panel';
 import { TitleOfPour } from '@/components/office/title-of-pour';
 import { SheetFrame } from '@/components/ui/sheet-frame';
+import { standingReleases } from '@/lib/inspection/pour-state';
 import { sheetStatement } from '@/lib/inspection/sheet-statement';
 import { allowed } from '@/lib/server/access';
 import { sha256 } from '@/lib/server/entry-hash';
@@ -30,6 +32,12 @@ export default async function ReleasePage({ params }: { params: Promise<{ pourId
   const { timeZone } = header.project;
   const viewer: OfficeViewer = { ...read, timeZone, people: peopleById(header.people) };
   const begun = sheet.placing.started !== null;
+  const validUntil = new Date(Date.parse(viewer.now) + sheet.plan.validityHours * 3_600_000).toISOString();
+  const { plannedAt } = header.pour;
+  const endsEarly =
+    plannedAt !== null && validUntil < plannedAt
+      ? `Given now, it would end ${dayAndTime(validUntil, timeZone)}, before placing is planned to start, ${dayAndTime(plannedAt, timeZone)}.`
+      : null;
   return (
     <PageMain>
       <RememberProject projectId={header.project.id} />
@@ -69,6 +77,11 @@ export default async function ReleasePage({ params }: { params: Promise<{ pourId
           <ReleaseForm
             pourId={sheet.pourId}
             holds={holds}
+            endsEarly={endsEarly}
+            standing={standingReleases(sheet, viewer.now).map(({ entry }) => ({
+              number: entry.body.number,
+              elementIds: entry.body.scope.elementIds,
+            }))}
             elements={sheet.plan.elements.map((element) => ({
               id: element.id,
               name: `${element.mark}, ${element.location}`,
@@ -79,9 +92,8 @@ export default async function ReleasePage({ params }: { params: Promise<{ pourId
       {header.releases.length > 0 && (
         <SheetFrame heading="Releases given">
           <ReleasesPanel
-            {...{ sheet, holds, state, viewer }}
+            {...{ sheet, viewer }}
             releases={header.releases}
-            mayGive={false}
             mayVoid={allowed('release.void', viewer.role)}
           />
         </SheetFrame>
