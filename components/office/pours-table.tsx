@@ -90,7 +90,7 @@ export function PoursTable({
         head('title', 'Element and location', { className: 'min-w-44' }),
         head('planned', 'Planned', { className: 'whitespace-nowrap' }),
         { key: 'plan', head: 'Plan' },
-        head('state', 'State', { className: 'min-w-28' }),
+        head('state', 'State', { className: 'min-w-32 max-sm:hidden' }),
         head('holds', 'Holds and who clears them', { className: 'min-w-48' }),
         head('read', 'Points read', { figure: true }),
         { key: 'notMet', head: 'Not met', figure: true },
@@ -112,12 +112,17 @@ export function PoursTable({
             <>
               {pour.title}
               <span className="block text-label text-pencil">{pour.location}</span>
+              {/* On a phone the column of states would lie outside the screen. */}
+              <span className="flex items-center gap-1.5 text-label sm:hidden">
+                <MarkIcon kind={pourStanding(pour).mark} />
+                {pourStateWords[pour.state]}
+              </span>
             </>
           ),
           planned: pour.plannedAt ? <Time instant={pour.plannedAt} timeZone={timeZone} /> : 'not planned',
           plan: pour.planRevision > 0 ? `rev ${revisionLetter(pour.planRevision)}` : 'missing',
           state: (
-            <span className="flex items-center gap-1.5">
+            <span className="flex items-start gap-1.5">
               <MarkIcon kind={pourStanding(pour).mark} />
               {pourStateWords[pour.state]}
               {pour.state === 'released' && pour.releaseNumber !== null && ` (${pour.releaseNumber})`}
