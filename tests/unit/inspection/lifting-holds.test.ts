@@ -7,7 +7,7 @@ import { foldSheet } from '@/lib/inspection/sheet';
 import { PourStory, smallPlan } from '../../stories/pour-story';
 
 const sheetOf = (story: PourStory) => foldSheet(smallPlan(), story.recorded);
-const entryOf = (story: PourStory, id: string) => story.recorded.find((entry) => entry.id === id)!;
+const entryOf = (story: PourStory, id: string) => sheetOf(story).entries.find((entry) => entry.id === id)!;
 const kinds = (story: PourStory) => holds(sheetOf(story), story.now).map((hold) => hold.kind);
 
 describe('a verbal instruction', () => {
