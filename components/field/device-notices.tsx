@@ -6,8 +6,9 @@ import { Notice } from '@/components/ui/notice';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { clockWords } from './sync-words';
+import { SignInLink } from './sign-in-link';
 import { useDevice, useSnapshot } from './use-device';
-import { LeaveLink } from './leave-link';
+import { entriesWords } from './waiting-words';
 
 /**
  * What the device has to tell whatever the screen: a new version, a session that ended, a wrong clock, lost entries.
@@ -15,12 +16,13 @@ import { LeaveLink } from './leave-link';
  */
 export function DeviceNotices({ quiet }: { quiet: boolean }) {
   const device = useDevice();
-  const { sync, updateReady, person } = useSnapshot();
+  const { sync, updateReady, person, people, pin } = useSnapshot();
   const clock = clockWords(sync.clockOffsetMs);
   const lost = sync.lostEntries ?? 0;
   const signIn = person !== null && sync.phase === 'sign-in-needed';
+  const choosePin = person !== null && people.length > 1 && !pin.set;
   if (quiet && lost === 0) return null;
-  if (!updateReady && !clock && lost === 0 && !signIn) return null;
+  if (!updateReady && !clock && lost === 0 && !signIn && !choosePin) return null;
   return (
     <div className="mx-auto grid w-full max-w-3xl gap-2 px-3 pt-3">
       {lost > 0 && (
@@ -49,14 +51,32 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
       {!quiet && signIn && (
         <Notice
           tone="watch"
-          title="Sign in to send"
+          title={
+            sync.waitingEntries > 0
+              ? `${entriesWords(sync.waitingEntries)} ${sync.waitingEntries === 1 ? 'waits' : 'wait'} for ${person.name} to sign in`
+              : 'Sign in to send'
+          }
+          actions={<SignInLink className={buttonClasses('primary')}>Sign in as {person.name}</SignInLink>}
+        >
+          <p>
+            {sync.signedInAs === null
+              ? 'Your session has ended. Everything you recorded is kept here, and you can go on.'
+              : `The server has ${sync.signedInAs}’s session, and nothing of yours is sent in it. Everything you recorded is kept here, and you can go on.`}
+          </p>
+        </Notice>
+      )}
+      {!quiet && choosePin && (
+        <Notice
+          title="Choose a PIN for this device"
           actions={
-            <LeaveLink href="/sign-in?next=/field" className={buttonClasses('primary')}>
-              Sign in
-            </LeaveLink>
+            <FieldLink href={fieldPaths.pin} className={buttonClasses('secondary')}>
+              Choose a PIN
+            </FieldLink>
           }
         >
-          <p>Your session has ended. Everything you recorded is kept here, and you can go on.</p>
+          <p>
+            Others use it too. With a PIN you open your work here without a network, and nobody else does.
+          </p>
         </Notice>
       )}
       {!quiet && clock && (

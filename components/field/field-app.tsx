@@ -9,11 +9,14 @@ import type { Device } from '@/lib/device/device-types';
 import { DeviceProvider } from './device-context';
 import { FieldLink, useFieldRoute } from './field-router';
 import { fieldPaths } from './field-routes';
+import { PeopleScreen } from './people-screen';
 import { PoursScreen } from './pours-screen';
 import { Screen } from './screen';
+import { useSnapshot } from './use-device';
 
 // The list of pours is what opens first; a pour's screens arrive in pieces of their own, which the worker keeps.
 const PourScreen = lazy(async () => ({ default: (await import('./pour-screen')).PourScreen }));
+const PinScreen = lazy(async () => ({ default: (await import('./pin-screen')).PinScreen }));
 const NotSentScreen = lazy(async () => ({ default: (await import('./not-sent-screen')).NotSentScreen }));
 
 let opened: Device | null = null;
@@ -48,6 +51,9 @@ function Opening() {
 
 function Screens() {
   const route = useFieldRoute();
+  const { asks, people } = useSnapshot();
+  // The address stays: who goes on here goes on where the last one was.
+  if (asks && people.some((one) => one.pin.state !== 'none')) return <PeopleScreen />;
   switch (route.screen) {
     case 'pours':
       return <PoursScreen />;
@@ -61,6 +67,12 @@ function Screens() {
       return (
         <Suspense fallback={<Opening />}>
           <NotSentScreen />
+        </Suspense>
+      );
+    case 'pin':
+      return (
+        <Suspense fallback={<Opening />}>
+          <PinScreen />
         </Suspense>
       );
     case 'unknown':

@@ -22,6 +22,7 @@ export type FieldRoute =
   | { screen: 'pours' }
   | { screen: 'pour'; pourId: string; route: PourRoute }
   | { screen: 'not-sent' }
+  | { screen: 'pin' }
   | { screen: 'unknown' };
 
 const subjectKinds: readonly SubjectRef['kind'][] = [
@@ -90,7 +91,7 @@ export function readRoute(path: string): FieldRoute {
   if (parts.some((part) => part === null) || parts[0] !== 'field') return { screen: 'unknown' };
   const [, screen, pourId, ...rest] = parts as string[];
   if (screen === undefined) return { screen: 'pours' };
-  if (screen === 'not-sent' && pourId === undefined) return { screen: 'not-sent' };
+  if ((screen === 'not-sent' || screen === 'pin') && pourId === undefined) return { screen };
   if (screen !== 'pours') return { screen: 'unknown' };
   if (pourId === undefined) return { screen: 'pours' };
   const route = readPourRoute(rest);
@@ -103,6 +104,7 @@ const join = (...parts: string[]) => `/${parts.map(encodeURIComponent).join('/')
 export const fieldPaths = {
   pours: '/field',
   notSent: '/field/not-sent',
+  pin: '/field/pin',
   pour: (pourId: string) => join('field', 'pours', pourId),
   /** With a point, that point is lit first. */
   face: (pourId: string, faceId: string, pointKey?: string) =>

@@ -14,11 +14,12 @@ import { saveBlob } from './save-blob';
 import { Screen } from './screen';
 import { SheetLines } from './sheet-line';
 import { WaitingPour } from './waiting-pour';
+import { OthersWaiting } from './others-waiting';
+import { SignInLink } from './sign-in-link';
 import { StorageLine } from './storage-line';
 import { bytesWords, notSentCount, syncWords } from './sync-words';
 import { useDevice, useSnapshot } from './use-device';
 import { useNow } from './use-now';
-import { LeaveLink } from './leave-link';
 
 /** What the server has not taken in: waiting, being sent, refused with the reason; photos; send now; save to a file. */
 export function NotSentScreen() {
@@ -89,12 +90,9 @@ export function NotSentScreen() {
             {sending ? 'Sending' : 'Send now'}
           </Button>
           {sync.phase === 'sign-in-needed' && (
-            <LeaveLink
-              href="/sign-in?next=/field"
-              className="flex min-h-target items-center justify-center font-label font-semibold text-chalk underline underline-offset-4"
-            >
+            <SignInLink className="flex min-h-target items-center justify-center font-label font-semibold text-chalk underline underline-offset-4">
               Sign in, then it is sent
-            </LeaveLink>
+            </SignInLink>
           )}
           {problem && <Notice tone="hold">{problem}</Notice>}
         </div>
@@ -128,6 +126,7 @@ export function NotSentScreen() {
             </p>
           )}
         </section>
+        <OthersWaiting />
         <StorageLine />
         <FieldLink
           href={fieldPaths.pours}

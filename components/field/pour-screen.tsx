@@ -10,6 +10,7 @@ import type { OpenSheet } from './open-sheet';
 import { PourSheet } from './pour-sheet';
 import { ReadingScreen } from './reading-screen';
 import { Screen } from './screen';
+import { SignInLink } from './sign-in-link';
 import { useOpenPour, useSnapshot } from './use-device';
 import { LeaveLink } from './leave-link';
 
@@ -40,18 +41,13 @@ const toPours = { href: fieldPaths.pours, words: 'pours' };
 
 /** One pour: reads it from the device, says so while it does, and shows the screen that the path names. */
 export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute }) {
-  const { person, pours, projects, sync } = useSnapshot();
+  const { person, pours, projects, sync, asks } = useSnapshot();
   const open = useOpenPour(pourId);
-  if (!person && sync.phase === 'idle') return <Opening title="Pour" />;
+  if (!person && sync.phase === 'idle' && !asks) return <Opening title="Pour" />;
   if (!person) {
     return (
       <Message title="Signed out" heading="Sign in to see this pour">
-        <LeaveLink
-          href={`/sign-in?next=${encodeURIComponent(fieldPaths.pour(pourId))}`}
-          className={buttonClasses('primary')}
-        >
-          Sign in
-        </LeaveLink>
+        <SignInLink className={buttonClasses('primary')}>Sign in</SignInLink>
       </Message>
     );
   }

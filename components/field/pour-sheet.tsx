@@ -8,6 +8,7 @@ import { fieldPaths } from './field-routes';
 import { dayAndTime, timeAway } from './field-time';
 import { LeftForYou } from './left-for-you';
 import type { OpenSheet } from './open-sheet';
+import { OthersOnPour } from './others-waiting';
 import { Screen } from './screen';
 import { CheckLines, FaceLines, MeasurementLines, NonconformanceLines, SiteLines } from './sheet-lines';
 import { pourStateTone } from './state-tone';
@@ -57,6 +58,7 @@ export function PourSheet({ open }: { open: OpenSheet }) {
         >
           <LeftForYou open={open} />
         </SheetFrame>
+        <OthersOnPour pourId={sheet.pourId} />
         <CheckLines open={open} />
         <FaceLines open={open} />
         <MeasurementLines open={open} />

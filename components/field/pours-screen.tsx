@@ -7,6 +7,8 @@ import { EmptyState } from '@/components/ui/empty-state';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
 import { buttonClasses } from '@/components/ui/button-classes';
 import type { DevicePour, DeviceSnapshot } from '@/lib/device/device-types';
+import { FieldLink } from './field-router';
+import { fieldPaths } from './field-routes';
 import { PourRow } from './pour-row';
 import { OthersWaiting } from './others-waiting';
 import { Screen } from './screen';
@@ -69,6 +71,9 @@ export function PoursScreen() {
             <LeaveLink href="/account" className={buttonClasses('quiet')}>
               Account
             </LeaveLink>
+            <FieldLink href={fieldPaths.pin} className={buttonClasses('quiet')}>
+              {snapshot.pin.set ? 'Change the PIN' : 'Choose a PIN'}
+            </FieldLink>
             <SignOut />
           </nav>
         </footer>
@@ -134,7 +139,7 @@ function LookingWho() {
 }
 
 function SignedOut({ snapshot }: { snapshot: DeviceSnapshot }) {
-  if (snapshot.sync.phase === 'idle') return <LookingWho />;
+  if (snapshot.sync.phase === 'idle' && !snapshot.asks) return <LookingWho />;
   const offline = snapshot.sync.phase === 'offline';
   return (
     <Screen title="Cagewright on site">

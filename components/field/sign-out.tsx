@@ -14,7 +14,8 @@ export function SignOut() {
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<string | null>(null);
   const waiting = notSentCount(sync);
-  if (!person || !device.signOut) return null;
+  // In another person's session there is none of one's own to end: handing over is enough.
+  if (!person || sync.signedInAs !== null) return null;
 
   const leave = async () => {
     setBusy(true);
@@ -23,11 +24,11 @@ export function SignOut() {
       // The session is the server's to end; without it the next person would be taken for this one.
       const { signOut } = await import('next-auth/react');
       await signOut({ redirect: false });
-      await device.signOut?.();
+      await device.handOver();
       window.location.reload();
     } catch {
       setProblem(
-        'There is no answer from the server, so the session could not be ended. Try again with a network.',
+        'There is no answer from the server, so the session could not be ended. Try again with a network, or hand over: that hides your work without one.',
       );
       setBusy(false);
     }
@@ -48,7 +49,8 @@ export function SignOut() {
         {waiting > 0 ? (
           <p>
             {waiting} not sent yet. It stays on this device, hidden from others and not encrypted, and is sent
-            when you sign in here again. Nobody else can send it for you.
+            when you sign in here again. Nobody else can send it for you. With a PIN you can go on working
+            here without a network.
           </p>
         ) : (
           <p>Everything is sent. Your pours stay on this device, hidden from others and not encrypted.</p>

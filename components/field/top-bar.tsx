@@ -4,6 +4,7 @@ import type { ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
+import { HandOver } from './hand-over';
 import { notSentCount, notSentWords, syncWords } from './sync-words';
 import { useSnapshot } from './use-device';
 
@@ -45,6 +46,7 @@ export function TopBar({
         </h1>
         {aside && <div className="truncate font-label text-label font-medium text-pencil">{aside}</div>}
       </div>
+      <HandOver />
       {person && (
         <FieldLink
           href={fieldPaths.notSent}

@@ -38,3 +38,11 @@ export async function readPersonSessions(
     .select<DeviceRow[]>('id', 'name', 'first_sent_at as firstSentAt', 'last_sent_at as lastSentAt');
   return { sessions, devices };
 }
+
+/** When a session was begun; undefined when there is no such session. */
+export async function readSessionStart(tx: Tx, sessionId: string): Promise<string | undefined> {
+  const row = await tx('sessions')
+    .where({ id: sessionId })
+    .first<{ createdAt: string } | undefined>('created_at as createdAt');
+  return row?.createdAt;
+}

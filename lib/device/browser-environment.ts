@@ -27,6 +27,8 @@ export function browserEnvironment(): DeviceEnvironment {
       read: (name) => cookies()[name] ?? null,
       write: writeCookie,
     },
+    tabNote,
+    crypto: globalThis.crypto,
     after: (milliseconds, run) => {
       const timer = setTimeout(run, milliseconds);
       return () => clearTimeout(timer);
@@ -47,6 +49,26 @@ function channel(name: string, heard: (message: { streams: string[]; send?: bool
   open.onmessage = (event: MessageEvent<{ streams: string[]; send?: boolean }>) => heard(event.data);
   return { post: (message) => open.postMessage(message), close: () => open.close() };
 }
+
+const TAB_NOTE = 'cagewright.open';
+
+/** A browser that keeps nothing for a tab asks once more who is holding the device. */
+const tabNote: DeviceEnvironment['tabNote'] = {
+  read: () => {
+    try {
+      return sessionStorage.getItem(TAB_NOTE);
+    } catch {
+      return null;
+    }
+  },
+  write: (personId) => {
+    try {
+      sessionStorage.setItem(TAB_NOTE, personId);
+    } catch {
+      // Full, or forbidden: it asks.
+    }
+  },
+};
 
 function cookies(): Record<string, string> {
   return Object.fromEntries(

@@ -1,22 +1,19 @@
 import { z } from 'zod';
-import { readEntry, type BodyOf, type Entry } from '@/lib/inspection/entry';
+import { readEntry, type Entry } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { deviceIndex } from '@/lib/inspection/wire';
 import { browserEnvironment } from './browser-environment';
 import type { DeviceEnvironment } from './device-environment';
-import {
-  DeviceError,
-  type Device,
-  type DevicePerson,
-  type DeviceSnapshot,
-  type OpenPour,
-} from './device-types';
+import type { Device, DeviceSnapshot } from './device-types';
 import { exportUnsent } from './export-unsent';
-import { PersonWork } from './person-work';
+import { OpenedPours } from './opened-pours';
+import { DeviceHolder } from './people/device-holder';
+import type { PersonWork } from './person-work';
+import { DevicePhotos } from './photos/device-photos';
 import { PhotoLane } from './photos/photo-lane';
-import { emptySnapshot, pourOf, projectOf, snapshotOf } from './snapshot-of';
+import { emptySnapshot, snapshotOf } from './snapshot-of';
 import { markName, personsMarked, readMark } from './store/high-water-mark';
-import { openSettingsStore, type PersonHere, type SettingsStore } from './store/settings-store';
+import { openSettingsStore, type SettingsStore } from './store/settings-store';
 import { askServer } from './sync/ask-server';
 import { SyncLane, type LaneState } from './sync/sync-lane';
 
@@ -26,10 +23,12 @@ export interface RunningDevice extends Device {
 }
 
 const anything = z.object({}).loose();
+/** Whoever has just signed in is told by the server; so long is waited before the device asks who is holding it. */
+const ASK_AFTER_MS = 1_500;
 
 /**
- * The phone's side: opens the work of whoever used this device last, at once and without a network, and then asks the
- * server who is signed in. Only in a browser, never while a page is rendered.
+ * The phone's side: opens the work of whoever holds this device, at once and without a network, or asks who that is;
+ * and then asks the server whose session it has. Only in a browser, never while a page is rendered.
  * @param env another world than this browser, in tests
  */
 export function createDevice(env: DeviceEnvironment = browserEnvironment()): RunningDevice {
@@ -38,15 +37,13 @@ export function createDevice(env: DeviceEnvironment = browserEnvironment()): Run
 
 class FieldDevice {
   #settings: SettingsStore | null = null;
-  #deviceId = '';
-  #people: PersonHere[] = [];
-  #work: PersonWork | null = null;
   #snapshot: DeviceSnapshot = emptySnapshot;
-  #opened = new Map<string, { version: number; open: OpenPour }>();
   #version = 0;
   #refreshing: Promise<void> | null = null;
+  /** Nobody's work opened by itself, and the server had its chance to say who has just signed in. */
+  #asks = false;
   /** Why it is not known who is signed in; shown while nobody's work is open. */
-  #noAnswer: LaneState = { phase: 'idle', message: null };
+  #noAnswer: LaneState = { phase: 'idle', message: null, signedInAs: null };
   #listeners = new Set<() => void>();
   #storage: DeviceSnapshot['storage'] = emptySnapshot.storage;
   #updateReady = false;
@@ -54,19 +51,38 @@ class FieldDevice {
   #telling = false;
   #askedToKeep = false;
   #closed = false;
-  readonly #urls = new Map<string, string>();
+  readonly #holder: DeviceHolder;
+  readonly #pours = new OpenedPours();
+  readonly #photos: DevicePhotos;
   readonly #lane: SyncLane;
   readonly #photoLane: PhotoLane;
   readonly #stopWaking: () => void;
   readonly #ready: Promise<void>;
 
   constructor(private readonly env: DeviceEnvironment) {
+    this.#photos = new DevicePhotos(env);
+    this.#holder = new DeviceHolder(env, {
+      changed: () => this.#changed(),
+      wantsSending: () => {
+        this.#lane.soon();
+        env.askForBackgroundSync();
+      },
+      personChanged: () => {
+        this.#pours.forget();
+        this.#lane.personChanged();
+      },
+      followed: () => this.#refreshPerson(),
+    });
     this.#lane = new SyncLane(env, {
-      work: () => this.#work,
+      work: () => this.#holder.work,
       changed: () => this.#changed(),
       wentThrough: () => void this.#photoLane.run(),
     });
-    this.#photoLane = new PhotoLane(env, { work: () => this.#work, sentOne: () => this.#lane.soon() });
+    this.#photoLane = new PhotoLane(env, {
+      work: () => this.#holder.work,
+      ownSession: (work) => this.#lane.ownSession(work),
+      sentOne: () => this.#lane.soon(),
+    });
     this.#stopWaking = env.onWake(() => this.#lane.wake());
     env.updates?.onReady(() => {
       this.#updateReady = true;
@@ -82,20 +98,31 @@ class FieldDevice {
         this.#listeners.add(listener);
         return () => this.#listeners.delete(listener);
       },
-      pour: (pourId) => this.#pour(pourId),
+      pour: (pourId) =>
+        this.#holder.work
+          ? this.#pours.get(this.#holder.work, pourId, {
+              version: this.#version,
+              now: this.env.now(),
+              read: () => this.#changed(),
+            })
+          : undefined,
       keepPour: (pourId) => this.#choose(pourId, true),
       dropPour: (pourId) => this.#choose(pourId, false),
       record: async (at, type, body) => {
         const work = await this.#openWork();
         return this.#recorded(await work.record(at, type, body));
       },
-      addPhoto: (at, file, photo) => this.#addPhoto(at, file, photo),
-      photoAddress: (photoId) => this.#photoAddress(photoId),
+      addPhoto: async (at, file, photo) => {
+        const recorded = await this.#photos.add(await this.#openWork(), at, file, photo);
+        void this.#measureStorage();
+        return this.#recorded(recorded);
+      },
+      photoAddress: async (photoId) => this.#photos.address(await this.#openWork(), photoId),
       forgetPhoto: async (photoId) => (await this.#openWork()).forgetPhoto(photoId),
       forgetRefused: async (entryId) => (await this.#openWork()).forgetRefused(entryId),
       acknowledgeLost: async () => {
         this.#lostBefore = null;
-        await this.#work?.loss.acknowledge();
+        await this.#holder.work?.loss.acknowledge();
         this.#changed();
       },
       syncNow: async () => {
@@ -109,7 +136,20 @@ class FieldDevice {
         await this.#ready;
         await this.#refreshPerson();
       },
-      signOut: () => this.#signOut(),
+      handOver: async () => {
+        await this.#ready;
+        await this.#holder.handOver();
+      },
+      openPerson: async (personId, pin) => {
+        await this.#ready;
+        const answer = await this.#holder.openPerson(personId, pin);
+        if (answer.ok) void this.#refreshPerson();
+        return answer;
+      },
+      setPin: async (pin, current) => {
+        await this.#ready;
+        return this.#holder.setPin(pin, current);
+      },
       applyUpdate: () => this.env.updates?.apply(),
       close: () => this.#close(),
     };
@@ -122,22 +162,25 @@ class FieldDevice {
     const marks = marked.map((id) => readMark(this.env.marks.read(markName(id))));
     const known = await settings.read('deviceId');
     // An emptied store has forgotten its id; the cookie has not, and order on this device hangs on it.
-    this.#deviceId = known ?? marks.find((mark) => mark)?.deviceId ?? this.env.newId();
+    const deviceId = known ?? marks.find((mark) => mark)?.deviceId ?? this.env.newId();
     if (!known) {
-      await settings.write('deviceId', this.#deviceId);
+      await settings.write('deviceId', deviceId);
       const lost = marks.reduce((sum, mark) => sum + (mark?.unsent ?? 0), 0);
       this.#lostBefore = lost > 0 ? lost : null;
     }
-    this.#people = (await settings.read('people')) ?? [];
-    const personId = await settings.read('personId');
-    const person = this.#people.find((one) => one.id === personId);
-    if (person) await this.#open(person);
+    await this.#holder.start(settings, deviceId);
+    if (!this.#holder.work) this.env.after(ASK_AFTER_MS, () => this.#ask());
     this.#changed();
     void this.#measureStorage();
     void this.#refreshPerson();
   }
 
-  /** Asks the server whose session this is, and opens that person's work. Without an answer the open one stays. */
+  #ask(): void {
+    this.#asks = true;
+    this.#changed();
+  }
+
+  /** Asks the server whose session it has. A session begun since opens that person's work; else the open one stays. */
   #refreshPerson(): Promise<void> {
     this.#refreshing ??= this.#askWhoIsHere().finally(() => {
       this.#refreshing = null;
@@ -153,57 +196,26 @@ class FieldDevice {
     );
     if (this.#closed) return;
     if (answer.kind === 'answered') {
-      const { person } = answer.data;
-      if (this.#work?.person.id !== person.id) await this.#open(person);
+      const { data, clockOffsetMs } = answer;
+      await this.#holder.heard(data);
       this.#lostBefore = null;
-      await this.#work?.setIndex(answer.data);
-      await this.#work?.setClockOffset(answer.clockOffsetMs);
-      this.#lane.heardWhoIsHere();
-    } else {
-      this.#noAnswer = { phase: answer.phase, message: answer.sentence };
-      this.#changed();
-    }
-    await this.#lane.run();
-  }
-
-  async #open(person: DevicePerson): Promise<void> {
-    const before = this.#work;
-    let opened: PersonWork | null = null;
-    const work = await PersonWork.open(this.env, person, this.#deviceId, (wantsSending) => {
-      if (opened === null || this.#work !== opened) return;
-      if (wantsSending) {
-        this.#lane.soon();
-        this.env.askForBackgroundSync();
+      this.#noAnswer = { phase: 'idle', message: null, signedInAs: null };
+      const { work } = this.#holder;
+      if (work?.person.id === data.person.id) {
+        await work.setIndex(data);
+        await work.setClockOffset(clockOffsetMs);
+        this.#lane.heardWhoIsHere(data.person.id);
       }
-      this.#changed();
-    });
-    opened = work;
-    if (this.#closed) return work.close();
-    this.#work = work;
-    this.#opened = new Map();
-    before?.close();
-    this.#lane.personChanged();
-    await this.#remember(person);
-    this.#changed();
-  }
-
-  async #remember(person: DevicePerson): Promise<void> {
-    const others = this.#people.filter((one) => one.id !== person.id);
-    const { id, name, email } = person;
-    this.#people = [...others, { id, name, email, waiting: this.#waiting() }];
-    await this.#settings?.write('people', this.#people);
-    await this.#settings?.write('personId', id);
-  }
-
-  #waiting(): number {
-    return (this.#work?.outbox.size ?? 0) + (this.#work?.refused.size ?? 0);
+    } else {
+      this.#noAnswer = { phase: answer.phase, message: answer.sentence, signedInAs: null };
+    }
+    this.#ask();
+    await this.#lane.run();
   }
 
   async #openWork(): Promise<PersonWork> {
     await this.#ready;
-    if (!this.#work)
-      throw new DeviceError('signed-out', 'Nobody is signed in on this device. Sign in first.');
-    return this.#work;
+    return this.#holder.need();
   }
 
   /** Screens are told once for everything that changed in one go. */
@@ -216,65 +228,32 @@ class FieldDevice {
       this.#version += 1;
       this.#snapshot = this.#currentSnapshot();
       this.#listeners.forEach((tell) => tell());
-      void this.#noteWaiting();
+      void this.#holder.noteWaiting();
     });
   }
 
   #currentSnapshot(): DeviceSnapshot {
-    const others = this.#people.filter((one) => one.id !== this.#work?.person.id && one.waiting > 0);
+    const { work } = this.#holder;
+    const shown = this.#holder.shown();
     const common = {
+      ...shown,
       storage: this.#storage,
       updateReady: this.#updateReady,
-      others: others.map(({ id, name, waiting }) => ({ id, name, waiting })),
+      asks: !work && this.#asks && shown.people.length > 0,
     };
-    if (!this.#work) {
+    if (!work) {
       return {
         ...emptySnapshot,
         ...common,
         sync: { ...emptySnapshot.sync, ...this.#noAnswer, lostEntries: this.#lostBefore },
       };
     }
-    return { ...snapshotOf(this.#work, this.#lane.state, this.env.now()), ...common };
-  }
-
-  /** The next person at this device is shown whose work waits. */
-  async #noteWaiting(): Promise<void> {
-    const here = this.#people.find((one) => one.id === this.#work?.person.id);
-    const waiting = this.#waiting();
-    if (!here || here.waiting === waiting) return;
-    this.#people = this.#people.map((one) => (one === here ? { ...here, waiting } : one));
-    await this.#settings?.write('people', this.#people).catch(() => undefined);
-  }
-
-  #pour(pourId: string): OpenPour | undefined {
-    const work = this.#work;
-    const project = work?.projectOf(pourId);
-    if (!work || !project) return undefined;
-    const folded = work.memory.folded(pourId, this.env.now());
-    if (!folded) {
-      void work.openPour(pourId, project.id).then(
-        () => this.#changed(),
-        () => undefined,
-      );
-      return undefined;
-    }
-    const known = this.#opened.get(pourId);
-    const sameSheet = known?.open.sheet === folded.sheet && known.open.holds === folded.holds;
-    if (known && sameSheet && known.version === this.#version) return known.open;
-    const pour = pourOf(work, project.id, pourId, this.env.now());
-    if (!pour) return undefined;
-    const open: OpenPour = { pour, project: projectOf(project), ...folded };
-    const same =
-      known &&
-      sameSheet &&
-      JSON.stringify([known.open.pour, known.open.project]) === JSON.stringify([pour, open.project]);
-    this.#opened.set(pourId, { version: this.#version, open: same ? known.open : open });
-    return same ? known.open : open;
+    return { ...snapshotOf(work, this.#lane.state, this.env.now()), ...common };
   }
 
   async #choose(pourId: string, keep: boolean): Promise<void> {
     const work = await this.#openWork();
-    this.#opened.delete(pourId);
+    this.#pours.forget(pourId);
     await work.choose(pourId, keep);
     if (keep) void this.#lane.run();
   }
@@ -292,55 +271,13 @@ class FieldDevice {
     return read.entry;
   }
 
-  async #addPhoto(...[at, file, photo]: Parameters<Device['addPhoto']>): Promise<Entry> {
-    const work = await this.#openWork();
-    const prepared = await this.env.preparePhoto(file);
-    const now = this.env.now();
-    const shotAt = file instanceof File && file.lastModified > 0 ? Math.min(file.lastModified, now) : now;
-    const photoId = this.env.newId();
-    const entryId = this.env.newId();
-    const body: BodyOf<'photo'> = {
-      photoId,
-      sha256: prepared.sha256,
-      bytes: prepared.bytes.byteLength,
-      contentType: prepared.contentType,
-      takenAt: new Date(shotAt).toISOString(),
-      ...photo,
-    };
-    const recorded = await work.record(at, 'photo', body, {
-      record: { ...body, ...at, entryId, progress: 'waiting', problem: null, sentAt: null, refusals: [] },
-      bytes: prepared.bytes,
-    });
-    void this.#measureStorage();
-    return this.#recorded(recorded);
-  }
-
-  async #photoAddress(photoId: string): Promise<string | null> {
-    const known = this.#urls.get(photoId);
-    if (known) return known;
-    const work = await this.#openWork();
-    const stored = await work.db.get('photoBytes', photoId);
-    if (stored) {
-      const type = work.photos.get(photoId)?.contentType ?? 'image/jpeg';
-      const url = this.env.photoUrl(stored.bytes, type);
-      this.#urls.set(photoId, url);
-      return url;
-    }
-    const answer = await askServer(
-      this.env,
-      { method: 'GET', path: `/api/photos/${photoId}/address` },
-      z.object({ url: z.string() }),
-    );
-    return answer.kind === 'answered' ? answer.data.url : null;
-  }
-
   async #confirm(
     signatureId: string,
     password: string,
   ): Promise<{ ok: true } | { ok: false; sentence: string }> {
     const work = await this.#openWork();
-    if (work.outbox.has(signatureId)) await this.#lane.run();
-    if (work.outbox.has(signatureId)) {
+    if (work.outbox.has(signatureId) || !(await this.#lane.ownSession(work))) await this.#lane.run();
+    if (work.outbox.has(signatureId) || this.#lane.state.signedInAs !== null) {
       const why = this.#lane.state.message ?? 'There is no connection to the server.';
       return { ok: false, sentence: `The signature has not been sent yet. ${why}` };
     }
@@ -354,17 +291,6 @@ class FieldDevice {
     return { ok: true };
   }
 
-  async #signOut(): Promise<void> {
-    await this.#ready;
-    const work = this.#work;
-    this.#work = null;
-    this.#opened = new Map();
-    await this.#settings?.write('personId', null);
-    work?.close();
-    this.#lane.personChanged();
-    this.#changed();
-  }
-
   async #measureStorage(): Promise<void> {
     this.#storage = await this.env.storage.estimate().catch(() => this.#storage);
     this.#changed();
@@ -376,7 +302,7 @@ class FieldDevice {
     this.#lane.stop();
     this.#photoLane.stop();
     await this.#ready.catch(() => undefined);
-    this.#work?.close();
+    this.#holder.close();
     this.#settings?.close();
   }
 }

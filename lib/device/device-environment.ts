@@ -33,6 +33,10 @@ export interface DeviceEnvironment {
     read(name: string): string | null;
     write(name: string, value: string): void;
   };
+  /** What this tab keeps to itself, through a reload but not through being closed: whose work it had open. */
+  tabNote: { read(): string | null; write(personId: string): void };
+  /** For the hash of a PIN. A browser has no `subtle` under an address that is not secure. */
+  crypto: Pick<Crypto, 'getRandomValues' | 'subtle'>;
   /** Calls back once after that many milliseconds; returns what stops it. */
   after(milliseconds: number, run: () => void): () => void;
   /** Calls back whenever it is worth trying at once: network back, tab in sight again, Background Sync. */

@@ -3,6 +3,8 @@ import type { SubjectRef, siteBodies, projectBodies } from '@/lib/inspection/ent
 import type { Role } from '@/lib/inspection/roles';
 import type { Hold, PourState, Sheet } from '@/lib/inspection/sheet-types';
 import type { refusalCodes } from '@/lib/inspection/wire';
+import type { PinStanding } from './people/pin-guard';
+import type { WaitingHere } from './store/settings-store';
 
 /** Types that a device may queue. */
 export type DeviceEntryType = keyof typeof siteBodies | keyof typeof projectBodies;
@@ -12,6 +14,25 @@ export interface DevicePerson {
   name: string;
   email: string;
 }
+
+/** Somebody who has signed in on this device: what of theirs waits, and how their PIN stands. */
+export interface PersonOnDevice {
+  id: string;
+  name: string;
+  waiting: WaitingHere;
+  pin: PinStanding;
+}
+
+/** What became of a PIN: taken, or why not, in a sentence. */
+export type PinAnswer =
+  | { ok: true }
+  | {
+      ok: false;
+      reason: 'wrong' | 'wait' | 'closed' | 'no-pin' | 'unfit';
+      sentence: string;
+      /** No try is taken before this time of the device's clock, ms. */
+      waitUntil: number | null;
+    };
 
 /** A project of the person, as last heard from the server. */
 export interface DeviceProject {
@@ -55,6 +76,8 @@ export interface SyncState {
   clockOffsetMs: number | null;
   /** Entries made here that the store no longer holds and the server never confirmed (evicted); null: none known. */
   lostEntries: number | null;
+  /** Whose session the server has, where it is another person's: then nothing of this person's is sent. */
+  signedInAs: string | null;
 }
 
 export interface RefusedEntry {
@@ -97,8 +120,12 @@ export interface DeviceSnapshot {
   storage: { usedBytes: number | null; quotaBytes: number | null; persisted: boolean | null };
   /** A new version of the application waits to take over. */
   updateReady: boolean;
-  /** Others who have signed in on this device and whose work waits here for them. */
-  others?: { id: string; name: string; waiting: number }[];
+  /** Everybody who has signed in on this device, latest first; the person whose work is open among them. */
+  people: PersonOnDevice[];
+  /** Nobody's work is open, and the device asks who is holding it. */
+  asks: boolean;
+  /** The open person's PIN on this device: is there one, and must it be given to choose another? */
+  pin: { set: boolean; needsCurrent: boolean };
 }
 
 /** The phone's side, as components/field uses it. Every promise of `record` resolves only once the entry is on disk. */
@@ -140,8 +167,15 @@ export interface Device {
   ): Promise<{ ok: true } | { ok: false; sentence: string }>;
   /** Signs in as somebody else's session ended or began: re-reads who is signed in. */
   refreshPerson(): Promise<void>;
-  /** Closes this person's work on the device. Whatever waits stays, hidden, until they sign in again. */
-  signOut?(): Promise<void>;
+  /**
+   * Closes this person's work on the device: it is handed over, or signed out of. Whatever waits stays, hidden, until
+   * they open it again.
+   */
+  handOver(): Promise<void>;
+  /** Opens the work of somebody who has signed in here before, without a network. */
+  openPerson(personId: string, pin: string): Promise<PinAnswer>;
+  /** Chooses the open person's PIN on this device. `current` is the one so far, where it is asked for. */
+  setPin(pin: string, current: string | null): Promise<PinAnswer>;
   /** The person has read that entries were lost with a cleared store. */
   acknowledgeLost?(): Promise<void>;
   applyUpdate(): void;

@@ -19,6 +19,7 @@ import {
   type PhotoRecord,
   type RefusedRecord,
 } from './store/person-database';
+import type { WaitingHere } from './store/settings-store';
 import { settleOutcomes, type Settled } from './store/settle-outcomes';
 import { restartStream, storePage, type StreamPage } from './store/store-page';
 import { setRoomAside, writeEntry, type PhotoToStore } from './store/write-entry';
@@ -111,6 +112,28 @@ export class PersonWork {
     this.planRevisions.clear();
     for (const cursor of cursors) this.planRevisions.set(cursor.stream, cursor.planRevision);
     await this.loss.read();
+  }
+
+  /** How much waits here, and how old it is: what others on this device are told. */
+  waiting(): WaitingHere {
+    const refused = [...this.refused.values()];
+    const photos = [...this.photos.values()].filter(
+      (photo) => photo.progress !== 'stored' && photo.progress !== 'refused',
+    );
+    const pours: Record<string, number> = {};
+    for (const { stream } of this.outbox.values()) pours[stream] = (pours[stream] ?? 0) + 1;
+    for (const { envelope } of refused) pours[streamOf(envelope)] = (pours[streamOf(envelope)] ?? 0) + 1;
+    const times = [
+      ...[...this.outbox.values()].map((one) => one.recordedAt),
+      ...refused.map((one) => one.envelope.recordedAt),
+      ...photos.map((one) => one.takenAt),
+    ];
+    return {
+      entries: this.outbox.size + refused.length,
+      photos: photos.length,
+      oldestAt: times.reduce<string | null>((least, at) => (least === null || at < least ? at : least), null),
+      pours,
+    };
   }
 
   #waits(record: OutboxRecord): void {

@@ -23,11 +23,15 @@ export const emptySnapshot: DeviceSnapshot = {
     oldestWaitingAt: null,
     clockOffsetMs: null,
     lostEntries: null,
+    signedInAs: null,
   },
   refused: [],
   photos: [],
   storage: { usedBytes: null, quotaBytes: null, persisted: null },
   updateReady: false,
+  people: [],
+  asks: false,
+  pin: { set: false, needsCurrent: false },
 };
 
 const states: readonly string[] = [
@@ -89,7 +93,7 @@ export function snapshotOf(
   work: PersonWork,
   lane: LaneState,
   now: number,
-): Omit<DeviceSnapshot, 'storage' | 'updateReady' | 'others'> {
+): Omit<DeviceSnapshot, 'storage' | 'updateReady' | 'people' | 'asks' | 'pin'> {
   const notSent = new Map<string, number>();
   let oldest: string | null = null;
   for (const one of work.outbox.values()) {
@@ -118,6 +122,7 @@ export function snapshotOf(
       oldestWaitingAt: oldest,
       clockOffsetMs: work.clockOffsetMs,
       lostEntries: work.loss.lost || null,
+      signedInAs: lane.signedInAs,
     },
     refused: [...work.refused.values()].sort((a, b) => a.deviceSeq - b.deviceSeq).flatMap(refusedEntry),
     photos: photos.map(queuedPhoto),

@@ -90,6 +90,8 @@ export type PullResponse = z.infer<typeof pullResponse>;
 export const deviceIndex = z.object({
   serverTime: instant,
   person: z.object({ id: recordId, name: z.string(), email: z.string() }),
+  /** When this session was begun with a password: a device that knew of another one opens this person's work. */
+  signedInAt: instant.optional(),
   projects: z.array(
     z.object({
       id: recordId,

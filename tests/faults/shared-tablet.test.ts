@@ -66,7 +66,7 @@ async function run(seed: number, flaws: ModelFlaws = {}) {
         break;
       case 'sign out':
         server.session = null;
-        await tab.signOut?.();
+        await tab.handOver();
         break;
       case 'network':
         online = random() < 0.7;

@@ -9,6 +9,8 @@ const UNHEARD_MS = 10 * 60_000;
 
 interface PhotoHost {
   work(): PersonWork | null;
+  /** Is the server's session the own one of whose work this is? */
+  ownSession(work: PersonWork): Promise<boolean>;
   /** A photo was sent: the record will soon say what the server found. */
   sentOne(): void;
 }
@@ -44,7 +46,7 @@ export class PhotoLane {
 
   async #send(): Promise<void> {
     const work = this.host.work();
-    if (!work || !this.#next(work)) return;
+    if (!work || !this.#next(work) || !(await this.host.ownSession(work))) return;
     this.#stopTimer?.();
     const failed = await this.env
       .ifFree('cagewright-photos', () => this.#sendAll(work))
@@ -71,8 +73,9 @@ export class PhotoLane {
   }
 
   async #sendAll(work: PersonWork): Promise<{ retryAfterMs: number | null } | null> {
-    const goOn = () => !this.#stopped && this.host.work() === work && !work.closed;
-    for (let photo = this.#next(work); photo && goOn(); photo = this.#next(work)) {
+    const goOn = async () =>
+      !this.#stopped && this.host.work() === work && !work.closed && (await this.host.ownSession(work));
+    for (let photo = this.#next(work); photo && (await goOn()); photo = this.#next(work)) {
       const stored = await work.db.get('photoBytes', photo.photoId);
       if (!stored) {
         await work.setPhoto({

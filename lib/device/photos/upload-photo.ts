@@ -36,9 +36,12 @@ export async function uploadPhoto(
   return { kind: 'sent' };
 }
 
-/** The server has looked at this photo and does not want it: sending it again is of no use. */
+/**
+ * The server has looked at this photo and does not want it: sending it again is of no use. What may not be sent (403)
+ * says nothing of the photo: somebody else may have signed in meanwhile. (SPEC 11, 16)
+ */
 function refusal(trouble: Trouble): Upload | null {
-  const final = trouble.aboutRequest && [400, 403, 413, 415, 422].includes(trouble.status ?? 0);
+  const final = trouble.aboutRequest && [400, 413, 415, 422].includes(trouble.status ?? 0);
   return final ? { kind: 'refused', sentence: trouble.sentence } : null;
 }
 

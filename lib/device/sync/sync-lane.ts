@@ -17,6 +17,8 @@ const INDEX_MS = 30_000;
 export interface LaneState {
   phase: SyncPhase;
   message: string | null;
+  /** Whose session the server has, where that is another person. */
+  signedInAs: string | null;
 }
 
 interface LaneHost {
@@ -29,7 +31,9 @@ interface LaneHost {
 
 /** Sends and fetches for the person whose work is open: one round at a time, in one tab at a time. */
 export class SyncLane {
-  state: LaneState = { phase: 'idle', message: null };
+  state: LaneState = { phase: 'idle', message: null, signedInAs: null };
+  /** Whose session the server was last heard to have; null when that is not known. */
+  #sessionOf: string | null = null;
   #running: Promise<void> | null = null;
   #again = false;
   #failures = 0;
@@ -51,13 +55,22 @@ export class SyncLane {
   /** Another person's work was opened: nothing learned about the last one's session holds. */
   personChanged(): void {
     this.#indexAt = Number.NEGATIVE_INFINITY;
+    this.#sessionOf = null;
     this.#failures = 0;
     this.#set('idle', null);
   }
 
   /** The server has just said that the person whose work is open is the one signed in. */
-  heardWhoIsHere(): void {
+  heardWhoIsHere(personId: string): void {
     this.#indexAt = this.env.now();
+    this.#sessionOf = personId;
+  }
+
+  /** Is the server's session this person's own, as heard of lately? Nothing is sent in another's. (SPEC 11) */
+  async ownSession(work: PersonWork): Promise<boolean> {
+    if (this.#sessionOf !== work.person.id) return false;
+    if (this.env.now() - this.#indexAt <= INDEX_MS) return true;
+    return (await this.#askWhoIsSignedIn(work, () => !work.closed)) === null;
   }
 
   /** Something was recorded: send it soon. A back-off under way is not cut short. */
@@ -92,9 +105,10 @@ export class SyncLane {
     this.#stopTimer = this.env.after(milliseconds, () => void this.run());
   }
 
-  #set(phase: SyncPhase, message: string | null): void {
-    if (this.state.phase === phase && this.state.message === message) return;
-    this.state = { phase, message };
+  #set(phase: SyncPhase, message: string | null, signedInAs: string | null = null): void {
+    const { state } = this;
+    if (state.phase === phase && state.message === message && state.signedInAs === signedInAs) return;
+    this.state = { phase, message, signedInAs };
     this.host.changed();
   }
 
@@ -116,12 +130,13 @@ export class SyncLane {
     } while (this.#again);
   }
 
-  async #ended(work: PersonWork, ended: Trouble | Through): Promise<void> {
+  async #ended(work: PersonWork, ended: LaneTrouble | Through): Promise<void> {
     if (ended.kind === 'trouble') {
       this.#failures += 1;
       const wait = backOff(this.#failures, this.env.random(), ended.retryAfterMs);
       if (ended.retryAfterMs !== null) this.#notBefore = this.env.now() + ended.retryAfterMs;
-      this.#set(ended.phase, `${ended.sentence} ${keptWords(work)}`.trim());
+      if (ended.phase === 'sign-in-needed') this.#sessionOf = null;
+      this.#set(ended.phase, `${ended.sentence} ${keptWords(work)}`.trim(), ended.signedInAs ?? null);
       this.#in(wait);
       return;
     }
@@ -138,7 +153,7 @@ export class SyncLane {
     if (this.env.inSight()) this.#in(POLL_MS * (1 + this.env.random() / 4));
   }
 
-  async #round(work: PersonWork): Promise<Trouble | Through | 'stopped'> {
+  async #round(work: PersonWork): Promise<LaneTrouble | Through | 'stopped'> {
     const goOn = () => !this.#stopped && this.host.work() === work && !work.closed;
     if (this.env.now() - this.#indexAt > INDEX_MS || this.state.phase !== 'idle') {
       const stranger = await this.#askWhoIsSignedIn(work, goOn);
@@ -164,12 +179,15 @@ export class SyncLane {
   }
 
   /** An outbox is sent only in its author's own session: ask first whose session this is. (SPEC 11) */
-  async #askWhoIsSignedIn(work: PersonWork, goOn: () => boolean): Promise<Trouble | 'stopped' | null> {
+  async #askWhoIsSignedIn(work: PersonWork, goOn: () => boolean): Promise<LaneTrouble | 'stopped' | null> {
     const answer = await askServer(this.env, { method: 'GET', path: '/api/sync/index' }, deviceIndex);
     if (!goOn()) return 'stopped';
     if (answer.kind === 'trouble') return answer;
-    if (answer.data.person.id !== work.person.id) return otherPerson(work, answer.data.person.name);
-    this.#indexAt = this.env.now();
+    if (answer.data.person.id !== work.person.id) {
+      this.#sessionOf = null;
+      return otherPerson(work, answer.data.person.name);
+    }
+    this.heardWhoIsHere(work.person.id);
     await work.setClockOffset(answer.clockOffsetMs);
     await work.setIndex(answer.data);
     return null;
@@ -182,14 +200,21 @@ interface Through {
   problem: string | null;
 }
 
-function otherPerson(work: PersonWork, name: string | null): Trouble {
+/** A trouble with the line, or with whose session it is. */
+interface LaneTrouble extends Trouble {
+  signedInAs?: string;
+}
+
+function otherPerson(work: PersonWork, name: string | null): LaneTrouble {
+  const { name: own } = work.person;
   return {
     kind: 'trouble',
     phase: 'sign-in-needed',
     aboutRequest: false,
     status: null,
-    sentence: `${name ?? 'Somebody else'} is signed in on this device now. What ${work.person.name} recorded is sent when ${work.person.name} signs in.`,
+    sentence: `${name ?? 'Somebody else'} is signed in on this device now. What ${own} recorded is sent when ${own} signs in.`,
     retryAfterMs: null,
+    signedInAs: name ?? 'Somebody else',
   };
 }
 

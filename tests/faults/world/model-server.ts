@@ -52,8 +52,8 @@ export class ModelServer {
   readonly sentBy = new Map<string, string>();
   pageSize = 1000;
   clockMs: () => number;
-  /** Who the session cookie stands for; null: signed out. */
-  session: ModelPerson | null;
+  #session: ModelPerson | null;
+  #signedInAt: string;
   readonly projectId: string;
   readonly pours: ModelPour[];
   readonly people: ModelPerson[];
@@ -70,8 +70,19 @@ export class ModelServer {
     this.pours = given.pours;
     this.people = given.people;
     this.clockMs = given.clockMs;
-    this.session = given.people[0] ?? null;
+    this.#session = given.people[0] ?? null;
+    this.#signedInAt = new Date(given.clockMs()).toISOString();
     this.flaws = given.flaws ?? {};
+  }
+
+  /** Who the session cookie stands for; null: signed out. Setting it is signing in: another session, begun later. */
+  get session(): ModelPerson | null {
+    return this.#session;
+  }
+
+  set session(person: ModelPerson | null) {
+    this.#session = person;
+    this.#signedInAt = new Date(Date.parse(this.#signedInAt) + 1).toISOString();
   }
 
   /** A copy of the record, to restore later. */
@@ -116,7 +127,7 @@ export class ModelServer {
     if (path === '/api/sync/push') return json(200, this.#push(session, await bodyOf(init)));
     if (path === '/api/sync/pull') return json(200, this.#pull(await bodyOf(init)));
     const photo = /^\/api\/photos\/([^/]+)\/(upload-address|uploaded|address)$/.exec(path);
-    if (photo) return this.#photo(photo[1] ?? '', photo[2] ?? '');
+    if (photo) return this.#photo(session, photo[1] ?? '', photo[2] ?? '');
     if (/^\/api\/signatures\/[^/]+\/confirm$/.test(path)) {
       const { password } = (await bodyOf(init)) as { password: string };
       return password === 'right'
@@ -134,6 +145,7 @@ export class ModelServer {
     return {
       serverTime: this.#now(),
       person: { id: person.id, name: person.name, email: `${person.name.toLowerCase()}@example.test` },
+      signedInAt: this.#signedInAt,
       projects: [
         {
           id: this.projectId,
@@ -242,9 +254,14 @@ export class ModelServer {
     return new Response('', { status: 200 });
   }
 
-  #photo(photoId: string, verb: string): Response {
+  #photo(person: ModelPerson, photoId: string, verb: string): Response {
     const entry = this.entries.find((one) => one.type === 'photo' && one.body.photoId === photoId);
     if (!entry?.pourId) return json(404, { code: 'not-found', sentence: 'There is no such photo.' });
+    if (verb !== 'address' && entry.authorId !== person.id)
+      return json(403, {
+        code: 'not-allowed',
+        sentence: 'Only the person who took a photograph sends it.',
+      });
     if (verb === 'upload-address') {
       return json(200, {
         url: `/store/${photoId}`,

@@ -62,7 +62,10 @@ export class Phone {
   ) {}
 
   environment(over: Partial<DeviceEnvironment> = {}): DeviceEnvironment {
+    let noted: string | null = null;
     return {
+      tabNote: { read: () => noted, write: (personId) => void (noted = personId) },
+      crypto: globalThis.crypto,
       now: () => this.clock.now() + this.clockSkewMs,
       newId: () => v7(),
       random: this.random,

@@ -1,15 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { settle, until, Phone, type Line } from '@/tests/faults/world/phone';
-import {
-  at,
-  opened,
-  inspector,
-  note,
-  pourId,
-  reading,
-  site,
-  superintendent,
-} from '@/tests/faults/world/site';
+import { at, opened, note, pourId, reading, site } from '@/tests/faults/world/site';
 import { bodyOf } from '@/tests/faults/world/model-server';
 
 const json = (status: number, body: unknown, headers: Record<string, string> = {}) =>
@@ -343,73 +334,6 @@ describe('when it is tried again', () => {
     expect(most).toBe(1);
     expect(server.entries.filter((one) => one.type === 'note')).toHaveLength(3);
     expect(tabs.map((tab) => tab.snapshot().sync.waitingEntries)).toEqual([0, 0, 0]);
-    await phone.kill();
-  });
-});
-
-describe('a shared tablet', () => {
-  it('sends an outbox only in its author’s own session, and shows whose work waits (SPEC 11, 29)', async () => {
-    const { phone, server, requests, clock } = site();
-    const ada = await phone.tab();
-    const entry = await ada.record(at, 'note', note('Ada’s'));
-    await settle();
-    server.session = superintendent;
-    requests.length = 0;
-    clock.advance(31_000);
-    await ada.syncNow();
-    expect(ada.snapshot().sync).toMatchObject({ phase: 'sign-in-needed', waitingEntries: 1 });
-    expect(ada.snapshot().sync.message).toMatch(/Ben is signed in.*Ada signs in/);
-    expect(requests.some((one) => one.endsWith('/push'))).toBe(false);
-    await phone.kill();
-
-    const ben = await phone.tab();
-    expect(ben.snapshot().person?.id).toBe(superintendent.id);
-    expect(ben.snapshot().sync.waitingEntries).toBe(0);
-    expect(ben.snapshot().others).toEqual([{ id: inspector.id, name: 'Ada', waiting: 1 }]);
-    await ben.syncNow();
-    expect(server.entries.some((one) => one.id === entry.id)).toBe(false);
-    await phone.kill();
-
-    server.session = inspector;
-    const again = await phone.tab();
-    await again.syncNow();
-    expect(server.entries.find((one) => one.id === entry.id)?.authorId).toBe(inspector.id);
-    await phone.kill();
-  });
-
-  it('keeps everything when the session changes hands between the question and the push (SPEC 11)', async () => {
-    const { phone, server, straight } = site();
-    const tab = await phone.tab();
-    phone.line = (address, init) => {
-      if (address.endsWith('/push')) server.session = superintendent;
-      return straight(address, init);
-    };
-    await tab.record(at, 'note', note('mine'));
-    await tab.syncNow();
-    expect(tab.snapshot().sync).toMatchObject({
-      waitingEntries: 1,
-      refusedEntries: 0,
-      phase: 'sign-in-needed',
-    });
-    await phone.kill();
-  });
-
-  it('hides and keeps unsent work after signing out (SPEC 29)', async () => {
-    const { phone, server } = site();
-    const tab = await phone.tab();
-    server.session = null;
-    await tab.record(at, 'note', note('before going'));
-    await tab.signOut?.();
-    await settle();
-    expect(tab.snapshot()).toMatchObject({ person: null, pours: [] });
-    await phone.kill();
-    const later = await phone.tab();
-    expect(later.snapshot().person).toBeNull();
-    await phone.kill();
-    server.session = inspector;
-    const back = await phone.tab();
-    await back.syncNow();
-    expect(server.entries.filter((one) => one.type === 'note')).toHaveLength(1);
     await phone.kill();
   });
 });

@@ -57,11 +57,15 @@ export class MemoryDevice implements Device {
         oldestWaitingAt: null,
         clockOffsetMs: 0,
         lostEntries: null,
+        signedInAs: null,
       },
       refused: [],
       photos: [],
       storage: { usedBytes: 4_200_000, quotaBytes: 800_000_000, persisted: true },
       updateReady: false,
+      people: [],
+      asks: false,
+      pin: { set: false, needsCurrent: false },
       ...part,
     };
   }
@@ -182,5 +186,8 @@ export class MemoryDevice implements Device {
     new Blob([JSON.stringify(this.recorded.filter((entry) => entry.seq === undefined))]);
   confirmSignature = async () => ({ ok: false as const, sentence: 'There is no network.' });
   refreshPerson = async () => undefined;
+  handOver = async () => undefined;
+  openPerson = async () => ({ ok: true as const });
+  setPin = async () => ({ ok: true as const });
   applyUpdate = () => undefined;
 }

@@ -1,0 +1,44 @@
+import type { OpenPour } from './device-types';
+import type { PersonWork } from './person-work';
+import { pourOf, projectOf } from './snapshot-of';
+
+/** The pours that screens look at: the same object as long as nothing in it changed. */
+export class OpenedPours {
+  #opened = new Map<string, { version: number; open: OpenPour }>();
+
+  forget(pourId?: string): void {
+    if (pourId === undefined) this.#opened = new Map();
+    else this.#opened.delete(pourId);
+  }
+
+  /**
+   * A pour as it is now; undefined while it is being read from the store.
+   * @param version rises with every change on the device
+   * @param read called once it has been read
+   */
+  get(
+    work: PersonWork,
+    pourId: string,
+    { version, now, read }: { version: number; now: number; read: () => void },
+  ): OpenPour | undefined {
+    const project = work.projectOf(pourId);
+    if (!project) return undefined;
+    const folded = work.memory.folded(pourId, now);
+    if (!folded) {
+      void work.openPour(pourId, project.id).then(read, () => undefined);
+      return undefined;
+    }
+    const known = this.#opened.get(pourId);
+    const sameSheet = known?.open.sheet === folded.sheet && known.open.holds === folded.holds;
+    if (known && sameSheet && known.version === version) return known.open;
+    const pour = pourOf(work, project.id, pourId, now);
+    if (!pour) return undefined;
+    const open: OpenPour = { pour, project: projectOf(project), ...folded };
+    const same =
+      known &&
+      sameSheet &&
+      JSON.stringify([known.open.pour, known.open.project]) === JSON.stringify([pour, open.project]);
+    this.#opened.set(pourId, { version, open: same ? known.open : open });
+    return same ? known.open : open;
+  }
+}
