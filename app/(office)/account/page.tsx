@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { cookies } from 'next/headers';
+import { BringInFile } from '@/components/office/bring-in-file';
 import { deviceWords } from '@/components/office/device-words';
 import { PageMain } from '@/components/office/page-main';
 import { chosenProject, PROJECT_COOKIE } from '@/components/office/project-choice';
@@ -92,6 +93,9 @@ export default async function AccountPage() {
           }))}
           empty="No device has sent work as you yet."
         />
+      </SheetFrame>
+      <SheetFrame heading="Work saved to a file">
+        <BringInFile personId={person.id} timeZone={timeZone} />
       </SheetFrame>
     </PageMain>
   );
