@@ -216,7 +216,9 @@ export class PersonWork {
     if (chosen !== undefined) return chosen;
     if (!pour.assigned) return false;
     if (pour.plannedAt === null) return true;
-    return Math.abs(Date.parse(pour.plannedAt) - this.env.now()) <= KEPT_DAYS * 86_400_000;
+    // By the server's time as last heard: a wrong clock, or a month without a network, takes nothing off the device.
+    const heardAt = Date.parse(this.index?.serverTime ?? '') || this.env.now();
+    return Math.abs(Date.parse(pour.plannedAt) - heardAt) <= KEPT_DAYS * 86_400_000;
   }
 
   /**

@@ -67,7 +67,9 @@ export class PhotoLane {
         (photo) =>
           photo.progress === 'waiting' ||
           photo.progress === 'sending' ||
-          (photo.progress === 'sent' && now - Date.parse(photo.sentAt ?? photo.takenAt) > UNHEARD_MS),
+          // A clock that was set back must not make it wait until the clock has caught up.
+          (photo.progress === 'sent' &&
+            Math.abs(now - Date.parse(photo.sentAt ?? photo.takenAt)) > UNHEARD_MS),
       )
       .sort((a, b) => (a.takenAt < b.takenAt ? -1 : 1))[0];
   }

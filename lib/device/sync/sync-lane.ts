@@ -37,7 +37,9 @@ export class SyncLane {
   #running: Promise<void> | null = null;
   #again = false;
   #failures = 0;
-  #notBefore = 0;
+  /** The server asked to wait. A timer ends it: the device's clock may be set meanwhile. */
+  #askedToWait = false;
+  #stopWaiting: (() => void) | null = null;
   #stopTimer: (() => void) | null = null;
   #indexAt = Number.NEGATIVE_INFINITY;
   #stopped = false;
@@ -50,6 +52,7 @@ export class SyncLane {
   stop(): void {
     this.#stopped = true;
     this.#stopTimer?.();
+    this.#stopWaiting?.();
   }
 
   /** Another person's work was opened: nothing learned about the last one's session holds. */
@@ -69,7 +72,7 @@ export class SyncLane {
   /** Is the server's session this person's own, as heard of lately? Nothing is sent in another's. (SPEC 11) */
   async ownSession(work: PersonWork): Promise<boolean> {
     if (this.#sessionOf !== work.person.id) return false;
-    if (this.env.now() - this.#indexAt <= INDEX_MS) return true;
+    if (!this.#indexIsOld()) return true;
     return (await this.#askWhoIsSignedIn(work, () => !work.closed)) === null;
   }
 
@@ -81,7 +84,7 @@ export class SyncLane {
 
   /** Something says that it is worth trying at once (network back, tab in sight). */
   wake(): void {
-    if (this.env.now() < this.#notBefore) return;
+    if (this.#askedToWait) return;
     void this.run();
   }
 
@@ -97,6 +100,18 @@ export class SyncLane {
       this.#running = null;
     });
     return this.#running;
+  }
+
+  /** A clock that was set back makes it old too, and not new until the clock has caught up. */
+  #indexIsOld(): boolean {
+    return Math.abs(this.env.now() - this.#indexAt) > INDEX_MS;
+  }
+
+  #waitAsAsked(milliseconds: number | null): void {
+    this.#stopWaiting?.();
+    this.#askedToWait = milliseconds !== null;
+    if (milliseconds === null) return;
+    this.#stopWaiting = this.env.after(milliseconds, () => (this.#askedToWait = false));
   }
 
   #in(milliseconds: number): void {
@@ -134,14 +149,14 @@ export class SyncLane {
     if (ended.kind === 'trouble') {
       this.#failures += 1;
       const wait = backOff(this.#failures, this.env.random(), ended.retryAfterMs);
-      if (ended.retryAfterMs !== null) this.#notBefore = this.env.now() + ended.retryAfterMs;
+      if (ended.retryAfterMs !== null) this.#waitAsAsked(ended.retryAfterMs);
       if (ended.phase === 'sign-in-needed') this.#sessionOf = null;
       this.#set(ended.phase, `${ended.sentence} ${keptWords(work)}`.trim(), ended.signedInAs ?? null);
       this.#in(wait);
       return;
     }
     this.#failures = 0;
-    this.#notBefore = 0;
+    this.#waitAsAsked(null);
     await work.setLastSuccess(new Date(this.env.now()).toISOString()).catch(() => undefined);
     this.#set('idle', ended.problem && `${ended.problem} ${keptWords(work)}`.trim());
     this.host.changed();
@@ -155,7 +170,7 @@ export class SyncLane {
 
   async #round(work: PersonWork): Promise<LaneTrouble | Through | 'stopped'> {
     const goOn = () => !this.#stopped && this.host.work() === work && !work.closed;
-    if (this.env.now() - this.#indexAt > INDEX_MS || this.state.phase !== 'idle') {
+    if (this.#indexIsOld() || this.state.phase !== 'idle') {
       const stranger = await this.#askWhoIsSignedIn(work, goOn);
       if (stranger) return stranger;
     }
