@@ -56,7 +56,7 @@ async function run(programs: readonly Program[], order: readonly number[]): Prom
     await until(() => Boolean(tab.pour(pourId)?.sheet), 'the pour is open');
     return { phone, tab, person, seen: new Set<string>(), own: new Set<string>() };
   };
-  const hands = [];
+  const hands: Awaited<ReturnType<typeof open>>[] = [];
   for (const { person } of programs) hands.push(await open(person));
   const next = programs.map(() => 0);
   for (const who of order) {

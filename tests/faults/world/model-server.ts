@@ -25,6 +25,7 @@ export interface ModelPour {
   id: string;
   number: string;
   plan: Plan;
+  plannedAt?: string;
 }
 
 /** What makes this server wrong on purpose, for negative controls. */
@@ -153,12 +154,12 @@ export class ModelServer {
           timeZone: 'Etc/UTC',
           role: person.role,
           people: this.people,
-          pours: this.pours.map(({ id, number, plan }) => ({
+          pours: this.pours.map(({ id, number, plan, plannedAt }) => ({
             id,
             number,
             title: 'Quay deck',
             location: 'grids C to D',
-            plannedAt: null,
+            plannedAt: plannedAt ?? null,
             planRevision: plan.revision,
             assigned: true,
             state: 'held',
