@@ -22,6 +22,10 @@ export const freePort = () =>
 
 /** @throws SetupProblem saying which port, who needs it, and how to choose another */
 export async function requireFree(port, who, variable) {
+  if (!Number.isInteger(port) || port < 1 || port > 65535)
+    throw new SetupProblem(
+      `${variable} is not a port: "${process.env[variable]}". Give a number, as in ${variable}=3001.`,
+    );
   if (await isFree(port)) return;
   throw new SetupProblem(
     `Port ${port} is in use, and the ${who} needs it. Stop what uses it, or choose another: ${variable}=${port + 1} npm start`,
