@@ -3,11 +3,10 @@ import { judgeReading } from '@/lib/concrete/judge-reading';
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import { siteBodies } from '@/lib/inspection/entry-bodies';
 import { limitsFor } from '@/lib/inspection/judge-point';
-import { judgeMeasurement } from '@/lib/inspection/judge-measurements';
+import { judgeMeasured } from '@/lib/inspection/judge-measured';
+import { asEntered } from '@/lib/inspection/length-as-entered';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { faceOfPlan } from './open-sheet';
-import { measuredText } from './measured-text';
-import { lengthText } from './verdict-words';
 
 type Json = NonNullable<BodyOf<'amendment'>['replacement']>;
 export type Replacement = { ok: true; body: Json } | { ok: false; problem: string };
@@ -70,7 +69,7 @@ export function amendmentDraft(entry: Entry, current: Record<string, unknown>): 
     case 'reading': {
       const body = siteBodies.reading.safeParse(current);
       if (!body.success || !body.data.value) return null;
-      const shown = lengthText(body.data.value).replace(' (unit not given)', '');
+      const shown = asEntered(body.data.value).replace(' (unit not given)', '');
       return textDraft('What the instrument showed', shown, false, (text) =>
         lengthChange(text, (value) => ({ ...body.data, value })),
       );
@@ -114,18 +113,22 @@ export function amendmentDraft(entry: Entry, current: Record<string, unknown>): 
   }
 }
 
-function measurementDraft(body: BodyOf<'measurement'>): AmendmentDraft {
+/** The one figure that most errors are made in; what has more than one is withdrawn and recorded once more. */
+function measurementDraft(body: BodyOf<'measurement'>): AmendmentDraft | null {
   const { value } = body;
   const changed = (next: object): Replacement => ({ ok: true, body: asJson({ ...body, value: next }) });
   switch (value.quantity) {
     case 'length':
-      return textDraft('What was measured', measuredText(value), false, (text) =>
-        lengthChange(text, (length) => ({ ...body, value: { quantity: 'length', length } })),
+    case 'starter':
+    case 'height':
+      return textDraft('What was measured', asEntered(value.length), false, (text) =>
+        lengthChange(text, (length) => ({ ...body, value: { ...value, length } })),
       );
     case 'count':
+    case 'part':
       return textDraft('Count', String(value.count), false, (text) =>
         /^\d+$/.test(text.trim())
-          ? changed({ quantity: 'count', count: Number(text) })
+          ? changed({ ...value, count: Number(text) })
           : { ok: false, problem: 'Write a whole number.' },
       );
     case 'share':
@@ -140,6 +143,10 @@ function measurementDraft(body: BodyOf<'measurement'>): AmendmentDraft {
           ? changed({ quantity: 'designation', designation: text.trim() })
           : { ok: false, problem: 'Write the bar found.' },
       );
+    case 'coupler':
+    case 'damage':
+    case 'ticket':
+      return null;
   }
 }
 
@@ -171,7 +178,7 @@ export function amendmentNeedsPhoto(sheet: Sheet, entry: Entry, draft: Amendment
     const place = state?.places.find((one) => one.entry.id === entry.id);
     const body = siteBodies.measurement.safeParse(made.body);
     if (!state || place?.verdict !== 'not-met' || !body.success) return false;
-    return judgeMeasurement(state.item, body.data, sheet.plan.units).verdict !== 'not-met';
+    return judgeMeasured(state.item, body.data.value, sheet.plan).verdict !== 'not-met';
   }
   return false;
 }

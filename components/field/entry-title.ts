@@ -1,8 +1,8 @@
 import type { Entry } from '@/lib/inspection/entry';
 import type { Sheet } from '@/lib/inspection/sheet-types';
+import { measuredText } from '@/lib/inspection/measured-words';
 import { answerWords } from './state-tone';
 import { subjectWords } from './subject-words';
-import { measuredText } from './measured-text';
 import { readingText } from './verdict-words';
 
 const eventWords = {

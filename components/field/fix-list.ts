@@ -1,7 +1,7 @@
 import { withUnit } from '@/lib/concrete/length';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import type { Hold, Sheet } from '@/lib/inspection/sheet-types';
-import { measuredText } from './measured-text';
+import { measuredText } from '@/lib/inspection/measured-words';
 import { pointOf } from './subject-words';
 import { bodyShown, readingText } from './verdict-words';
 
@@ -115,18 +115,24 @@ function measurementFix(sheet: Sheet, itemId: string): FixItem['what'] | null {
   const state = sheet.measurements.find((one) => one.item.id === itemId);
   if (!state) return null;
   const { item } = state;
-  const shown = (value: number | null) =>
-    value === null
-      ? null
-      : item.quantity === 'length'
-        ? withUnit(value, sheet.plan.units)
-        : item.quantity === 'share'
-          ? `${value} %`
-          : String(value);
+  const shown = (value: number | null): string | null => {
+    if (value === null) return null;
+    switch (item.quantity) {
+      case 'length':
+      case 'starter':
+      case 'height':
+        return withUnit(value, sheet.plan.units);
+      case 'share':
+      case 'part':
+        return `${value} %`;
+      default:
+        return String(value);
+    }
+  };
   return {
     kind: 'measurement',
     title: item.title,
-    least: item.quantity === 'designation' ? item.expected : shown(item.least),
+    least: item.expected ?? shown(item.least),
     most: shown(item.most),
     values: state.governing
       .filter((place) => place.verdict === 'not-met' && place.acceptedBy === null)

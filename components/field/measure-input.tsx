@@ -3,11 +3,11 @@
 import { TextInput } from '@/components/ui/text-input';
 import type { LengthUnit } from '@/lib/concrete/length';
 import type { MeasurementItem } from '@/lib/inspection/plan';
-import { Keypad } from './keypad';
+import { DamageInput } from './damage-input';
+import { LengthKeys } from './length-keys';
 import type { Measure } from './measure-draft';
-import { pressed, shownPresses, type Press } from './reading-keys';
-import { TieGrid } from './tie-grid';
-import { useTypedKeys } from './use-typed-keys';
+import { CouplerInput, PartInput, StarterInput, TendonInput, TicketInput } from './detail-inputs';
+import { TieSquare } from './tie-square';
 
 /** The way to enter a value that fits its kind: a keypad, a count, ties tapped on a grid, a bar mark. */
 export function MeasureInput({
@@ -24,7 +24,7 @@ export function MeasureInput({
   switch (measure.quantity) {
     case 'length':
       return (
-        <LengthInput
+        <LengthKeys
           presses={measure.presses}
           unit={unit}
           onChange={(presses) => onChange({ quantity: 'length', presses })}
@@ -41,7 +41,7 @@ export function MeasureInput({
         />
       );
     case 'share':
-      return <TieGrid measure={measure} onChange={onChange} />;
+      return <TieSquare item={item} measure={measure} onChange={onChange} />;
     case 'designation':
       return (
         <TextInput
@@ -53,40 +53,17 @@ export function MeasureInput({
           onChange={(event) => onChange({ quantity: 'designation', text: event.target.value })}
         />
       );
+    case 'part':
+      return <PartInput measure={measure} onChange={onChange} />;
+    case 'starter':
+      return <StarterInput measure={measure} unit={unit} onChange={onChange} />;
+    case 'coupler':
+      return <CouplerInput item={item} measure={measure} onChange={onChange} />;
+    case 'damage':
+      return <DamageInput item={item} measure={measure} unit={unit} onChange={onChange} />;
+    case 'height':
+      return <TendonInput measure={measure} unit={unit} onChange={onChange} />;
+    case 'ticket':
+      return <TicketInput item={item} measure={measure} onChange={onChange} />;
   }
-}
-
-function LengthInput({
-  presses,
-  unit,
-  onChange,
-}: {
-  presses: readonly Press[];
-  unit: LengthUnit;
-  onChange: (presses: readonly Press[]) => void;
-}) {
-  const shown = shownPresses(presses, unit);
-  useTypedKeys({
-    enabled: true,
-    filled: presses.length > 0,
-    onChar: (char) => onChange(pressed(presses, { kind: 'char', char })),
-    onDelete: () => onChange(presses.slice(0, -1)),
-    onEnter: () => document.querySelector<HTMLButtonElement>('main form button[type="submit"]')?.click(),
-  });
-  return (
-    <div className="-mx-3">
-      <output
-        aria-label="Measured"
-        className="flex items-baseline gap-2 px-3 pb-2 font-figure text-5xl leading-none font-medium"
-      >
-        <span className={shown === '' ? 'text-rule' : undefined}>{shown === '' ? '0' : shown}</span>
-        <span className="text-xl text-pencil">{/[a-z"']/i.test(shown) ? '' : unit}</span>
-      </output>
-      <Keypad
-        unit={unit}
-        onPress={(press) => onChange(pressed(presses, press))}
-        onDelete={() => onChange(presses.slice(0, -1))}
-      />
-    </div>
-  );
 }

@@ -2,38 +2,19 @@
 
 import { EmptyState } from '@/components/ui/empty-state';
 import { MarkIcon } from '@/components/drawings/mark';
-import { withUnit } from '@/lib/concrete/length';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import { placesMeasured } from '@/lib/inspection/judge-measurements';
-import type { MeasurementItem, Plan } from '@/lib/inspection/plan';
 import type { MeasurementState } from '@/lib/inspection/sheet-types';
+import { limitWords, measuredText } from '@/lib/inspection/measured-words';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
 import { MeasurementForm, stageWords } from './measurement-form';
-import { measuredText } from './measured-text';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { RequirementTrail } from './requirement-trail';
 import { Screen } from './screen';
 import { MeasurementLines } from './sheet-lines';
 import { Disclosure } from './disclosure';
-
-/** What has to be met, in words: "at most 1 200 mm", "at least 50 per cent tied", "16". */
-export function limitWords(item: MeasurementItem, units: Plan['units']): string {
-  const one = (value: number) =>
-    item.quantity === 'length'
-      ? withUnit(value, units)
-      : item.quantity === 'share'
-        ? `${value} %`
-        : String(value);
-  if (item.quantity === 'designation') return `planned ${item.expected ?? 'nothing named'}`;
-  return [
-    item.least !== null ? `at least ${one(item.least)}` : '',
-    item.most !== null ? `at most ${one(item.most)}` : '',
-  ]
-    .filter(Boolean)
-    .join(', ');
-}
 
 /** One thing to measure: its limits, a form fit for standing up, and what was measured; without one, the list. */
 export function MeasurementsScreen({ open, itemId }: { open: OpenSheet; itemId: string | null }) {

@@ -2,6 +2,7 @@ import { markOfReading } from '@/lib/inspection/judge-point';
 import { formatLength, type LengthUnit } from '@/lib/concrete/length';
 import { markWords } from '@/components/drawings/mark-words';
 import type { BodyOf } from '@/lib/inspection/entry';
+import { asEntered } from '@/lib/inspection/length-as-entered';
 import type { JudgedReading } from '@/lib/concrete/judge-reading';
 import type { ReadingState } from '@/lib/inspection/sheet-types';
 
@@ -11,13 +12,7 @@ export function readingText(body: BodyOf<'reading'>): string {
     return `block ${formatLength(body.goNoGo.blockMm, 'mm')} mm ${body.goNoGo.passes ? 'passes' : 'does not pass'}`;
   }
   if (!body.value) return 'nothing';
-  return lengthText(body.value);
-}
-
-/** A length as entered; its unit is added where the text has none. */
-export function lengthText(value: NonNullable<BodyOf<'reading'>['value']>): string {
-  if (value.unit === null) return `${value.text} (unit not given)`;
-  return /[a-z"']/i.test(value.text) ? value.text : `${value.text} ${value.unit}`;
+  return asEntered(body.value);
 }
 
 /** "met", "met, at limit or inside uncertainty", "not met, low": the verdict in words. */

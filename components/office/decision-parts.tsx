@@ -1,11 +1,11 @@
 import { CoverSection } from '@/components/drawings/cover-section';
 import { formatLength } from '@/lib/concrete/length';
 import type { EntryOf } from '@/lib/inspection/entry';
+import { limitWords } from '@/lib/inspection/measured-words';
 import type { Element, Face } from '@/lib/inspection/plan';
 import type { FaceState, Sheet } from '@/lib/inspection/sheet-types';
 import type { facesConcerned } from './acceptable-entries';
 import { FacePlan } from './face-sheet';
-import { limitText } from './measurements-table';
 import { governingFor, readingMark, readingText, requirementWords } from './reading-words';
 import { TrailBody } from './requirement-trail';
 import { subjectWords, type WordContext } from './entry-words';
@@ -98,7 +98,7 @@ export function RequirementPart({
       {measurements.map((state) => (
         <section key={state.item.id}>
           <h3 className="text-lead">{state.item.title}</h3>
-          <p>Limits: {limitText(state.item, units)}</p>
+          <p>Limits: {limitWords(state.item, units)}</p>
           <ul>
             {state.governing.map((place) => (
               <li key={place.entry.id}>

@@ -1,9 +1,11 @@
 import type { BodyOf, Entry, EntryType, UnknownEntry } from '@/lib/inspection/entry';
 import { bodies } from '@/lib/inspection/entry-bodies';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
+import { asEntered } from '@/lib/inspection/length-as-entered';
+import { measuredText } from '@/lib/inspection/measured-words';
 import { revisionLetter, type Plan } from '@/lib/inspection/plan';
 import { roleWords } from '@/lib/inspection/roles';
-import { asEntered, mmText } from './length-words';
+import { mmText } from './length-words';
 import { fullTime } from './project-time';
 import { decisionWords, stageWords } from './state-words';
 
@@ -134,19 +136,6 @@ const coverValue = (body: BodyOf<'reading'>): string =>
       ? `${body.goNoGo.passes ? 'at least' : 'less than'} ${mmText(body.goNoGo.blockMm)} mm (go/no-go)`
       : 'nothing';
 
-const measuredValue = (value: BodyOf<'measurement'>['value']): string => {
-  switch (value.quantity) {
-    case 'length':
-      return asEntered(value.length);
-    case 'count':
-      return String(value.count);
-    case 'share':
-      return `${value.tied} of ${value.of} tied`;
-    case 'designation':
-      return value.designation;
-  }
-};
-
 const wording: Wording = {
   answer: (body, context) => ({
     title: `Check ${answerWords[body.answer]}`,
@@ -170,7 +159,7 @@ const wording: Wording = {
     ),
   }),
   measurement: (body, context) => ({
-    title: `Measured ${measuredValue(body.value)}${body.place ? ` at ${body.place}` : ''}`,
+    title: `Measured ${measuredText(body.value)}${body.place ? ` at ${body.place}` : ''}`,
     lines: given(
       subjectWords(context, { kind: 'measurement', id: body.itemId }),
       body.stage !== 'single' &&

@@ -1,15 +1,7 @@
 import { formatLength, parseLength, type LengthUnit } from '@/lib/concrete/length';
-import type { LengthAsEntered } from '@/lib/inspection/primitives';
 
 /** Millimetres with no more digits than they have: 38.1, 50, 12.75. */
 export const mmText = (mm: number): string => formatLength(mm, 'mm');
-
-/** A length as it was entered, for people; the unit is added only where the text has none. */
-export function asEntered(length: LengthAsEntered): string {
-  const bare = parseLength(length.text);
-  if (!bare.ok || bare.length.unit !== null) return length.text;
-  return length.unit === null ? `${length.text} (unit not given)` : `${length.text} ${length.unit}`;
-}
 
 /** A length as text that a field reads back as the very same millimetres: rounding here would change a requirement. */
 export function exactText(mm: number, units: LengthUnit): string {

@@ -1,11 +1,9 @@
 import { MarkIcon } from '@/components/drawings/mark';
 import type { MarkKind } from '@/components/drawings/mark-words';
-import { formatLength } from '@/lib/concrete/length';
 import type { Verdict } from '@/lib/concrete/judge-reading';
-import type { MeasurementItem } from '@/lib/inspection/plan';
-import type { MeasurementState, Sheet } from '@/lib/inspection/sheet-types';
+import { limitWords, measuredText } from '@/lib/inspection/measured-words';
+import type { Sheet } from '@/lib/inspection/sheet-types';
 import { personName } from './entry-words';
-import { asEntered } from './length-words';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
 import { RuledTable, type RuledRow } from './ruled-table';
@@ -15,33 +13,6 @@ const marks: Record<Verdict, { mark: MarkKind; word: string }> = {
   'not-met': { mark: 'not-met-low', word: 'not met' },
   'not-verified': { mark: 'not-verified', word: 'not verified' },
 };
-
-type Measured = NonNullable<MeasurementState['places'][number]['current']>;
-
-const valueText = (value: Measured['value']): string => {
-  switch (value.quantity) {
-    case 'length':
-      return asEntered(value.length);
-    case 'count':
-      return String(value.count);
-    case 'share':
-      return `${value.tied} of ${value.of}`;
-    case 'designation':
-      return value.designation;
-  }
-};
-
-/** The limits of an item in its own quantity: "700 to 1200 mm", "at least 50 %". */
-export function limitText(item: MeasurementItem, units: 'mm' | 'in'): string {
-  if (item.expected) return item.expected;
-  const show = (value: number) =>
-    item.quantity === 'length' ? formatLength(value, units) : formatLength(value, 'mm');
-  const unit = item.quantity === 'length' ? ` ${units}` : item.quantity === 'share' ? ' %' : '';
-  if (item.least !== null && item.most !== null) return `${show(item.least)} to ${show(item.most)}${unit}`;
-  if (item.least !== null) return `at least ${show(item.least)}${unit}`;
-  if (item.most !== null) return `at most ${show(item.most)}${unit}`;
-  return 'as found';
-}
 
 /** What the plan asks to be measured, each place with its verdict. */
 export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: OfficeViewer }) {
@@ -63,7 +34,7 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
             <>
               {state.item.title}
               <span className="block text-label text-pencil">
-                {limitText(state.item, sheet.plan.units)}.{' '}
+                {limitWords(state.item, sheet.plan.units)}.{' '}
                 {new Set(state.places.map((one) => one.current?.place ?? one.entry.body.place)).size} of{' '}
                 {state.item.required} places{state.item.loaded ? ', before, under and after load' : ''}
               </span>
@@ -90,14 +61,14 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
               .join(', '),
             value:
               place.current === null ? (
-                <del>{valueText(place.entry.body.value)}</del>
+                <del>{measuredText(place.entry.body.value)}</del>
               ) : place.amendments.some((one) => one.counts) ? (
                 <span className="grid justify-items-end">
-                  <del>{valueText(place.entry.body.value)}</del>
-                  <ins className="no-underline">{valueText(place.current.value)}</ins>
+                  <del>{measuredText(place.entry.body.value)}</del>
+                  <ins className="no-underline">{measuredText(place.current.value)}</ins>
                 </span>
               ) : (
-                valueText(place.current.value)
+                measuredText(place.current.value)
               ),
             verdict: (
               <Mark

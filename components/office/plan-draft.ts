@@ -1,5 +1,13 @@
 import type { TemplateFor } from '@/lib/inspection/checklist-items';
-import type { CheckItem, DecisionRule, ElementType, Meeting, Plan, Requirement } from '@/lib/inspection/plan';
+import type {
+  CheckItem,
+  DecisionRule,
+  ElementType,
+  MeasurementItem,
+  Meeting,
+  Plan,
+  Requirement,
+} from '@/lib/inspection/plan';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import { exactText } from './length-words';
 
@@ -254,6 +262,13 @@ function concreteDraft(of: Plan['concrete'], shown: (mm: number) => string): Con
   };
 }
 
+/** A measurement as it was typed; one of an older plan comes back with its limits typed. */
+function measurementInputOf(item: MeasurementItem): PlanInput['measurements'][number] {
+  const { id, title, elementId, required, loaded, kind, quantity, least, most, expected } = item;
+  const rule = item.rule ?? { rule: 'typed', kind, quantity, least, most, expected };
+  return { id, title, elementId, required, loaded, rule };
+}
+
 /**
  * The form filled from an issued plan. Ids are kept, so that a revision's points keep theirs; a copy for another pour
  * keeps them too, since they are unique within a plan only. A requirement comes back as the contract's: its specified
@@ -274,7 +289,7 @@ export function draftOfPlan(plan: Plan): PlanDraft {
     concrete: concreteDraft(plan.concrete, shown),
     lastWalk: plan.lastWalk,
     checklist: plan.checklist,
-    measurements: plan.measurements.map(({ trail: _trail, ...item }) => item),
+    measurements: plan.measurements.map(measurementInputOf),
     elements: plan.elements.map((element) => ({
       id: element.id,
       type: element.type,

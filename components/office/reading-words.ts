@@ -1,7 +1,8 @@
 import { formatLength, type LengthUnit } from '@/lib/concrete/length';
 import type { MarkKind, PointState, ReadingState } from '@/lib/inspection/sheet-types';
+import { asEntered } from '@/lib/inspection/length-as-entered';
 import type { Requirement } from '@/lib/inspection/plan';
-import { asEntered, mmText } from './length-words';
+import { mmText } from './length-words';
 
 /** The mark of one reading, by its own verdict. */
 export function readingMark(reading: Pick<ReadingState, 'judged'>): MarkKind {

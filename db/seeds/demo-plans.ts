@@ -1,6 +1,7 @@
 import { checklistTemplate } from '@/lib/inspection/checklist-templates';
 import type { TemplateFor } from '@/lib/inspection/checklist-items';
 import type { PlanInput } from '@/lib/inspection/plan-input';
+import { beamMeasurements, deckMeasurements } from './demo-measurements';
 
 type ElementInput = PlanInput['elements'][number];
 type FaceInput = ElementInput['faces'][number];
@@ -76,40 +77,6 @@ const plan = (template: TemplateFor, elements: ElementInput[], over: Partial<Pla
   ...over,
 });
 
-const length = (
-  id: string,
-  kind: PlanInput['measurements'][number]['kind'],
-  title: string,
-  elementId: string,
-  least: number | null,
-  most: number | null,
-  required: number,
-) => ({
-  id,
-  kind,
-  title,
-  elementId,
-  quantity: 'length' as const,
-  least,
-  most,
-  expected: null,
-  required,
-  loaded: false,
-});
-
-const share = (id: string, title: string, elementId: string, least: number, required: number) => ({
-  id,
-  kind: 'tie-share' as const,
-  title,
-  elementId,
-  quantity: 'share' as const,
-  least,
-  most: null,
-  expected: null,
-  required,
-  loaded: false,
-});
-
 /** Quay deck, bay 3: the pour that shows most of what can stand in the way. */
 export const quayDeck = (): PlanInput =>
   plan(
@@ -172,13 +139,7 @@ export const quayDeck = (): PlanInput =>
       }),
     ],
     {
-      measurements: [
-        length('chair-height', 'support-height', 'Height of chairs under the top mat', 'deck', 170, 182, 3),
-        length('chair-spacing', 'support-spacing', 'Spacing of chairs', 'deck', null, 1200, 3),
-        share('ties-top', 'Ties of the top mat', 'deck', 50, 3),
-        length('lap-t1', 'lap-length', 'Laps of T1 at the joint', 'deck', 860, null, 2),
-        length('gaps-b1', 'bar-spacing', 'Spacing of B1 over ten gaps', 'deck', 1450, 1550, 2),
-      ],
+      measurements: deckMeasurements,
     },
   );
 
@@ -258,22 +219,7 @@ export const beamLine = (): PlanInput =>
       units: 'in',
       basis: 'aci-318-19',
       mix: { id: 'marine-5000', name: 'Marine 5000 psi, 3/4 in', aggregateMm: 19.05 },
-      measurements: [
-        length('lap-bottom', 'lap-length', 'Laps of the bottom bars', 'beam-c', 1193.8, null, 2),
-        length('tie-spacing', 'bar-spacing', 'Spacing of ties over six gaps', 'beam-c', null, 1219.2, 2),
-        {
-          id: 'bottom-count',
-          kind: 'bar-count',
-          title: 'Bottom bars',
-          elementId: 'beam-c',
-          quantity: 'count',
-          least: 5,
-          most: null,
-          expected: null,
-          required: 1,
-          loaded: false,
-        },
-      ],
+      measurements: beamMeasurements,
     },
   );
 

@@ -118,29 +118,29 @@ async function measurements(scene: Scene, pourId: string, at: number): Promise<v
       measuredAt: new Date(at + minute * MINUTE).toISOString(),
     },
   });
-  const ties = (place: string, tied: number, of: number, minute: number) => ({
+  const ties = (place: string, tied: number, of: number, atEdge: boolean, minute: number) => ({
     type: 'measurement' as const,
     at: at + minute * MINUTE,
     body: {
       itemId: 'ties-top',
       place,
       stage: 'single' as const,
-      value: { quantity: 'share' as const, tied, of },
+      value: { quantity: 'share' as const, tied, of, atEdge },
       measuredAt: new Date(at + minute * MINUTE).toISOString(),
     },
   });
   await scene.record.say(scene.people.inspector, pourId, [
-    length('chair-height', 'grid 3', 176, 0),
-    length('chair-height', 'grid 4', 175, 1),
-    length('chair-height', 'grid 5', 174, 2),
+    length('chair-height', 'grid 3', 146, 0),
+    length('chair-height', 'grid 4', 145, 1),
+    length('chair-height', 'grid 5', 143, 2),
     length('chair-spacing', 'grid 3 to 4', 1080, 4),
     length('chair-spacing', 'grid 4 to 5', 1420, 5),
     length('chair-spacing', 'edge', 1150, 6),
     length('lap-t1', 'joint, bar 4', 885, 8),
     length('lap-t1', 'joint, bar 11', 870, 9),
     length('gaps-b1', 'mid bay', 1502, 11),
-    ties('grid 3, edge', 92, 169, 13),
-    ties('grid 4', 101, 169, 14),
+    ties('grid 3, edge', 92, 169, true, 13),
+    ties('grid 4', 101, 169, false, 14),
   ]);
 }
 

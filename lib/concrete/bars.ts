@@ -152,6 +152,22 @@ export function findBarFor(designation: string, basis: string): Bar | null {
   return findBar(designation) ?? (system ? findBar(designation, system) : null);
 }
 
+const written = (designation: string) =>
+  designation
+    .toLowerCase()
+    .replace(/[^a-z0-9#ø]/g, '')
+    .replace(/(\d)mm$/, '$1');
+
+/**
+ * Do two designations name the same bar? They may be written in different ways ("16 mm", "Ø16"); what the tables do not
+ * know is compared as text. `basis` gives a bare number its system, where it has one.
+ */
+export function isSameBar(one: string, other: string, basis = 'contract'): boolean {
+  const [a, b] = [findBarFor(one, basis), findBarFor(other, basis)];
+  if (a && b) return a.system === b.system && a.designation === b.designation;
+  return written(one) === written(other);
+}
+
 /** Mass in kg of `lengthMm` of a bar, by the mass of its table. */
 export function massOf(of: Bar, lengthMm: number): number {
   return (of.massKgPerM * lengthMm) / 1000;

@@ -5,7 +5,7 @@ import type { LimitFinding } from '@/lib/concrete/limit-verdict';
 import { apartText, numberText } from '@/lib/concrete/number-text';
 import { MM_PER_FOOT } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
-import { arithmetic, trailSource } from '@/lib/concrete/trail-source';
+import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
 
 /** A damaged or patched spot: where it begins along the bar, how long it is (0 for a nick), and its area. */
 export interface CoatingSpot {
@@ -143,6 +143,44 @@ export function judgeEpoxyCoating(
       noFlameCutting('Cut ends: sawn or sheared, then patched', `bare ${bare}, flame-cut ${flame}`),
     ],
   };
+}
+
+/** The limits of an epoxy coating with their trail: those of ASTM D3963 where the contract sets none of its own. */
+export function epoxyLimits(own: { damagedMostPercent: number | null; patchedMostPercent: number | null }): {
+  limits: EpoxyLimits;
+  trail: TrailStep[];
+} {
+  const limit = (field: string, typed: number | null, standard: number, rule: string) => {
+    const percent = typed === null ? standard : positive(field, typed);
+    return { percent, step: (typed === null ? d3963 : fromContract)(rule, `${numberText(percent, 3)} %`) };
+  };
+  const damaged = limit(
+    'damage limit',
+    own.damagedMostPercent,
+    D3963_LIMITS.damagedMostPercent,
+    'Damaged in any foot, before repair, at most',
+  );
+  const patched = limit(
+    'patch limit',
+    own.patchedMostPercent,
+    D3963_LIMITS.patchedMostPercent,
+    'Patched in any foot, at most',
+  );
+  return {
+    limits: { damagedMostPercent: damaged.percent, patchedMostPercent: patched.percent },
+    trail: [damaged.step, patched.step, noFlameCutting('Cut ends', 'sawn or sheared, then patched')],
+  };
+}
+
+/** The damage limit of FRP bars with its trail: that of ACI 440.5M where the contract sets none of its own. */
+export function frpLimit(ownPercent: number | null): { mostPercent: number; trail: TrailStep[] } {
+  const mostPercent = ownPercent === null ? FRP_DAMAGE_MOST_PERCENT : positive('damage limit', ownPercent);
+  const step = (ownPercent === null ? frpDamage : fromContract)(
+    'Visible damage in any metre, at most',
+    `${numberText(mostPercent, 3)} %`,
+    'A depth limit also applies: see the contract.',
+  );
+  return { mostPercent, trail: [step] };
 }
 
 function spotsOf(spots: readonly CoatingSpot[], kind: CoatingSpot['kind']): CoatingSpot[] {

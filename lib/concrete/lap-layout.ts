@@ -9,7 +9,7 @@ import {
 } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { atMost } from '@/lib/concrete/length';
+import { atMost, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { trailSource } from '@/lib/concrete/trail-source';
@@ -36,14 +36,17 @@ export function judgeLap(
  * A starter or a hook: embedded length against what is accepted, and whether the bar held when it was pulled. A starter
  * that moves is not met whatever its length; one that nobody pulled is not verified.
  */
-export function judgeEmbedment(starter: {
-  measuredMm: number;
-  leastMm: number;
-  pulled: 'held' | 'moved' | 'not-pulled' | 'not-a-starter';
-}): LimitFinding {
-  const length = againstLimits('Embedment', notNegative('embedment', starter.measuredMm), {
-    least: positive('least embedment', starter.leastMm),
-  });
+export function judgeEmbedment(
+  starter: {
+    measuredMm: number;
+    leastMm: number;
+    pulled: 'held' | 'moved' | 'not-pulled' | 'not-a-starter';
+  },
+  unit: LengthUnit = 'mm',
+): LimitFinding {
+  const measured = notNegative('embedment', starter.measuredMm);
+  const least = positive('least embedment', starter.leastMm);
+  const length = againstLimits('Embedment', measured, { least }, unit);
   const findings = [length];
   if (starter.pulled === 'moved') {
     findings.unshift({ verdict: 'not-met', side: null, reason: 'The bar moved when it was pulled.' });
@@ -122,6 +125,22 @@ export function shareLapped(query: {
   }
   const value = `${lappedTogether} of ${bars} bars within ${numberText(windowMm, 1)} mm`;
   return { share: lappedTogether / bars, lappedTogether, fromMm, trail: [sectionStep(query.rule, value)] };
+}
+
+/** The length within which laps count as one section, mm, for a tape held along the bars. */
+export function lapSection(rule: LapSectionRule, lapMm: number): { lengthMm: number; trail: TrailStep[] } {
+  const lengthMm = sectionLength(rule, positive('lap length', lapMm));
+  return { lengthMm, trail: [sectionStep(rule, `within ${numberText(lengthMm, 1)} mm`)] };
+}
+
+/** Least distance between the ends of adjacent laps along the bars: 0.3 l0 (EN 1992-1-1 8.7.2(3), from memory). */
+export function enLeastStagger(lapMm: number): { leastMm: number; trail: TrailStep[] } {
+  const leastMm = 0.3 * positive('lap length', lapMm);
+  const step = enArrangement(
+    'Ends of adjacent laps apart at least 0.3 l0',
+    `0.3 × ${numberText(lapMm, 1)} = ${numberText(leastMm, 1)} mm`,
+  );
+  return { leastMm, trail: [step] };
 }
 
 function sectionLength(rule: LapSectionRule, lapMm: number): number {

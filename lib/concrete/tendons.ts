@@ -1,7 +1,7 @@
 import { between, finite, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { MM_PER_INCH } from '@/lib/concrete/length';
+import { MM_PER_INCH, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
@@ -57,6 +57,7 @@ export function tendonBand(
 export function judgeTendonHeight(
   measured: TendonDatum & { heightMm: number },
   planned: TendonDatum & { heightMm: number; minusMm: number; plusMm: number },
+  unit: LengthUnit = 'mm',
 ): LimitFinding & { trail: TrailStep[] } {
   const height = finite('measured height', measured.heightMm);
   const specified = positive('planned height', planned.heightMm);
@@ -75,7 +76,7 @@ export function judgeTendonHeight(
       `the plan has it from ${planned.from} to ${planned.to}: measure again.`;
     return { verdict: 'not-verified', side: null, reason, trail };
   }
-  return { ...againstLimits('Tendon height', height, { least, most }), trail };
+  return { ...againstLimits('Tendon height', height, { least, most }, unit), trail };
 }
 
 /**

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { measuredValue } from './measured-value';
 import {
   digest,
   instant,
@@ -72,18 +73,7 @@ const measurement = z.object({
   itemId: planKey,
   place: optionalText(120),
   stage: z.enum(['single', 'before', 'under', 'after']),
-  value: z.discriminatedUnion('quantity', [
-    z.object({ quantity: z.literal('length'), length: lengthAsEntered }),
-    z.object({ quantity: z.literal('count'), count: z.number().int().nonnegative().max(100_000) }),
-    z
-      .object({
-        quantity: z.literal('share'),
-        of: z.number().int().positive().max(100_000),
-        tied: z.number().int().nonnegative(),
-      })
-      .refine((share) => share.tied <= share.of, { path: ['tied'], message: 'Not more than the total.' }),
-    z.object({ quantity: z.literal('designation'), designation: requiredText(20) }),
-  ]),
+  value: measuredValue,
   measuredAt: instant,
 });
 

@@ -1,5 +1,6 @@
-import { placesMeasured } from './judge-measurements';
+import { conflictHold } from './conflict-hold';
 import type { CheckGroup } from './plan';
+import { markOf } from './holds-measurements';
 import type { CheckState, Hold, PhotoState, Sheet } from './sheet-types';
 
 /** What the groups of a checklist are called on every screen and document. */
@@ -16,85 +17,6 @@ export const checkGroupWords: Record<CheckGroup, string> = {
   access: 'Access and weather',
   'sign-off': 'Sign-off by other trades',
 };
-
-const markOf = (sheet: Sheet, elementId: string | null): string =>
-  sheet.plan.elements.find((one) => one.id === elementId)?.mark ?? 'Whole pour';
-
-/** Holds of the measurements that the plan asks for: out of limits, missing, sent back, in conflict. */
-export function measurementHolds(sheet: Sheet): Hold[] {
-  return sheet.measurements.flatMap((state) => {
-    const { item } = state;
-    const place = {
-      elementId: item.elementId,
-      faceId: null,
-      where: `${markOf(sheet, item.elementId)}, ${item.title}`,
-    };
-    const subjects = [{ kind: 'measurement' as const, id: item.id }];
-    const found: Hold[] = [];
-    const out = state.governing.filter((one) => one.verdict === 'not-met' && one.acceptedBy === null);
-    const worst = out[0];
-    if (worst && state.correctedSince) {
-      found.push({
-        id: `recheck-awaited:measurement:${item.id}`,
-        kind: 'recheck-awaited',
-        title: `Measure again: ${item.title}`,
-        detail: `Corrected: ${state.correctedSince.body.text}`,
-        ...place,
-        since: state.correctedSince.recordedAt,
-        clearedBy: 'inspector',
-        need: 'Measure the corrected places again.',
-        subjects,
-      });
-    } else if (worst) {
-      found.push({
-        id: `measurement-out:${item.id}:${Math.max(...out.map((one) => one.round))}`,
-        kind: 'measurement-out',
-        title: `${item.title}: ${worst.reason}`,
-        detail: `${out.length === 1 ? 'One place' : `${out.length} places`}: ${out.map((one) => one.current?.place || 'place not named').join(', ')}.`,
-        ...place,
-        since: worst.entry.recordedAt,
-        clearedBy: 'superintendent',
-        need: 'Put it right and report the correction, then the inspector measures again; or raise a nonconformance for the engineer.',
-        subjects,
-      });
-    }
-    const measured = placesMeasured(state);
-    if (measured < item.required) {
-      found.push({
-        id: `measurement-missing:${item.id}`,
-        kind: 'measurement-missing',
-        title: `${item.title}: measured at ${measured} of ${item.required} places`,
-        detail: item.loaded ? 'Each place before, under and after a person’s weight.' : '',
-        ...place,
-        since: null,
-        clearedBy: 'inspector',
-        need: 'Measure the places that are left.',
-        subjects,
-      });
-    }
-    if (state.conflict) {
-      found.push(conflictHold(`measurement:${item.id}`, item.title, place, subjects));
-    }
-    return found;
-  });
-}
-
-const conflictHold = (
-  key: string,
-  label: string,
-  place: { elementId: string | null; faceId: string | null; where: string },
-  subjects: Hold['subjects'],
-): Hold => ({
-  id: `conflict:${key}`,
-  kind: 'conflict',
-  title: `Two records of "${label}" that had not seen each other`,
-  detail: 'Both are kept; the less favourable governs.',
-  ...place,
-  since: null,
-  clearedBy: 'inspector',
-  need: 'Record it once more in sight of both, or amend the one that was recorded in error.',
-  subjects,
-});
 
 /** Holds of the checklist: not met each by itself, open ones by group, hold and witness points by themselves, evidence. */
 export function checkHolds(sheet: Sheet): Hold[] {
@@ -186,7 +108,7 @@ function evidenceHold(
         ? `Photo missing: ${state.item.question}`
         : `Photo not stored yet: ${state.item.question}`,
     detail: refused
-      ? `It was refused: ${refused.refused?.body.problem ?? ''} Take it again.`
+      ? `It was refused: ${refused.refused?.body.problem ?? ''}`
       : 'It counts once its bytes are stored and checked.',
     ...place,
     since: state.governing?.recordedAt ?? null,

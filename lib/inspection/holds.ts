@@ -1,5 +1,6 @@
 import { coverHolds } from './holds-cover';
-import { checkHolds, measurementHolds } from './holds-work';
+import { measurementHolds } from './holds-measurements';
+import { checkHolds } from './holds-work';
 import { decisionHolds, signatureHolds } from './holds-people';
 import { inScope } from './scope';
 import type { ReleaseScope } from './entry-bodies';

@@ -1,10 +1,8 @@
-import { barsOf, findBarFor, type BarSystem } from '@/lib/concrete/bars';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
-import type { CoverRequirement, CoverRequirementInput } from '@/lib/concrete/cover-input';
-import { coverRequirement } from '@/lib/concrete/cover-requirement';
 import { defaultPointCount, drawPoints } from '@/lib/concrete/reading-points';
-import { depthTolerance } from '@/lib/concrete/tolerances';
-import type { Face, Plan, ReadingPoint, Requirement } from './plan';
+import { issueMeasurement } from './issue-measurement';
+import { barDiameter, issueRequirement } from './issue-requirement';
+import type { Element, Face, Plan, ReadingPoint } from './plan';
 import type { PlanInput } from './plan-input';
 
 export interface IssueContext {
@@ -28,143 +26,6 @@ function at<T>(path: string, compute: () => T): T {
       throw new ConcreteError(`${path}.${error.field}`, error.reason, error.kind);
     throw error;
   }
-}
-
-function barDiameter(designation: string, basis: PlanInput['basis']): number {
-  const bar = findBarFor(designation, basis);
-  if (!bar)
-    throw new ConcreteError(
-      'barDesignation',
-      `There is no bar "${designation}" in the bar tables. Write it as #5, 16 mm, 15M, N16 or IS 16.`,
-    );
-  return bar.diameterMm;
-}
-
-function issueRequirement(
-  input: PlanInput,
-  element: ElementInput,
-  face: FaceInput,
-  wanted: FaceInput['requirements'][number],
-): Requirement {
-  const barDiameterMm = barDiameter(wanted.barDesignation, input.basis);
-  const coverFor = (diameterMm: number) =>
-    coverRequirement(coverInputOf(input, element, face, wanted, diameterMm));
-  const computed = coverFor(barDiameterMm);
-  const depth = depthOf(input, element, face, wanted);
-  return {
-    id: wanted.id,
-    steel: wanted.steel,
-    barDesignation: wanted.barDesignation,
-    barDiameterMm,
-    ...(wanted.bundleOf === undefined ? {} : { bundleOf: wanted.bundleOf }),
-    ...(wanted.mainBar === undefined ? {} : { mainBar: wanted.mainBar }),
-    ...computed,
-    warnings: [...computed.warnings],
-    trail: [...computed.trail],
-    asFound: stricterBars(input, wanted.barDesignation, computed.leastAcceptedMm, coverFor),
-    ...(depth ? { depth } : {}),
-  };
-}
-
-function coverInputOf(
-  input: PlanInput,
-  element: ElementInput,
-  face: FaceInput,
-  wanted: FaceInput['requirements'][number],
-  barDiameterMm: number,
-): CoverRequirementInput {
-  return {
-    basis: input.basis,
-    element: element.type,
-    meeting: face.meeting,
-    soffit: face.soffit,
-    exposure: face.exposure,
-    barDiameterMm,
-    thicknessMm: element.thicknessMm,
-    ...(element.effectiveDepthMm === null ? {} : { effectiveDepthMm: element.effectiveDepthMm }),
-    ...(wanted.contractSpecifiedMm === null ? {} : { contractSpecifiedMm: wanted.contractSpecifiedMm }),
-    ...(wanted.contractMinusMm === null ? {} : { contractMinusMm: wanted.contractMinusMm }),
-    ...(wanted.contractPlusMm === null ? {} : { contractPlusMm: wanted.contractPlusMm }),
-    ...(wanted.neverLess ? { neverLess: true } : {}),
-    ...(input.mix ? { aggregateMm: input.mix.aggregateMm } : {}),
-    ...(wanted.bundleOf === undefined ? {} : { bundleOf: wanted.bundleOf }),
-    ...input.concrete,
-    showIn: input.units,
-  };
-}
-
-const barSystems: Record<PlanInput['basis'], BarSystem | null> = {
-  'aci-318-19': 'astm',
-  'en-1992': 'en',
-  'csa-a23.1': 'csa',
-  'as-3600': 'as-nzs',
-  'is-456': 'is',
-  contract: null,
-};
-
-/** The bar sizes of the basis that would ask for more cover than the planned one: kept, so that a device needs no tables. */
-function stricterBars(
-  input: PlanInput,
-  planned: string,
-  leastAcceptedMm: number,
-  coverFor: (diameterMm: number) => CoverRequirement,
-): NonNullable<Requirement['asFound']> {
-  const system = barSystems[input.basis];
-  if (!system) return [];
-  return barsOf(system).flatMap((bar) => {
-    if (bar.designation === findBarFor(planned, input.basis)?.designation) return [];
-    try {
-      const found = coverFor(bar.diameterMm);
-      return found.leastAcceptedMm > leastAcceptedMm
-        ? [
-            {
-              barDesignation: bar.designation,
-              leastAcceptedMm: found.leastAcceptedMm,
-              mostAcceptedMm: found.mostAcceptedMm,
-            },
-          ]
-        : [];
-    } catch (error) {
-      // A size that does not fit this section at all is no size to be judged by here.
-      if (error instanceof ConcreteError) return [];
-      throw error;
-    }
-  });
-}
-
-/** Effective depth is judged where the steel is the main bar, the element has one planned, and the basis has a tolerance. */
-function depthOf(
-  input: PlanInput,
-  element: ElementInput,
-  face: FaceInput,
-  wanted: FaceInput['requirements'][number],
-): Requirement['depth'] {
-  if (!wanted.mainBar || element.effectiveDepthMm === null) return undefined;
-  if (input.basis === 'contract') {
-    // The contract's own deviations of cover move the steel by as much: down by the plus, up by the minus.
-    const { contractMinusMm, contractPlusMm } = wanted;
-    if (contractPlusMm === null) return undefined;
-    return {
-      plannedMm: element.effectiveDepthMm,
-      minusMm: contractPlusMm,
-      plusMm: contractMinusMm ?? 0,
-      trail: [],
-    };
-  }
-  const tolerance = depthTolerance(
-    {
-      basis: input.basis,
-      element: element.type,
-      meeting: face.meeting,
-      thicknessMm: element.thicknessMm,
-      showIn: input.units,
-      ...(input.concrete?.toleranceClass === undefined
-        ? {}
-        : { toleranceClass: input.concrete.toleranceClass }),
-    },
-    element.effectiveDepthMm,
-  );
-  return { plannedMm: element.effectiveDepthMm, ...tolerance };
 }
 
 /**
@@ -264,6 +125,7 @@ function refuseSharedIds(plan: Plan): void {
  * @throws ConcreteError with the path of the field and the reason (unknown bar, impossible section, exposure missing)
  */
 export function issuePlan(input: PlanInput, context: IssueContext): Plan {
+  const elements = input.elements.map((element) => issueElement(input, context.pourId, element));
   const plan: Plan = {
     schema: 1,
     ...context,
@@ -274,35 +136,14 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
     rainLimitMm: input.rainLimitMm,
     mix: input.mix,
     ...(input.concrete ? { concrete: input.concrete } : {}),
-    elements: input.elements.map((element) => ({
-      id: element.id,
-      type: element.type,
-      mark: element.mark,
-      location: element.location,
-      level: element.level,
-      thicknessMm: element.thicknessMm,
-      effectiveDepthMm: element.effectiveDepthMm,
-      drawing: element.drawing,
-      faces: element.faces.map((face) => issueFace(input, context.pourId, element, face)),
-      layers: element.layers.map((layer) => ({
-        ...layer,
-        barDiameterMm: at(`elements.${element.id}.layers.${layer.id}`, () =>
-          barDiameter(layer.barDesignation, input.basis),
-        ),
-      })),
-    })),
-    measurements: input.measurements.map((item) => ({
-      ...item,
-      trail: [
-        {
-          rule: 'Limits typed for this plan',
-          clause: '',
-          edition: '',
-          value: limitWords(item),
-          provenance: 'contract' as const,
-        },
-      ],
-    })),
+    elements,
+    measurements: input.measurements.map((item) =>
+      at(`measurements.${item.id}`, () => {
+        const element = elements.find((one) => one.id === item.elementId);
+        if (!element) throw new ConcreteError('elementId', 'Choose an element of this plan.', 'absent');
+        return issueMeasurement(item, { basis: input.basis, units: input.units, mix: input.mix, element });
+      }),
+    ),
     checklist: input.checklist,
     lastWalk: input.lastWalk,
   };
@@ -310,11 +151,22 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
   return plan;
 }
 
-function limitWords(item: PlanInput['measurements'][number]): string {
-  if (item.expected) return item.expected;
-  const unit = item.quantity === 'length' ? ' mm' : item.quantity === 'share' ? ' %' : '';
-  if (item.least !== null && item.most !== null) return `${item.least} to ${item.most}${unit}`;
-  if (item.least !== null) return `at least ${item.least}${unit}`;
-  if (item.most !== null) return `at most ${item.most}${unit}`;
-  return 'no limit';
+function issueElement(input: PlanInput, pourId: string, element: ElementInput): Element {
+  return {
+    id: element.id,
+    type: element.type,
+    mark: element.mark,
+    location: element.location,
+    level: element.level,
+    thicknessMm: element.thicknessMm,
+    effectiveDepthMm: element.effectiveDepthMm,
+    drawing: element.drawing,
+    faces: element.faces.map((face) => issueFace(input, pourId, element, face)),
+    layers: element.layers.map((layer) => ({
+      ...layer,
+      barDiameterMm: at(`elements.${element.id}.layers.${layer.id}`, () =>
+        barDiameter(layer.barDesignation, input.basis),
+      ),
+    })),
+  };
 }

@@ -1,69 +1,16 @@
-import { judgeLimits } from '@/lib/concrete/judge-measurement';
 import type { Verdict } from '@/lib/concrete/judge-reading';
 import { acceptedAsSeen } from './acceptances';
 import { amended } from './amendments';
 import { headsOf, saw, type Placed } from './causality';
 import type { EntryOf } from './entry';
 import { subjectKey } from './facts';
+import { judgeMeasured } from './judge-measured';
 import type { JudgingContext } from './judge-point';
-import type { MeasurementItem, Plan } from './plan';
 import type { MeasurementState } from './sheet-types';
 
 type Body = EntryOf<'measurement'>['body'];
 type Place = MeasurementState['places'][number];
 const favour: Record<Verdict, number> = { 'not-met': 0, 'not-verified': 1, met: 2 };
-
-const normalised = (text: string) => text.toLowerCase().replace(/[\s#]/g, '');
-
-/** Judges one measured value by the limits that the plan froze for its item. */
-export function judgeMeasurement(
-  item: MeasurementItem,
-  body: Body,
-  units: Plan['units'],
-): { verdict: Verdict; reason: string } {
-  const value = body.value;
-  if (value.quantity !== item.quantity)
-    return { verdict: 'not-verified', reason: 'The value is not of the kind that the plan asks for.' };
-  switch (value.quantity) {
-    case 'length': {
-      if (value.length.mm === null)
-        return { verdict: 'not-verified', reason: 'The unit is missing. State it to have this judged.' };
-      const judged = judgeLimits(
-        value.length.mm,
-        { least: item.least ?? undefined, most: item.most ?? undefined },
-        units,
-      );
-      return { verdict: judged.verdict, reason: judged.reason };
-    }
-    case 'count':
-      return byNumber(value.count, item, String(value.count));
-    case 'share': {
-      // Compared as whole ties, so that no rounding of a percentage decides.
-      const needed = item.least === null ? 0 : Math.ceil((item.least / 100) * value.of - 1e-9);
-      const words = `${value.tied} of ${value.of} tied`;
-      return value.tied >= needed
-        ? { verdict: 'met', reason: `${words}, at least ${needed} asked for.` }
-        : { verdict: 'not-met', reason: `${words}, at least ${needed} asked for.` };
-    }
-    case 'designation': {
-      const same = item.expected !== null && normalised(item.expected) === normalised(value.designation);
-      return same
-        ? { verdict: 'met', reason: `Found ${value.designation}, as planned.` }
-        : {
-            verdict: 'not-met',
-            reason: `Found ${value.designation}, planned ${item.expected ?? 'nothing'}. A larger bar is a departure too.`,
-          };
-    }
-  }
-}
-
-function byNumber(count: number, item: MeasurementItem, words: string): { verdict: Verdict; reason: string } {
-  if (item.least !== null && count < item.least)
-    return { verdict: 'not-met', reason: `${words} found, at least ${item.least} asked for.` };
-  if (item.most !== null && count > item.most)
-    return { verdict: 'not-met', reason: `${words} found, at most ${item.most} allowed.` };
-  return { verdict: 'met', reason: `${words} found, as asked for.` };
-}
 
 const placeKey = (entry: EntryOf<'measurement'>, body: Body) =>
   `${body.place.trim().toLowerCase() || entry.id}/${body.stage}`;
@@ -78,14 +25,18 @@ export function judgeMeasurements(context: JudgingContext): MeasurementState[] {
     const eventsByPlace = new Map<string, Placed[]>();
     const places: Place[] = (facts.measurementsByItem.get(item.id) ?? []).map((entry) => {
       const result = amended(facts, entry, (before, after) => {
-        const was = judgeMeasurement(item, before, plan.units).verdict;
-        return was === 'not-met' && judgeMeasurement(item, after, plan.units).verdict !== 'not-met';
+        const was = judgeMeasured(item, before.value, plan).verdict;
+        return was === 'not-met' && judgeMeasured(item, after.value, plan).verdict !== 'not-met';
       });
       conflict ||= result.conflict;
       const rivals = result.rivals
         .filter((body): body is Body => body !== null)
-        .map((body) => ({ body, judged: judgeMeasurement(item, body, plan.units) }))
-        .sort((a, b) => favour[a.judged.verdict] - favour[b.judged.verdict]);
+        .map((body) => ({ body, judged: judgeMeasured(item, body.value, plan) }))
+        .sort(
+          (a, b) =>
+            favour[a.judged.verdict] - favour[b.judged.verdict] ||
+            (a.judged.margin ?? 0) - (b.judged.margin ?? 0),
+        );
       const least = rivals[0];
       const events = eventsByPlace.get(placeKey(entry, entry.body)) ?? [];
       eventsByPlace.set(placeKey(entry, entry.body), [
@@ -93,7 +44,7 @@ export function judgeMeasurements(context: JudgingContext): MeasurementState[] {
         entry,
         ...result.amendments.map((one) => one.entry),
       ]);
-      const judged = least?.judged ?? judgeMeasurement(item, entry.body, plan.units);
+      const judged = least?.judged ?? judgeMeasured(item, entry.body.value, plan);
       return {
         entry,
         current: least?.body ?? null,
@@ -113,14 +64,30 @@ export function judgeMeasurements(context: JudgingContext): MeasurementState[] {
     const failing = governing.filter((place) => place.verdict === 'not-met');
     const correctedSince =
       corrections.findLast((correction) => failing.some((place) => !saw(place.entry, correction))) ?? null;
-    return { item, places, governing, correctedSince, conflict };
+    const measured = new Set(governing.map(keyOfPlace));
+    const unverified = places.filter(
+      (place) =>
+        place.current !== null && place.verdict === 'not-verified' && !measured.has(keyOfPlace(place)),
+    );
+    const roundAsked = 1 + corrections.length;
+    return { item, places, governing, unverified, correctedSince, roundAsked, conflict };
   });
 }
 
-/** The less favourable of two measurements; equal ones by id, so that order of arrival decides nothing. */
+const keyOfPlace = (place: Place) => placeKey(place.entry, place.current ?? place.entry.body);
+
+/**
+ * The less favourable of two measurements: by verdict, then by how far beyond the limit. Where nothing tells which of two
+ * failures is worse, one that no decision accepts comes first; equal ones by id, so that order of arrival decides nothing.
+ */
 function lessFavourable(one: Place, other: Place): Place {
   const difference = favour[one.verdict] - favour[other.verdict];
   if (difference !== 0) return difference < 0 ? one : other;
+  if (one.margin !== null && other.margin !== null) {
+    if (one.margin !== other.margin) return one.margin < other.margin ? one : other;
+  } else if ((one.acceptedBy === null) !== (other.acceptedBy === null)) {
+    return one.acceptedBy === null ? one : other;
+  }
   return one.entry.id < other.entry.id ? one : other;
 }
 
@@ -128,7 +95,7 @@ function governingPlaces(places: Place[]): Place[] {
   const groups = new Map<string, Place[]>();
   for (const place of places) {
     if (place.current === null || place.verdict === 'not-verified') continue;
-    const key = placeKey(place.entry, place.current);
+    const key = keyOfPlace(place);
     groups.set(key, [...(groups.get(key) ?? []), place]);
   }
   return [...groups.values()]
@@ -136,7 +103,7 @@ function governingPlaces(places: Place[]): Place[] {
       const latest = Math.max(...group.map((place) => place.round));
       return group.filter((place) => place.round === latest).reduce(lessFavourable);
     })
-    .sort((a, b) => favour[a.verdict] - favour[b.verdict]);
+    .sort((a, b) => favour[a.verdict] - favour[b.verdict] || (a.margin ?? 0) - (b.margin ?? 0));
 }
 
 /** Places measured in full: every stage where the item is measured before, under and after load. */

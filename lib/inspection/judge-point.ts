@@ -1,3 +1,4 @@
+import { isSameBar } from '@/lib/concrete/bars';
 import { judgeEffectiveDepth } from '@/lib/concrete/effective-depth';
 import { judgeReading, type JudgedReading } from '@/lib/concrete/judge-reading';
 import { acceptedAsSeen } from './acceptances';
@@ -58,13 +59,9 @@ function judgeBody(
   );
 }
 
-const normalised = (bar: string) => bar.toLowerCase().replace(/[^a-z0-9#ø]/g, '');
-
 /** Is this another bar than the plan asks for? A larger bar is a departure too. */
 export const isOtherBar = (requirement: Requirement, asFoundBar: string | null): boolean =>
-  asFoundBar !== null &&
-  asFoundBar !== '' &&
-  normalised(asFoundBar) !== normalised(requirement.barDesignation);
+  asFoundBar !== null && asFoundBar !== '' && !isSameBar(asFoundBar, requirement.barDesignation);
 
 /** A bar that was not planned is judged by the stricter of the two: the plan keeps which sizes ask for more. */
 export function limitsFor(
@@ -72,10 +69,7 @@ export function limitsFor(
   asFoundBar: string | null,
 ): Pick<Requirement, 'leastAcceptedMm' | 'mostAcceptedMm'> {
   if (asFoundBar === null || !isOtherBar(requirement, asFoundBar)) return requirement;
-  return (
-    requirement.asFound?.find((one) => normalised(one.barDesignation) === normalised(asFoundBar)) ??
-    requirement
-  );
+  return requirement.asFound?.find((one) => isSameBar(one.barDesignation, asFoundBar)) ?? requirement;
 }
 
 /** Effective depth from a reading to the main bar; null where the requirement has none, or nothing can be told. */

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { instant, lengthUnit, optionalText, planKey, positiveMillimetres, requiredText } from './primitives';
+import { measurementInput } from './measurement-item';
 import {
   acceptanceBasis,
   checkItem,
@@ -8,7 +9,6 @@ import {
   elementType,
   layer,
   meeting,
-  measurementItem,
   mix,
   opening,
   recess,
@@ -77,7 +77,7 @@ export const planInput = z.object({
   mix: mix.nullable(),
   concrete: concreteInput.optional(),
   elements: z.array(elementInput).min(1, 'Add at least one element.').max(60),
-  measurements: z.array(measurementItem.omit({ trail: true })).max(200),
+  measurements: z.array(measurementInput).max(200),
   checklist: z.object({
     template: requiredText(80),
     version: z.number().int().positive(),

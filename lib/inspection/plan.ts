@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { measurementItem } from './measurement-item';
 import {
   digest,
   instant,
@@ -9,6 +10,7 @@ import {
   positiveMillimetres,
   requiredText,
 } from './primitives';
+import { trailStep } from './trail-step';
 
 export const elementTypes = [
   'slab',
@@ -39,15 +41,6 @@ export const decisionRule = z.discriminatedUnion('kind', [
   z.object({ kind: z.literal('guarded'), guardMm: z.number().nonnegative().max(50).optional() }),
 ]);
 export type DecisionRule = z.infer<typeof decisionRule>;
-
-export const trailStep = z.object({
-  rule: z.string(),
-  clause: z.string(),
-  edition: z.string(),
-  value: z.string(),
-  provenance: z.enum(['contract', 'seen', 'partly-seen', 'memory', 'computed', 'common-practice']),
-  note: z.string().optional(),
-});
 
 /** What a reading to one steel of a face is judged by; frozen when the plan is issued. */
 export const requirement = z.object({
@@ -144,39 +137,6 @@ export const layer = z.object({
 });
 export type Layer = z.infer<typeof layer>;
 
-export const measurementKinds = [
-  'support-height',
-  'support-spacing',
-  'tie-share',
-  'bar-spacing',
-  'bar-count',
-  'bar-size',
-  'clear-distance',
-  'lap-length',
-  'embedment',
-  'coating-damage',
-  'tendon-height',
-] as const;
-export const measurementKind = z.enum(measurementKinds);
-export type MeasurementKind = z.infer<typeof measurementKind>;
-
-/** A measurement that the plan asks for, with the limits it is judged by. Lengths in mm, shares in per cent, counts as such. */
-export const measurementItem = z.object({
-  id: planKey,
-  kind: measurementKind,
-  title: requiredText(120),
-  elementId: planKey,
-  /** What the value is: a length, a count of bars, tied of total, or a bar mark. */
-  quantity: z.enum(['length', 'count', 'share', 'designation']),
-  least: z.number().finite().nullable(),
-  most: z.number().finite().nullable(),
-  expected: optionalText(40).nullable(),
-  /** How many places have to be measured. */
-  required: z.number().int().min(1).max(50),
-  /** Measured before, under and after a person's weight. */
-  loaded: z.boolean(),
-  trail: z.array(trailStep),
-});
 export type MeasurementItem = z.infer<typeof measurementItem>;
 
 export const element = z.object({
@@ -228,6 +188,7 @@ export const checkItem = z.object({
 export type CheckItem = z.infer<typeof checkItem>;
 
 export const mix = z.object({ id: planKey, name: requiredText(80), aggregateMm: positiveMillimetres });
+export type Mix = z.infer<typeof mix>;
 
 /** What some codes ask of the concrete before they give a cover; each is only needed by the basis that names it. */
 export const concreteInput = z.object({

@@ -87,11 +87,19 @@ export interface MeasurementState {
     amendments: AppliedAmendment[];
     verdict: Verdict;
     reason: string;
+    /** Distance to the nearer limit, negative beyond it; null where nothing was compared as a number. */
+    margin: number | null;
+    /** More than rework to the drawings can mend: the engineer decides. */
+    engineer: boolean;
     round: number;
     acceptedBy: EntryOf<'disposition'> | null;
   }[];
   /** Those that count now: the latest round of each place, least favourable first. */
   governing: MeasurementState['places'];
+  /** Those that count neither way, at places where nothing that counts was measured. */
+  unverified: MeasurementState['places'];
+  /** The round that is asked for now. */
+  roundAsked: number;
   correctedSince: EntryOf<'correction'> | null;
   conflict: boolean;
 }

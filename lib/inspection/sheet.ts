@@ -17,7 +17,7 @@ import type { Sheet } from './sheet-types';
 export type { RecordedEntry } from './facts';
 
 /** Raised whenever the same plan and entries would fold into another sheet: cached sheets of another version are thrown away. */
-export const FOLD_VERSION = 1;
+export const FOLD_VERSION = 2;
 
 /** What one fold leaves for the next of the same pour: facts already collected and places already judged. */
 export interface FoldMemo {
