@@ -1,9 +1,8 @@
 'use client';
 
-import { timeAway } from './field-time';
 import { useSnapshot } from './use-device';
 import { useNow } from './use-now';
-import { entriesWords, waitingWords } from './waiting-words';
+import { entriesWords, waitingWords, waitsWords } from './waiting-words';
 
 /** Whose work waits on this shared device, how much and how old: it is sent only once they sign in themselves. */
 export function OthersWaiting() {
@@ -17,8 +16,7 @@ export function OthersWaiting() {
       <ul>
         {others.map(({ id, name, waiting }) => (
           <li key={id}>
-            {name}: {waitingWords(waiting)} not sent
-            {waiting.oldestAt && `, oldest from ${timeAway(waiting.oldestAt, now)}`}
+            {name}: {waitsWords(waiting, now)}
           </li>
         ))}
       </ul>

@@ -7,13 +7,12 @@ import { classNames } from '@/components/ui/class-names';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
 import type { PersonOnDevice } from '@/lib/device/device-types';
 import { problemsOf } from './body-problems';
-import { timeAway } from './field-time';
 import { PinPad } from './pin-pad';
 import { Screen } from './screen';
 import { SignInLink } from './sign-in-link';
 import { useDevice, useSnapshot } from './use-device';
 import { useNow } from './use-now';
-import { waitingWords } from './waiting-words';
+import { waitsWords } from './waiting-words';
 
 /** Who is holding this device: everybody who has signed in here, each behind a PIN. Nothing of anybody's work shows. */
 export function PeopleScreen() {
@@ -75,7 +74,6 @@ function PersonRow({
 }) {
   const now = useNow();
   const { waiting, pin } = person;
-  const waits = waitingWords(waiting);
   return (
     <li className="border-b border-rule last:border-b-0">
       <button
@@ -89,9 +87,7 @@ function PersonRow({
       >
         <span className="block font-label text-lead font-semibold">{person.name}</span>
         <span className="block text-label text-pencil">
-          {waits
-            ? `${waits} not sent${waiting.oldestAt ? `, oldest from ${timeAway(waiting.oldestAt, now)}` : ''}`
-            : 'nothing waits'}
+          {waitsWords(waiting, now) || 'nothing waits'}
           {pin.state !== 'set' && ' · opens with the password'}
         </span>
       </button>

@@ -80,7 +80,7 @@ export function PinPad({
       <p role="status" className="sr-only">
         {busy ? 'Looking' : `${pin.length} digits typed`}
       </p>
-      <p role="alert" className="min-h-[2.9em] text-center font-label font-semibold text-hold">
+      <p role="alert" className="min-h-[4.35em] text-center font-label font-semibold text-hold">
         {problem}
         {left > 0 && <span className="block">The keys are free again in {waitWords(left)}.</span>}
       </p>

@@ -54,7 +54,7 @@ export function PinScreen() {
     }
   };
   return (
-    <Screen title="Your PIN on this device" back={{ href: fieldPaths.pours, words: 'pours' }} form>
+    <Screen title="Your PIN" aside="on this device" back={{ href: fieldPaths.pours, words: 'pours' }} form>
       <div className="mx-auto grid max-w-md gap-4">
         {kept ? (
           <Notice
