@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { correctedTogether } from '@/components/field/corrected-together';
+import { correctedTogether, failingOnFace } from '@/components/field/corrected-together';
 import { failingBeside, nonconformanceDraft } from '@/components/field/nonconformance-draft';
 import { holdPath } from '@/components/field/hold-path';
 import { clockWords, notSentWords, syncWords } from '@/components/field/sync-words';
@@ -38,6 +38,32 @@ test('a correction of a nonconformance is about the points it names, so that the
     kind: 'point',
     id: 'soffit.A2',
   });
+});
+
+test('a report on a face offers each point that fails, and marks what the engineer is asked about', () => {
+  const story = new PourStory();
+  story.reads('A1', 60);
+  story.reads('A2', 31);
+  story.reads('B1', 30);
+  story.tells('inspector', 'nonconformance', {
+    title: 'Low cover',
+    about: [{ kind: 'point', id: 'soffit.A2' }],
+    where: { elementId: 'deck', faceId: 'soffit', text: 'A2' },
+    extent: 'one bar',
+    description: '',
+    proposal: 'Leave it',
+    neededBy: null,
+  });
+  const sheet = foldSheet(smallPlan(), story.recorded);
+  expect(failingOnFace(sheet, 'soffit').map(({ label, asked }) => [label, asked])).toEqual([
+    ['A2', true],
+    ['B1', false],
+  ]);
+  const cover = holds(sheet, story.now).filter((hold) => hold.kind === 'cover-not-met');
+  expect(cover.map((hold) => [hold.clearedBy, hold.subjects.map((one) => one.id)]).sort()).toEqual([
+    ['engineer', ['soffit.A2']],
+    ['superintendent', ['soffit.B1']],
+  ]);
 });
 
 test('every hold leads to a screen that exists', () => {
