@@ -124,6 +124,7 @@ function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFro
     const answer = revises
       ? await postJson(`/api/pours/${revises.pourId}/plan`, {
           reason: read.input.reason,
+          basedOn: revises.basedOn,
           plan: read.input.plan,
         })
       : await postJson('/api/pours', read.input);

@@ -2,7 +2,7 @@ import { v7 as uuid } from 'uuid';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { AppError } from '@/lib/inspection/app-error';
 import { issuePlan } from '@/lib/inspection/issue-plan';
-import type { Plan } from '@/lib/inspection/plan';
+import { revisionLetter, type Plan } from '@/lib/inspection/plan';
 import type { PlanInput, PourInput } from '@/lib/inspection/plan-input';
 import { currentPlans, insertPlan, insertPour } from '@/db/stores/pour-store';
 import type { Tx } from '@/db/connection';
@@ -60,7 +60,12 @@ export async function revisePlan(
   const record = await OpenRecord.open(tx, pour.projectId, author, now);
   const previous = (await currentPlans(tx, pour.projectId, [pour.id])).get(pour.id);
   if (!previous) throw new AppError('not-found');
-  if (wanted.basedOn !== undefined && wanted.basedOn !== previous.revision) throw new AppError('conflict');
+  if (wanted.basedOn !== undefined && wanted.basedOn !== previous.revision) {
+    throw new AppError(
+      'conflict',
+      `Plan rev ${revisionLetter(previous.revision)} was issued meanwhile; nothing was issued now. What you typed is still here: open the plan in another tab, compare, and carry over what differs.`,
+    );
+  }
   const revision = previous.revision + 1;
   const context = { pourId: pour.id, revision, issuedAt: now, authorId: author.id, reason: wanted.reason };
   const plan = withFields(() => issuePlan(wanted.plan, context));
