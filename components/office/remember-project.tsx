@@ -14,7 +14,7 @@ export function RememberProject({ projectId }: { projectId: string }) {
       ?.slice(PROJECT_COOKIE.length + 1);
     if (kept === projectId) return;
     keepProject(projectId);
-    if (kept !== undefined) router.refresh();
+    router.refresh();
   }, [projectId, router]);
   return null;
 }
