@@ -243,7 +243,12 @@ const wording: Wording = {
   'hold-lifted': (body, context) => {
     const hold = context.entries.get(body.holdId);
     return {
-      title: hold?.type === 'hold' ? `Hold lifted: ${hold.body.title}` : 'Hold lifted',
+      title:
+        hold?.type === 'hold'
+          ? `Hold lifted: ${hold.body.title}`
+          : hold?.type === 'verbal-instruction'
+            ? `Verbal instruction from ${hold.body.from} confirmed in writing`
+            : 'Hold lifted',
       lines: [body.reason],
     };
   },
