@@ -183,7 +183,12 @@ export class OpenRecord {
   }
 
   private writeConsequences(pourId: string): void {
-    for (const body of voidsFollowing(this.sheet(pourId), this.now)) this.write(pourId, 'release-void', body);
+    // A void sets signatures aside, and a release of another part may rest on the same ones: until none follows.
+    for (;;) {
+      const [body] = voidsFollowing(this.sheet(pourId), this.now);
+      if (!body) break;
+      this.write(pourId, 'release-void', body);
+    }
     const placement = placedWithoutRelease(this.sheet(pourId));
     if (placement) {
       this.write(pourId, 'placing-without-release', { at: placement.body.at, placementId: placement.id });

@@ -109,6 +109,11 @@ describe('the object store refuses', () => {
       () => ({ ...address, headers: { 'Content-Type': 'text/html' } }),
       '403 SignatureDoesNotMatch',
     ],
+    [
+      'a header that asks for more than was signed',
+      () => ({ ...address, headers: { ...address.headers, 'x-amz-copy-source': '/photos/photos/other' } }),
+      '403 AccessDenied',
+    ],
   ])('%s', async (_what, wrong, code) => {
     expect(await codeOf(await put(wrong(), taken.bytes))).toBe(code);
     expect(kept()).toEqual([]);

@@ -16,12 +16,12 @@ const mailPayload = z.object({
   projectId: recordId,
   pourId: recordId,
   entryId: recordId,
+  personId: recordId.optional(),
 });
 const photoPayload = z.object({ projectId: recordId, photoId: recordId });
 const certificatePayload = z.object({ projectId: recordId, pourId: recordId, entryId: recordId });
 
 const now = () => new Date().toISOString();
-const sent = new Set<string>();
 
 /** A task that says what became of it, a line each; a thrown error is logged and the job is tried again later. */
 function told(name: string, work: (payload: unknown) => Promise<unknown>): Task {
@@ -49,20 +49,31 @@ function told(name: string, work: (payload: unknown) => Promise<unknown>): Task 
   };
 }
 
-/** Writes the voids of all releases whose validity is over. */
-export async function expireDueReleases(at: string): Promise<number> {
+/**
+ * Writes the voids of all releases whose validity is over. A pour that cannot be read keeps none of the others back.
+ * @returns how many entries were written
+ * @throws Error naming the pours that could not, once all were tried
+ */
+async function expireDueReleases(at: string): Promise<number> {
   const due = await database().transaction((tx) => releasesDue(tx, at));
-  for (const pour of due) {
-    await database().transaction(async (tx) => {
-      await enterProject(tx, pour.projectId);
-      await expireReleases(tx, { id: pour.pourId, projectId: pour.projectId }, at);
-    });
+  const errors: string[] = [];
+  let written = 0;
+  for (const { projectId, pourId } of due) {
+    try {
+      written += await database().transaction(async (tx) => {
+        await enterProject(tx, projectId);
+        return expireReleases(tx, { id: pourId, projectId }, at);
+      });
+    } catch (error) {
+      errors.push(`${pourId}: ${String(error)}`);
+    }
   }
-  return due.length;
+  if (errors.length > 0) throw new Error(`Some releases could not be expired: ${errors.join('; ')}`);
+  return written;
 }
 
 export const tasks: TaskList = {
-  mail: told('mail', (payload) => sendEventMail(mailPayload.parse(payload), now(), sent)),
+  mail: told('mail', (payload) => sendEventMail(mailPayload.parse(payload), now())),
   'verify-photo': told('verify-photo', (payload) => {
     const { projectId, photoId } = photoPayload.parse(payload);
     return verifyPhoto(projectId, photoId, now);

@@ -1,16 +1,25 @@
 import type { Entry, EntryOf } from '@/lib/inspection/entry';
+import type { ReleaseScope } from '@/lib/inspection/entry-bodies';
 import { revisionLetter } from '@/lib/inspection/plan';
 import { roleWords, type Role } from '@/lib/inspection/roles';
 import type { Hold, Sheet } from '@/lib/inspection/sheet-types';
 import type { MailPayload } from '../jobs/enqueue-job';
 
-/** Who is told of what, by role. */
+const everybodyButCrew: readonly Role[] = [
+  'superintendent',
+  'inspector',
+  'engineer',
+  'coordinator',
+  'viewer',
+];
+
+/** Who is told of what, by role. Whoever was told of a release is told that it is void. */
 export const toldTo: Record<MailPayload['kind'], readonly Role[]> = {
   hold: ['superintendent', 'inspector'],
   'disposition-asked': ['engineer', 'superintendent'],
   decided: ['superintendent', 'inspector', 'engineer'],
-  released: ['superintendent', 'inspector', 'engineer', 'coordinator', 'viewer'],
-  void: ['superintendent', 'inspector', 'engineer'],
+  released: everybodyButCrew,
+  void: everybodyButCrew,
 };
 
 export interface MailContext {
@@ -74,6 +83,12 @@ export function composeMail(context: MailContext): { subject: string; text: stri
   return { subject: `${pour.number} ${headline}`, text };
 }
 
+function scopeWords({ elementIds, limits }: ReleaseScope, sheet: Sheet): string {
+  if (elementIds === null) return 'the whole pour';
+  const marks = new Map(sheet.plan.elements.map((element) => [element.id, element.mark]));
+  return `${elementIds.map((id) => marks.get(id) ?? id).join(', ')}. Limits: ${limits}`;
+}
+
 function eventOf(context: MailContext): { headline: string; lines: string[]; link: string } {
   const { entry, pour, nameOf, project } = context;
   const by = `${nameOf(entry.authorId)}, ${inZone(entry.recordedAt, project.timeZone)}`;
@@ -110,7 +125,7 @@ function eventOf(context: MailContext): { headline: string; lines: string[]; lin
         headline: `Released, number ${entry.body.number}`,
         lines: [
           `Released by ${by}.`,
-          `Scope: ${entry.body.scope.elementIds === null ? 'the whole pour' : `${entry.body.scope.elementIds.length} elements, ${entry.body.scope.limits}`}.`,
+          `Scope: ${scopeWords(entry.body.scope, context.sheet)}.`,
           `Valid until the start of placing, at the latest ${inZone(entry.body.validUntil, project.timeZone)}.`,
           ...entry.body.conditions.map((condition) => `During placing: ${condition}`),
           'At the points read and for the items checked. Formwork, shoring and the authority’s own inspection are not covered unless signed for.',
