@@ -98,8 +98,7 @@ export function limitWords(item: MeasurementItem, units: Plan['units']): string 
 function rangeWords({ quantity, least, most }: MeasurementItem, units: Plan['units']): string {
   const isLength = quantity === 'length' || quantity === 'starter' || quantity === 'height';
   const unit = quantity === 'share' || quantity === 'part' ? ' %' : '';
-  const show = (value: number) =>
-    isLength ? withUnit(value, units) : `${formatLength(value, 'mm')}${unit}`;
+  const show = (value: number) => (isLength ? withUnit(value, units) : `${formatLength(value, 'mm')}${unit}`);
   if (least !== null && most !== null) return `${show(least)} to ${show(most)}`;
   if (least !== null) return `at least ${show(least)}`;
   return most === null ? 'no limit' : `at most ${show(most)}`;
