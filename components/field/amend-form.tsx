@@ -12,6 +12,7 @@ import { FormProblem } from './form-problem';
 import type { OpenSheet } from './open-sheet';
 import { PhotoForm } from './photo-form';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 type Replacement = BodyOf<'amendment'>['replacement'];
 
@@ -25,12 +26,15 @@ export function AmendForm({
   entry: Entry;
   current: Record<string, unknown>;
 }) {
-  const [draft, setDraft] = useState<AmendmentDraft | null>(() => amendmentDraft(entry, current));
-  const [reason, setReason] = useState('');
+  const again = useRefusedAgain('amendment', (body) => body.rootId === entry.id);
+  const [draft, setDraft] = useState<AmendmentDraft | null>(() =>
+    amendmentDraft(entry, again?.body.replacement ?? current),
+  );
+  const [reason, setReason] = useState(again?.body.reason ?? '');
   const [photoId, setPhotoId] = useState<string | null>(null);
   const [asking, setAsking] = useState(false);
   const [own, setOwn] = useState<Record<string, string>>({});
-  const { busy, problems, clearProblems, record } = useRecord(open);
+  const { busy, problems, clearProblems, record } = useRecord(open, again);
   const all = { ...problems, ...own };
 
   const send = (replacement: Replacement) =>

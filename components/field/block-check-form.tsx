@@ -10,6 +10,7 @@ import { ChoiceList } from './choice-list';
 import { FormProblem } from './form-problem';
 import type { OpenSheet } from './open-sheet';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 const shifts = [
   { value: 'start', label: 'Start of shift' },
@@ -22,6 +23,14 @@ const asMm = (text: string, unit: LengthUnit): number | null => {
   return parsed.ok ? parsed.length.mm : null;
 };
 
+const SHIFT_MS = 14 * 3_600_000;
+
+/** A shift has one start: what was checked within the last hours is in its middle by now. */
+function nextCheck(state: InstrumentState): 'start' | 'middle' {
+  const last = state.blockChecks.at(-1)?.body;
+  return last && last.when !== 'end' && Date.now() - Date.parse(last.at) < SHIFT_MS ? 'middle' : 'start';
+}
+
 /** A reading on a known block, at the start, in the middle and at the end of a shift. */
 export function BlockCheckForm({
   open,
@@ -33,15 +42,16 @@ export function BlockCheckForm({
   onKept: () => void;
 }) {
   const unit = open.sheet.plan.units;
-  const last = state.blockChecks.at(-1)?.body;
-  const [when, setWhen] = useState<'start' | 'middle' | 'end'>('start');
+  const again = useRefusedAgain('block-check', (body) => body.instrumentId === state.instrumentId);
+  const last = again?.body ?? state.blockChecks.at(-1)?.body;
+  const [when, setWhen] = useState<'start' | 'middle' | 'end'>(again?.body.when ?? nextCheck(state));
   const [block, setBlock] = useState(last ? formatLength(last.blockMm, unit) : '');
   const [tolerance, setTolerance] = useState(
     last ? formatLength(last.toleranceMm, unit) : unit === 'mm' ? '1' : '1/16',
   );
-  const [read, setRead] = useState('');
+  const [read, setRead] = useState(again ? formatLength(again.body.readMm, unit) : '');
   const [missing, setMissing] = useState<Record<string, string>>({});
-  const { busy, problems, record } = useRecord(open);
+  const { busy, problems, record } = useRecord(open, again);
 
   const values = { blockMm: asMm(block, unit), readMm: asMm(read, unit), toleranceMm: asMm(tolerance, unit) };
   const complete = values.blockMm !== null && values.readMm !== null && values.toleranceMm !== null;

@@ -17,6 +17,7 @@ import { FormProblem } from './form-problem';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { answerWords } from './state-tone';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 type Answer = 'met' | 'not-met' | 'not-applicable';
 const tones: Record<Answer, Tone> = { met: 'met', 'not-met': 'hold', 'not-applicable': 'plain' };
@@ -26,8 +27,11 @@ export function CheckCard({ open, check }: { open: OpenSheet; check: CheckState 
   const { item, governing } = check;
   const { role } = open.project;
   const mayAnswer = mayRecord('answer', role) && (role === 'inspector' || item.closedBy === role);
-  const [draft, setDraft] = useState<{ answer: Answer; text: string } | null>(null);
-  const { busy, problems, clearProblems, record } = useRecord(open);
+  const again = useRefusedAgain('answer', (body) => body.checkId === item.id);
+  const [draft, setDraft] = useState<{ answer: Answer; text: string } | null>(
+    again && { answer: again.body.answer, text: again.body.reason ?? again.body.note ?? '' },
+  );
+  const { busy, problems, clearProblems, record } = useRecord(open, again);
   const about = { kind: 'check', id: item.id } as const;
 
   const keep = async (answer: Answer, text: string) => {
@@ -43,6 +47,12 @@ export function CheckCard({ open, check }: { open: OpenSheet; check: CheckState 
     clearProblems();
     setDraft((before) => ({ answer, text: before?.text ?? '' }));
   };
+  // A glove that bounces on the key must not write the answer twice; after a correction it is a new answer.
+  const settled =
+    governing?.body.answer === 'met' &&
+    governing.authorId === open.person.id &&
+    !check.correctedSince &&
+    !check.conflict;
   const photoMissing =
     item.evidence === 'photo' && governing?.body.answer === 'met' && check.photoIds.length === 0;
   const answer = governing?.body.answer;
@@ -101,7 +111,9 @@ export function CheckCard({ open, check }: { open: OpenSheet; check: CheckState 
             answer="met"
             now={answer}
             busy={busy}
-            onPress={() => void keep('met', draft?.answer === 'met' ? draft.text : '')}
+            onPress={() =>
+              settled ? setDraft(null) : void keep('met', draft?.answer === 'met' ? draft.text : '')
+            }
           />
           <AnswerKey answer="not-met" now={answer} busy={busy} onPress={() => begin('not-met')} />
           {item.notApplicable && (

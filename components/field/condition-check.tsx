@@ -6,6 +6,7 @@ import { dayAndTime } from './field-time';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { OutcomeForm } from './outcome-form';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 const stageWords = {
   'before-pour': 'before the pour',
@@ -16,7 +17,8 @@ const stageWords = {
 /** A condition of a decision, and the inspector's word that it is met. */
 export function ConditionCheck({ open, state }: { open: OpenSheet; state: ConditionState }) {
   const { condition, verified } = state;
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('condition-verified', (body) => body.conditionId === condition.id);
+  const { busy, problems, record } = useRecord(open, again);
   return (
     <section className="grid gap-2 border-t border-rule pt-2">
       <h3 className="font-label font-semibold">
@@ -39,6 +41,7 @@ export function ConditionCheck({ open, state }: { open: OpenSheet; state: Condit
           label="What you looked at"
           busy={busy}
           problems={problems}
+          first={again?.body ?? null}
           onKeep={async (outcome, text) =>
             (await record('condition-verified', { conditionId: condition.id, outcome, text })) !== null
           }

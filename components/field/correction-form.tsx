@@ -20,19 +20,21 @@ import { Screen } from './screen';
 import { SubjectSelect } from './subject-select';
 import { subjectWords, whereOf } from './subject-words';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 /** Reports what was put right: by the superintendent or the crew, with a photo. The inspector then looks again. */
 export function CorrectionForm({ open, about: given }: { open: OpenSheet; about: SubjectRef | null }) {
   const { sheet, pour } = open;
   const [about, setAbout] = useState<SubjectRef>(given ?? { kind: 'pour', id: sheet.pourId });
-  const [text, setText] = useState('');
+  const again = useRefusedAgain('correction');
+  const [text, setText] = useState(again?.body.text ?? '');
   const [kept, setKept] = useState(false);
   const [choices] = useState(() => (given?.kind === 'face' ? failingOnFace(sheet, given.id) : []));
   const [chosen, setChosen] = useState<readonly string[]>(() =>
     choices.filter((one) => !one.asked).map((one) => one.key),
   );
   const [unchosen, setUnchosen] = useState(false);
-  const { busy, problems, record } = useRecord(open);
+  const { busy, problems, record } = useRecord(open, again);
   const back = { href: fieldPaths.holds(sheet.pourId), words: 'holds' };
   if (!mayRecord('correction', open.project.role)) {
     return (

@@ -5,14 +5,17 @@ import { classNames } from '@/components/ui/class-names';
 export function Disclosure({
   summary,
   className,
+  startOpen = false,
   children,
 }: {
   summary: ReactNode;
   className?: string;
+  /** Open when the screen is drawn first. */
+  startOpen?: boolean;
   children: ReactNode;
 }) {
   return (
-    <details className={classNames('group', className)}>
+    <details open={startOpen || undefined} className={classNames('group', className)}>
       <summary className="flex min-h-target list-none items-center justify-between gap-3 font-label font-semibold [&::-webkit-details-marker]:hidden">
         {summary}
         <svg

@@ -30,7 +30,8 @@ export function EntryForm({
       onChange={() => setKept(false)}
       onSubmit={(event) => {
         event.preventDefault();
-        void onKeep().then(setKept);
+        // A glove that bounces on the key must not write it twice; whatever is changed can be kept anew.
+        if (!kept) void onKeep().then(setKept);
       }}
     >
       {children}

@@ -1,6 +1,5 @@
 'use client';
 
-import { EmptyState } from '@/components/ui/empty-state';
 import { classNames } from '@/components/ui/class-names';
 import { isAmendable } from '@/lib/inspection/amendments';
 import { mayRecord } from '@/lib/inspection/entry-access';
@@ -8,6 +7,7 @@ import type { Entry } from '@/lib/inspection/entry';
 import { roleWords } from '@/lib/inspection/roles';
 import { AmendForm } from './amend-form';
 import { amendmentsOf, currentBody } from './current-body';
+import { EntryNotHere } from './entry-not-here';
 import { entryTitle } from './entry-title';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
@@ -43,7 +43,7 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
   if (!entry) {
     return (
       <Screen title="Entry" back={{ href: fieldPaths.pour(sheet.pourId), words: open.pour.number }}>
-        <EmptyState title="This entry is not on this device">It may not have been fetched yet.</EmptyState>
+        <EntryNotHere id={entryId} what="entry" />
       </Screen>
     );
   }

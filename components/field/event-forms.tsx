@@ -12,19 +12,22 @@ import { EntryForm } from './entry-form';
 import { instantOfField, localFieldText } from './field-time';
 import type { OpenSheet } from './open-sheet';
 import { SubjectSelect } from './subject-select';
-import { whereOf } from './subject-words';
+import { subjectAt, whereOf } from './subject-words';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
-const nowText = (open: OpenSheet) => localFieldText(new Date().toISOString(), open.project.timeZone);
+const timeText = (open: OpenSheet, at: string | undefined) =>
+  localFieldText(at ?? new Date().toISOString(), open.project.timeZone);
 
 /** Placing started or finished; without a release it goes on record as that. */
 export function PlacementForm({ open }: { open: OpenSheet }) {
+  const again = useRefusedAgain('placement');
   const [event, setEvent] = useState<'started' | 'finished'>(
-    open.sheet.placing.started ? 'finished' : 'started',
+    again?.body.event ?? (open.sheet.placing.started ? 'finished' : 'started'),
   );
-  const [at, setAt] = useState(() => nowText(open));
-  const [elementIds, setElementIds] = useState<string[] | null>(null);
-  const { busy, problems, record } = useRecord(open);
+  const [at, setAt] = useState(() => timeText(open, again?.body.at));
+  const [elementIds, setElementIds] = useState<string[] | null>(again?.body.elementIds ?? null);
+  const { busy, problems, record } = useRecord(open, again);
   const unreleased = open.state !== 'released' && open.state !== 'placing' && event === 'started';
   return (
     <EntryForm
@@ -69,10 +72,11 @@ export function PlacementForm({ open }: { open: OpenSheet }) {
 
 /** Notice that a pour is ready to be inspected: when and where. */
 export function InspectionAskedForm({ open }: { open: OpenSheet }) {
-  const [readyAt, setReadyAt] = useState(() => nowText(open));
-  const [place, setPlace] = useState(open.pour.location);
-  const [text, setText] = useState('');
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('inspection-asked');
+  const [readyAt, setReadyAt] = useState(() => timeText(open, again?.body.readyAt));
+  const [place, setPlace] = useState(again?.body.place ?? open.pour.location);
+  const [text, setText] = useState(again?.body.text ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   return (
     <EntryForm
       label="Ask for the inspection"
@@ -114,12 +118,16 @@ export function InspectionAskedForm({ open }: { open: OpenSheet }) {
 
 /** A hold set by hand, with who lifts it and what is needed. */
 export function HoldForm({ open }: { open: OpenSheet }) {
-  const [title, setTitle] = useState('');
-  const [need, setNeed] = useState('');
-  const [clearedBy, setClearedBy] = useState<Role>('superintendent');
-  const [onBehalfOf, setOnBehalfOf] = useState('');
-  const [about, setAbout] = useState<SubjectRef>({ kind: 'pour', id: open.sheet.pourId });
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('hold');
+  const was = again?.body;
+  const [title, setTitle] = useState(was?.title ?? '');
+  const [need, setNeed] = useState(was?.need ?? '');
+  const [clearedBy, setClearedBy] = useState<Role>(was?.clearedBy ?? 'superintendent');
+  const [onBehalfOf, setOnBehalfOf] = useState(was?.onBehalfOf ?? '');
+  const [about, setAbout] = useState<SubjectRef>(
+    (was && subjectAt(was.where)) ?? { kind: 'pour', id: open.sheet.pourId },
+  );
+  const { busy, problems, record } = useRecord(open, again);
   const keep = async () => {
     const entry = await record('hold', {
       title,
@@ -180,10 +188,11 @@ export function HoldForm({ open }: { open: OpenSheet }) {
 
 /** An instruction given by word of mouth: it holds until it is signed. */
 export function VerbalInstructionForm({ open }: { open: OpenSheet }) {
-  const [from, setFrom] = useState('');
-  const [text, setText] = useState('');
-  const [signedBy, setSignedBy] = useState('');
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('verbal-instruction');
+  const [from, setFrom] = useState(again?.body.from ?? '');
+  const [text, setText] = useState(again?.body.text ?? '');
+  const [signedBy, setSignedBy] = useState(again?.body.signedBy ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   const keep = async () => {
     const entry = await record('verbal-instruction', { from, text, signedBy: signedBy.trim() || null });
     if (!entry) return false;
@@ -225,9 +234,12 @@ export function VerbalInstructionForm({ open }: { open: OpenSheet }) {
 
 /** A note about the pour or a part of it. */
 export function NoteForm({ open }: { open: OpenSheet }) {
-  const [about, setAbout] = useState<SubjectRef>({ kind: 'pour', id: open.sheet.pourId });
-  const [text, setText] = useState('');
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('note');
+  const [about, setAbout] = useState<SubjectRef>(
+    again?.body.about ?? { kind: 'pour', id: open.sheet.pourId },
+  );
+  const [text, setText] = useState(again?.body.text ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   const keep = async () => {
     if (!(await record('note', { about, text }))) return false;
     setText('');

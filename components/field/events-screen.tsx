@@ -12,6 +12,7 @@ import { nameOf, type OpenSheet } from './open-sheet';
 import { Screen } from './screen';
 import { SiteEventForm } from './site-event-form';
 import { Disclosure } from './disclosure';
+import { useRefusedType } from './use-refused-again';
 
 const shownTypes: readonly EntryType[] = [
   'site-event',
@@ -27,6 +28,7 @@ const shownTypes: readonly EntryType[] = [
 export function EventsScreen({ open }: { open: OpenSheet }) {
   const { sheet, pour, project } = open;
   const { role } = project;
+  const asked = useRefusedType();
   const shown = sheet.entries.filter((entry) => shownTypes.includes(entry.type)).toReversed();
   const forms: { type: EntryType; title: string; form: ReactNode }[] = [
     { type: 'site-event', title: 'Rain, or something changed', form: <SiteEventForm open={open} /> },
@@ -48,7 +50,12 @@ export function EventsScreen({ open }: { open: OpenSheet }) {
           {forms
             .filter(({ type }) => mayRecord(type, role))
             .map(({ type, title, form }) => (
-              <Disclosure key={type} className="border-b border-rule px-3 last:border-b-0" summary={title}>
+              <Disclosure
+                key={type}
+                className="border-b border-rule px-3 last:border-b-0"
+                summary={title}
+                startOpen={type === asked}
+              >
                 <div className="pb-4">{form}</div>
               </Disclosure>
             ))}

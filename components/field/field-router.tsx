@@ -11,7 +11,8 @@ export function useFieldRoute(): FieldRoute {
 
 /** Goes to another screen of the offline side without a request. */
 export function goTo(path: string): void {
-  if (path !== window.location.pathname) window.history.pushState(null, '', path);
+  const { pathname, search } = window.location;
+  if (path !== `${pathname}${search}`) window.history.pushState(null, '', path);
 }
 
 /** Goes back where there is something to go back to within the application, else to the path given. */

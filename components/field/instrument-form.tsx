@@ -5,23 +5,28 @@ import { Button } from '@/components/ui/button';
 import { Select } from '@/components/ui/select';
 import { TextInput } from '@/components/ui/text-input';
 import { FormProblem } from './form-problem';
-import { instantOfField } from './field-time';
+import { instantOfField, localFieldText } from './field-time';
 import { instrumentKindWords } from './instrument-words';
 import type { OpenSheet } from './open-sheet';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 type Kind = keyof typeof instrumentKindWords;
 const kinds = Object.keys(instrumentKindWords) as Kind[];
 
 /** Adds an instrument to the project: its name on site, kind, number, calibration and uncertainty. */
 export function InstrumentForm({ open, onKept }: { open: OpenSheet; onKept: () => void }) {
-  const [name, setName] = useState('');
-  const [kind, setKind] = useState<Kind>('depth-gauge');
-  const [serial, setSerial] = useState('');
-  const [due, setDue] = useState('');
-  const [uncertainty, setUncertainty] = useState('');
+  const again = useRefusedAgain('instrument-status');
+  const was = again?.body;
+  const [name, setName] = useState(was?.name ?? '');
+  const [kind, setKind] = useState<Kind>(was?.kind ?? 'depth-gauge');
+  const [serial, setSerial] = useState(was?.serial ?? '');
+  const [due, setDue] = useState(() =>
+    was?.calibrationDue ? localFieldText(was.calibrationDue, open.project.timeZone).slice(0, 10) : '',
+  );
+  const [uncertainty, setUncertainty] = useState(was?.uncertaintyMm == null ? '' : String(was.uncertaintyMm));
   const [numberProblem, setNumberProblem] = useState<string | null>(null);
-  const { busy, problems, record } = useRecord(open);
+  const { busy, problems, record } = useRecord(open, again);
 
   const keep = async () => {
     const uncertaintyMm = uncertainty.trim() === '' ? null : Number(uncertainty);

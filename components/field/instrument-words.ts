@@ -26,6 +26,7 @@ export function instrumentStanding(
     };
   }
   if (standing === 'unknown') return { words: 'nothing known', tone: 'hold', good: false };
+  if (state.status?.body.kind === 'block') return { words: 'in service', tone: 'met', good: true };
   const last = state.blockChecks.findLast((check) => blockCheckPasses(check.body));
   const today = last && Date.parse(at.now) - Date.parse(last.body.at) < 14 * 3_600_000;
   return today

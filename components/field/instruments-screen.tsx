@@ -17,6 +17,7 @@ import type { OpenSheet } from './open-sheet';
 import { Screen } from './screen';
 import { useSnapshot } from './use-device';
 import { useNow } from './use-now';
+import { useRefusedAgain } from './use-refused-again';
 import { blockCheckPasses } from '@/lib/inspection/instruments';
 import { formatInstant } from '@/components/ui/format-instant';
 
@@ -25,8 +26,11 @@ export function InstrumentsScreen({ open }: { open: OpenSheet }) {
   const { sheet, pour, project } = open;
   const { sync } = useSnapshot();
   const nowMs = useNow();
-  const [adding, setAdding] = useState(false);
-  const [checking, setChecking] = useState<InstrumentState | null>(null);
+  const again = { check: useRefusedAgain('block-check'), added: useRefusedAgain('instrument-status') };
+  const [adding, setAdding] = useState(again.added !== null);
+  const [checking, setChecking] = useState<InstrumentState | null>(
+    () => sheet.instruments.find((one) => one.instrumentId === again.check?.body.instrumentId) ?? null,
+  );
   const at = {
     now: new Date(nowMs).toISOString(),
     timeZone: project.timeZone,

@@ -12,16 +12,22 @@ import { FormProblem } from './form-problem';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { Screen } from './screen';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 /** The walk over traffic routes, openings and reworked places, right before the release. */
 export function LastWalkScreen({ open }: { open: OpenSheet }) {
   const { sheet, pour, project } = open;
-  const [places, setPlaces] = useState(() =>
-    sheet.corrections.length > 0 ? 'Traffic routes, openings, reworked places' : 'Traffic routes, openings',
+  const again = useRefusedAgain('last-walk');
+  const [places, setPlaces] = useState(
+    () =>
+      again?.body.places ??
+      (sheet.corrections.length > 0
+        ? 'Traffic routes, openings, reworked places'
+        : 'Traffic routes, openings'),
   );
-  const [outcome, setOutcome] = useState<'met' | 'not-met' | ''>('');
+  const [outcome, setOutcome] = useState<'met' | 'not-met' | ''>(again?.body.outcome ?? '');
   const [asked, setAsked] = useState(false);
-  const { busy, problems, record } = useRecord(open);
+  const { busy, problems, record } = useRecord(open, again);
   const routes = sheet.plan.elements.flatMap((element) =>
     element.faces.flatMap((face) =>
       face.points

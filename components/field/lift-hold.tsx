@@ -9,12 +9,14 @@ import { dayAndTime } from './field-time';
 import { FormProblem } from './form-problem';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 /** A hold set by hand: what it needs, and its lifting by the one who may. */
 export function LiftHold({ open, hold }: { open: OpenSheet; hold: EntryOf<'hold'> }) {
   const state = open.sheet.manualHolds.find((one) => one.entry.id === hold.id);
-  const [reason, setReason] = useState('');
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('hold-lifted', (body) => body.holdId === hold.id);
+  const [reason, setReason] = useState(again?.body.reason ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   if (state?.lifted) {
     return (
       <p className="border-l-4 border-met bg-sheet p-3">

@@ -13,11 +13,13 @@ import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { FormProblem } from './form-problem';
 import { emptyMeasure, measuredValue, type Measure } from './measure-draft';
+import { measureOfValue } from './measure-of-value';
 import { MeasureInput } from './measure-input';
 import type { OpenSheet } from './open-sheet';
 import { signalVerdict } from './signal-verdict';
 import { useDevice } from './use-device';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 type Stage = BodyOf<'measurement'>['stage'];
 export const stageWords: Record<Stage, string> = {
@@ -45,12 +47,15 @@ export function MeasurementForm({
 }) {
   const { item } = state;
   const device = useDevice();
-  const [place, setPlace] = useState(() => nextPlace(state));
-  const [stage, setStage] = useState<Stage>(item.loaded ? 'before' : 'single');
-  const [measure, setMeasure] = useState<Measure>(() => emptyMeasure(item));
+  const again = useRefusedAgain('measurement', (body) => body.itemId === item.id);
+  const [place, setPlace] = useState(() => again?.body.place ?? nextPlace(state));
+  const [stage, setStage] = useState<Stage>(again?.body.stage ?? (item.loaded ? 'before' : 'single'));
+  const [measure, setMeasure] = useState<Measure>(() =>
+    again ? measureOfValue(again.body.value, open.sheet.plan.units) : emptyMeasure(item),
+  );
   const [problem, setProblem] = useState<string | null>(null);
   const [keptId, setKeptId] = useState<string | null>(null);
-  const { busy, problems, record } = useRecord(open);
+  const { busy, problems, record } = useRecord(open, again);
   const kept = state.places.find((one) => one.entry.id === keptId);
   const about = { kind: 'measurement', id: item.id } as const;
 

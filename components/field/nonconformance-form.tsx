@@ -10,7 +10,7 @@ import { mayRecord } from '@/lib/inspection/entry-access';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import { goBackTo } from './field-router';
 import { fieldPaths } from './field-routes';
-import { instantOfField } from './field-time';
+import { instantOfField, localFieldText } from './field-time';
 import { FormProblem } from './form-problem';
 import { failingBeside, nonconformanceDraft } from './nonconformance-draft';
 import type { OpenSheet } from './open-sheet';
@@ -18,21 +18,25 @@ import { Screen } from './screen';
 import { SubjectSelect } from './subject-select';
 import { subjectWords, whereOf } from './subject-words';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 import { Disclosure } from './disclosure';
 
 /** Raises a nonconformance: what and where are filled in; extent, a proposal and a time are asked for. */
 export function NonconformanceForm({ open, about: given }: { open: OpenSheet; about: SubjectRef | null }) {
   const { sheet, pour } = open;
+  const again = useRefusedAgain('nonconformance');
   const [about, setAbout] = useState<SubjectRef>(given ?? { kind: 'pour', id: sheet.pourId });
-  const [draft] = useState(() => nonconformanceDraft(sheet, about));
+  const [draft] = useState(() => again?.body ?? nonconformanceDraft(sheet, about));
   const [title, setTitle] = useState(draft.title);
   const [extent, setExtent] = useState(draft.extent);
-  const [description, setDescription] = useState('');
-  const [proposal, setProposal] = useState('');
-  const [neededBy, setNeededBy] = useState('');
+  const [description, setDescription] = useState(again?.body.description ?? '');
+  const [proposal, setProposal] = useState(again?.body.proposal ?? '');
+  const [neededBy, setNeededBy] = useState(() =>
+    again?.body.neededBy ? localFieldText(again.body.neededBy, open.project.timeZone) : '',
+  );
   const beside = failingBeside(sheet, about);
-  const [also, setAlso] = useState<readonly string[]>([]);
-  const { busy, problems, record } = useRecord(open);
+  const [also, setAlso] = useState<readonly string[]>(() => draft.about.slice(1).map((one) => one.id));
+  const { busy, problems, record } = useRecord(open, again);
 
   const back = given?.kind === 'point' ? whereOf(sheet, given).faceId : null;
   const from = back ? fieldPaths.face(sheet.pourId, back) : fieldPaths.pour(sheet.pourId);

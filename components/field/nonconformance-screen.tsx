@@ -1,11 +1,11 @@
 'use client';
 
-import { EmptyState } from '@/components/ui/empty-state';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { toneText } from '@/components/ui/tone';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import { ConditionCheck } from './condition-check';
+import { EntryNotHere } from './entry-not-here';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
@@ -32,9 +32,7 @@ export function NonconformanceScreen({ open, id }: { open: OpenSheet; id: string
   if (!state) {
     return (
       <Screen title="Nonconformance" back={back}>
-        <EmptyState title="This nonconformance is not on this device">
-          It may not have been fetched yet.
-        </EmptyState>
+        <EntryNotHere id={id} what="nonconformance" />
       </Screen>
     );
   }

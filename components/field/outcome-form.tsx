@@ -13,16 +13,19 @@ export function OutcomeForm({
   label,
   busy,
   problems,
+  first = null,
   onKeep,
 }: {
   legend: ReactNode;
   label: string;
   busy: boolean;
   problems: Problems;
+  /** What the form begins with: an answer that was refused. */
+  first?: { outcome: 'met' | 'not-met'; text: string } | null;
   onKeep: (outcome: 'met' | 'not-met', text: string) => Promise<boolean>;
 }) {
-  const [outcome, setOutcome] = useState<'met' | 'not-met' | ''>('');
-  const [text, setText] = useState('');
+  const [outcome, setOutcome] = useState<'met' | 'not-met' | ''>(first?.outcome ?? '');
+  const [text, setText] = useState(first?.text ?? '');
   const [asked, setAsked] = useState(false);
   const choose = (value: string) => setOutcome(value === 'met' ? 'met' : 'not-met');
   return (

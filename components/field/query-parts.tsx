@@ -9,6 +9,7 @@ import { dayAndTime } from './field-time';
 import { FormProblem } from './form-problem';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 /** Questions about an entry: each holds until it is answered. Where the entry is a query, its answer. */
 export function QueryParts({ open, entry }: { open: OpenSheet; entry: Entry }) {
@@ -35,9 +36,10 @@ function QueryShown({
   open: OpenSheet;
   query: { entry: EntryOf<'query'>; answer: EntryOf<'query-answered'> | null };
 }) {
-  const [text, setText] = useState('');
-  const { busy, problems, record } = useRecord(open);
   const { entry, answer } = query;
+  const again = useRefusedAgain('query-answered', (body) => body.queryId === entry.id);
+  const [text, setText] = useState(again?.body.text ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   const said = (one: Entry) =>
     `${nameOf(open, one.authorId)} · ${dayAndTime(one.recordedAt, open.project.timeZone)}`;
   return (
@@ -80,8 +82,9 @@ function QueryShown({
 }
 
 function AskForm({ open, entryId }: { open: OpenSheet; entryId: string }) {
-  const [text, setText] = useState('');
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('query', (body) => body.entryId === entryId);
+  const [text, setText] = useState(again?.body.text ?? '');
+  const { busy, problems, record } = useRecord(open, again);
   return (
     <form
       noValidate

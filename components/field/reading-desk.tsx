@@ -1,29 +1,30 @@
 'use client';
 
 import { useEffect, useRef, useState } from 'react';
-import { Dialog } from '@/components/ui/dialog';
 import { Button } from '@/components/ui/button';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { withUnit } from '@/lib/concrete/length';
 import type { BodyOf } from '@/lib/inspection/entry';
 import type { FaceState } from '@/lib/inspection/sheet-types';
-import { FaceSection, FaceTable, NEW_SPOT, onTape, WorkingMap } from './face-drawings';
+import { FaceSection, FaceTable, NEW_SPOT, WorkingMap } from './face-drawings';
+import { governingBeside } from './governing-beside';
 import { instrumentStanding } from './instrument-words';
-import { JudgedPanel } from './judged-panel';
 import { FieldLink } from './field-router';
 import { onwardFrom } from './onward';
 import { BlockKeys, Keypad } from './keypad';
 import type { FaceOfPlan, OpenSheet } from './open-sheet';
-import { PointActions, PointReadings } from './point-readings';
-import { pressed, readPresses, type Press } from './reading-keys';
+import { pressed, pressesOf, readPresses, type Press } from './reading-keys';
 import { ReadingContextBar, type Picker } from './reading-context-bar';
+import { ReadingPanels, type Panel } from './reading-panels';
 import { ReadingPicker } from './reading-pickers';
 import { ReadingReadout } from './reading-readout';
 import { readingTarget, type Chosen } from './reading-target';
+import { RefusedStrip } from './refused-strip';
 import { useSnapshot } from './use-device';
 import { findReading, useKeepReading } from './use-keep-reading';
 import { useNow } from './use-now';
 import { useReadingSettings } from './use-reading-settings';
+import { useRefusedAgain } from './use-refused-again';
 import { useTypedKeys } from './use-typed-keys';
 import { VerdictStrip } from './verdict-strip';
 import { nextPoint } from './walk-order';
@@ -42,20 +43,28 @@ export function ReadingDesk({
   firstKey: string | null;
 }) {
   const { face } = place;
-  const setup = useReadingSettings(open, face);
+  const again = useRefusedAgain('reading', (body) => body.faceId === face.id);
+  const setup = useReadingSettings(open, face, again?.body);
   const { unit, requirement, instrument } = setup;
   const { sync } = useSnapshot();
   const nowMs = useNow();
-  const [presses, setPresses] = useState<readonly Press[]>([]);
+  const [refilled] = useState<readonly Press[]>(() =>
+    again?.body.value ? pressesOf(again.body.value, unit) : [],
+  );
+  const [presses, setPresses] = useState(refilled);
   const [chosen, setChosen] = useState<Chosen | null>(() =>
-    firstKey ? { kind: 'point', key: firstKey } : null,
+    again?.body.spot
+      ? { kind: 'spot', place: again.body.spot }
+      : firstKey
+        ? { kind: 'point', key: firstKey }
+        : null,
   );
   const [from, setFrom] = useState<{ xMm: number; yMm: number; key?: string } | null>(null);
   const [picker, setPicker] = useState<Picker | null>(null);
-  const [panel, setPanel] = useState<'how' | 'point' | null>(null);
+  const [panel, setPanel] = useState<Panel | null>(null);
   const [doubted, setDoubted] = useState<readonly Press[] | null>(null);
   const [asFoundBar, setAsFoundBar] = useState('');
-  const { busy, problem, kept, keep, undo, say } = useKeepReading(open, setup.settings.sound);
+  const { busy, problem, kept, keep, undo, say } = useKeepReading(open, setup.settings.sound, again);
 
   const shownRequirement = requirement ?? face.requirements[0];
   const target = readingTarget(state, chosen, from);
@@ -96,7 +105,8 @@ export function ReadingDesk({
       ...said,
       instrumentId: instrument.instrumentId,
       phase: 'before',
-      measuredAt: new Date().toISOString(),
+      // What is sent again unchanged was measured when it was measured.
+      measuredAt: again && typed === refilled ? again.body.measuredAt : new Date().toISOString(),
       asFoundBar: asFoundBar.trim() || null,
       measurer: null,
     });
@@ -180,12 +190,14 @@ export function ReadingDesk({
           block={setup.isBlock ? withUnit(setup.blockMm, unit) : null}
           onShowReadings={() => setPanel('point')}
         />
+        {kept && !last && <RefusedStrip entryId={kept.entryId} />}
         {last && kept && (
           <VerdictStrip
             open={open}
             reading={last.reading}
             label={last.point.label}
             pointKey={last.point.key}
+            governs={governingBeside(last.point, last.reading)}
             unit={unit}
             onUndo={
               kept.undoable
@@ -242,46 +254,14 @@ export function ReadingDesk({
         standingAt={standingAt}
         onClose={() => setPicker(null)}
       />
-      <Dialog
-        open={panel === 'how' && last !== null}
-        title="How was this judged?"
+      <ReadingPanels
+        which={panel}
+        open={open}
+        last={last?.reading ?? null}
+        target={target}
+        unit={unit}
         onClose={() => setPanel(null)}
-        closeOutside
-      >
-        {last && (
-          <JudgedPanel
-            reading={last.reading}
-            plan={open.sheet.plan}
-            instrument={
-              open.sheet.instruments.find(
-                (one) => one.instrumentId === last.reading.entry.body.instrumentId,
-              ) ?? null
-            }
-            unit={unit}
-          />
-        )}
-      </Dialog>
-      <Dialog
-        open={panel === 'point' && target?.point !== undefined}
-        title={`Readings at ${target?.label ?? ''}`}
-        onClose={() => setPanel(null)}
-        closeOutside
-      >
-        {target?.point && (
-          <>
-            <PointReadings open={open} point={target.point} />
-            <PointActions open={open} point={target.point} />
-          </>
-        )}
-        {target?.point?.point?.reason && (
-          <p className="mt-3 text-pencil">Chosen: {target.point.point.reason}.</p>
-        )}
-        {target && (
-          <p className="mt-3 text-label text-pencil">
-            {onTape(target.place.xMm, unit)} {unit} from the left, {onTape(target.place.yMm, unit)} {unit} up.
-          </p>
-        )}
-      </Dialog>
+      />
     </div>
   );
 }

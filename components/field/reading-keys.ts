@@ -41,6 +41,13 @@ export function pressed(presses: readonly Press[], press: Press): readonly Press
   return [...presses, press];
 }
 
+/** The presses that say a length again as it was entered, with its unit where the keypad is set to another. */
+export function pressesOf(value: LengthAsEntered, unit: LengthUnit): readonly Press[] {
+  const bare = value.unit === null || value.unit === unit || /[a-z"']/i.test(value.text);
+  const text = bare ? value.text : `${value.text} ${value.unit}`;
+  return [...text].map((char) => ({ kind: 'char', char }));
+}
+
 export type ReadPresses = { ok: true; value: LengthAsEntered } | { ok: false; problem: string };
 
 /** The length that the presses say, as entered and exactly converted; or why they say none. */

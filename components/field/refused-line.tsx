@@ -9,15 +9,17 @@ import { entryTitle } from './entry-title';
 import { FieldLink } from './field-router';
 import { againPath } from './again-path';
 import { saveBlob } from './save-blob';
-import { useDevice, useOpenPour } from './use-device';
+import { useDevice, useOpenPour, useSnapshot } from './use-device';
 
 /** One entry that the server refused: what it says, why, and what can be done with it. */
 export function RefusedLine({ refused }: { refused: RefusedEntry }) {
   const device = useDevice();
   const { entry } = refused;
   const open = useOpenPour(entry.pourId ?? '');
+  const { pours } = useSnapshot();
   const [asking, setAsking] = useState(false);
-  const again = againPath(entry);
+  const anyPour = pours.find((pour) => pour.projectId === entry.projectId && pour.kept);
+  const again = againPath(entry, open?.sheet ?? null, anyPour?.id ?? null);
   const save = () =>
     saveBlob(
       new Blob([JSON.stringify(entry, null, 2)], { type: 'application/json' }),

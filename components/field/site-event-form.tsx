@@ -11,15 +11,20 @@ import { siteEventWords } from './entry-title';
 import { instantOfField, localFieldText } from './field-time';
 import type { OpenSheet } from './open-sheet';
 import { useRecord } from './use-record';
+import { useRefusedAgain } from './use-refused-again';
 
 /** Rain, washed soil, a bar or form changed: each voids a release in its scope. */
 export function SiteEventForm({ open }: { open: OpenSheet }) {
-  const [kind, setKind] = useState<(typeof siteEventKinds)[number]>('rain');
-  const [at, setAt] = useState(() => localFieldText(new Date().toISOString(), open.project.timeZone));
-  const [amount, setAmount] = useState('');
-  const [text, setText] = useState('');
-  const [elementIds, setElementIds] = useState<string[] | null>(null);
-  const { busy, problems, record } = useRecord(open);
+  const again = useRefusedAgain('site-event');
+  const was = again?.body;
+  const [kind, setKind] = useState<(typeof siteEventKinds)[number]>(was?.kind ?? 'rain');
+  const [at, setAt] = useState(() =>
+    localFieldText(was?.at ?? new Date().toISOString(), open.project.timeZone),
+  );
+  const [amount, setAmount] = useState(was?.amountMm == null ? '' : String(was.amountMm));
+  const [text, setText] = useState(was?.text ?? '');
+  const [elementIds, setElementIds] = useState<string[] | null>(was?.elementIds ?? null);
+  const { busy, problems, record } = useRecord(open, again);
   const [amountProblem, setAmountProblem] = useState<string | null>(null);
 
   const keep = async () => {

@@ -84,6 +84,12 @@ export function whereOf(sheet: Sheet, subject: SubjectRef): BodyOf<'nonconforman
   }
 }
 
+/** What a place names, as near as it says: its face, else its element; null where it names neither. */
+export function subjectAt(where: BodyOf<'hold'>['where']): SubjectRef | null {
+  if (where.faceId) return { kind: 'face', id: where.faceId };
+  return where.elementId ? { kind: 'element', id: where.elementId } : null;
+}
+
 /** Every thing of the plan that a photo, a nonconformance or a correction can be about, nearest first. */
 export function subjectChoices(sheet: Sheet): { subject: SubjectRef; words: string }[] {
   const subjects: SubjectRef[] = [

@@ -10,20 +10,29 @@ const phaseWords: Record<SyncState['phase'], string> = {
   'strange-network': 'network asks for a sign-in',
 };
 
-/** Where sending stands, in two or three words. Something that waits is never called up to date. */
-export function syncWords(sync: SyncState): string {
-  const waits = sync.waitingEntries + sync.waitingPhotos + sync.refusedEntries > 0;
-  return sync.phase === 'idle' && waits ? 'waits to be sent' : phaseWords[sync.phase];
-}
+/** What waits to be sent by itself; what was refused waits for a person. */
+export const waitingCount = (sync: SyncState): number => sync.waitingEntries + sync.waitingPhotos;
 
 /** How much of this device's work the server has not taken in yet. */
-export const notSentCount = (sync: SyncState): number =>
-  sync.waitingEntries + sync.waitingPhotos + sync.refusedEntries;
+export const notSentCount = (sync: SyncState): number => waitingCount(sync) + sync.refusedEntries;
 
-/** "3 not sent yet", "everything is sent". */
+/**
+ * Where sending stands, in two or three words. Something that waits is never called up to date, and something that
+ * was refused is never called waiting.
+ */
+export function syncWords(sync: SyncState): string {
+  const refused = sync.refusedEntries > 0 && waitingCount(sync) > 0;
+  if (refused) return `${sync.refusedEntries} refused`;
+  if (sync.phase !== 'idle') return phaseWords[sync.phase];
+  if (waitingCount(sync) > 0) return 'waits to be sent';
+  return sync.refusedEntries > 0 ? 'see why' : phaseWords.idle;
+}
+
+/** "3 not sent yet", "1 refused", "all sent". */
 export function notSentWords(sync: SyncState): string {
-  const count = notSentCount(sync);
-  return count === 0 ? 'all sent' : `${count} not sent yet`;
+  const waiting = waitingCount(sync);
+  if (waiting > 0) return `${waiting} not sent yet`;
+  return sync.refusedEntries > 0 ? `${sync.refusedEntries} refused` : 'all sent';
 }
 
 export const DOUBTFUL_CLOCK_MINUTES = 5;

@@ -1,12 +1,13 @@
 'use client';
 
 import { useEffect, useState } from 'react';
-import type { BodyOf } from '@/lib/inspection/entry';
+import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import type { PointState, ReadingState } from '@/lib/inspection/sheet-types';
 import { problemsOf } from './body-problems';
 import type { OpenSheet } from './open-sheet';
 import { signalVerdict } from './signal-verdict';
 import { useDevice } from './use-device';
+import { forgetAsked } from './use-refused-again';
 
 const UNDO_MS = 10_000;
 export const UNDO_REASON = 'undone within ten seconds';
@@ -31,9 +32,13 @@ export function findReading(
   return null;
 }
 
-/** Keeps readings one by one, says their verdict, and takes the last one back within ten seconds. */
-export function useKeepReading(open: OpenSheet, sound: boolean) {
+/**
+ * Keeps readings one by one, says their verdict, and takes the last one back within ten seconds.
+ * @param again the refused reading that the first one kept stands for: it leaves the tray with it
+ */
+export function useKeepReading(open: OpenSheet, sound: boolean, again: Entry | null = null) {
   const device = useDevice();
+  const [standsFor, setStandsFor] = useState(again);
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<string | null>(null);
   const [kept, setKept] = useState<Kept | null>(null);
@@ -50,6 +55,11 @@ export function useKeepReading(open: OpenSheet, sound: boolean) {
     setProblem(null);
     try {
       const entry = await device.record(at, 'reading', body);
+      if (standsFor) {
+        setStandsFor(null);
+        forgetAsked();
+        await device.forgetRefused(standsFor.id).catch(() => undefined);
+      }
       setKept({ entryId: entry.id, undoable: true });
       const sheet = device.pour(at.pourId)?.sheet;
       const found = sheet ? findReading({ sheet }, entry.id) : null;

@@ -2,6 +2,7 @@
 
 import { useCallback, useState } from 'react';
 import type { LengthUnit } from '@/lib/concrete/length';
+import type { BodyOf } from '@/lib/inspection/entry';
 import type { Face, Requirement } from '@/lib/inspection/plan';
 import type { InstrumentState } from '@/lib/inspection/sheet-types';
 import type { OpenSheet } from './open-sheet';
@@ -22,10 +23,22 @@ export interface ReadingSetup {
   blockMm: number;
 }
 
-/** Instrument, steel and unit of the next reading: chosen once, kept until changed. */
-export function useReadingSettings(open: OpenSheet, face: Face): ReadingSetup {
+/**
+ * Instrument, steel and unit of the next reading: chosen once, kept until changed.
+ * @param first a reading that was refused: it is read with the same instrument, to the same steel, once more
+ */
+export function useReadingSettings(
+  open: OpenSheet,
+  face: Face,
+  first: BodyOf<'reading'> | null = null,
+): ReadingSetup {
   const projectId = open.project.id;
-  const [settings, setSettings] = useState(() => readSettings(projectId));
+  const [settings, setSettings] = useState(() => {
+    const kept = readSettings(projectId);
+    if (!first) return kept;
+    const steel = { ...kept.steel, [face.id]: first.requirementId ?? OTHER_STEEL };
+    return { ...kept, steel, instrumentId: first.instrumentId ?? kept.instrumentId };
+  });
   const change = useCallback(
     (part: Partial<ReadingSettings>) =>
       setSettings((before) => {

@@ -5,6 +5,7 @@ import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import type { DeviceEntryType, OpenPour } from '@/lib/device/device-types';
 import { bodyProblems, problemsOf, type Problems } from './body-problems';
 import { useDevice } from './use-device';
+import { forgetAsked } from './use-refused-again';
 
 export interface Recording {
   busy: boolean;
@@ -22,8 +23,11 @@ const projectTypes: readonly string[] = [
   'rules-changed',
 ];
 
-/** Keeps entries of one pour (or of its project's stream), one at a time, with the problems by field. */
-export function useRecord(open: OpenPour): Recording {
+/**
+ * Keeps entries of one pour (or of its project's stream), one at a time, with the problems by field.
+ * @param again the refused entry that is recorded again: it leaves the tray once its successor is kept
+ */
+export function useRecord(open: OpenPour, again: Entry | null = null): Recording {
   const device = useDevice();
   const [busy, setBusy] = useState(false);
   const [problems, setProblems] = useState<Problems>({});
@@ -38,7 +42,12 @@ export function useRecord(open: OpenPour): Recording {
       setBusy(true);
       try {
         const stream = projectTypes.includes(type) ? null : pourId;
-        return await device.record({ projectId, pourId: stream }, type, body);
+        const entry = await device.record({ projectId, pourId: stream }, type, body);
+        if (again?.type === type) {
+          forgetAsked();
+          await device.forgetRefused(again.id).catch(() => undefined);
+        }
+        return entry;
       } catch (error) {
         setProblems(problemsOf(error));
         return null;
@@ -46,7 +55,7 @@ export function useRecord(open: OpenPour): Recording {
         setBusy(false);
       }
     },
-    [device, projectId, pourId],
+    [device, projectId, pourId, again],
   );
   const clearProblems = useCallback(() => setProblems({}), []);
   return { busy, problems, clearProblems, record };

@@ -22,6 +22,7 @@ export function VerdictStrip({
   reading,
   label,
   pointKey,
+  governs,
   unit,
   onUndo,
   onAgain,
@@ -31,6 +32,8 @@ export function VerdictStrip({
   reading: ReadingState;
   label: string;
   pointKey: string;
+  /** A less favourable reading of the same round that still counts; null where this one does. */
+  governs: ReadingState | null;
   unit: LengthUnit;
   /** Null once ten seconds are over. */
   onUndo: (() => void) | null;
@@ -58,7 +61,7 @@ export function VerdictStrip({
               {label}: {readingText(bodyShown(reading))}{' '}
               <span className={toneText[markTone[kind]]}>{verdictWords(judged)}</span>
             </span>
-            <span className="block truncate text-label text-pencil">
+            <span className="line-clamp-2 text-label text-pencil">
               {judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit)}
               <span className="ml-2 text-chalk underline underline-offset-4">How judged?</span>
             </span>
@@ -70,6 +73,11 @@ export function VerdictStrip({
           </Button>
         )}
       </div>
+      {governs && (
+        <p className="border-t border-rule px-3 py-1.5 text-label font-semibold">
+          {readingText(bodyShown(governs))}, read before, still governs. A correction opens the next round.
+        </p>
+      )}
       {reading.depth && (
         <p className="border-t border-rule px-3 py-1.5 text-label">
           <b className={reading.depth.verdict === 'not-met' ? 'text-hold' : undefined}>
