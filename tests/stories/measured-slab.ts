@@ -90,6 +90,14 @@ export function slabInput(over: Partial<PlanInput> = {}): PlanInput {
   };
 }
 
+export const issueContext = {
+  pourId,
+  revision: 1,
+  issuedAt: '2026-11-30T08:00:00.000Z',
+  authorId: people.engineer,
+  reason: 'First issue',
+};
+
 /** The slab's plan with one measurement by this rule, at one place unless said otherwise. */
 export function planMeasuring(
   rule: MeasurementRule,
@@ -103,12 +111,6 @@ export function planMeasuring(
     loaded: over.loaded ?? false,
     rule,
   };
-  const plan = issuePlan(slabInput({ ...over.input, measurements: [measurement] }), {
-    pourId,
-    revision: 1,
-    issuedAt: '2026-11-30T08:00:00.000Z',
-    authorId: people.engineer,
-    reason: 'First issue',
-  });
+  const plan = issuePlan(slabInput({ ...over.input, measurements: [measurement] }), issueContext);
   return { plan, item: plan.measurements[0]! };
 }
