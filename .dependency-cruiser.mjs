@@ -75,6 +75,12 @@ const rules = {
       '^components/field/',
       'the office imports nothing of the offline side',
     ),
+    forbid(
+      'calculations-stand-alone',
+      '^components/calculations/',
+      '^(components/(?!calculations/|ui/|drawings/)|lib/device/)',
+      'calculation pages rest on lib/concrete and on shared controls and drawings only',
+    ),
     forbid('nothing-imports-app', '^(?!app/|tests/)', '^app/', 'routes are the outermost layer'),
     forbid(
       'worker-is-small',
