@@ -13,6 +13,7 @@ const links: (OfficeLink & { action: Action })[] = [
   { href: '/nonconformances', label: 'Nonconformances', action: 'nonconformances.list' },
   { href: '/project', label: 'Project', action: 'project.read' },
   { href: '/field', label: 'Field', action: 'record.push' },
+  { href: '/calculations', label: 'Calculations', action: 'project.read' },
 ];
 
 const linksFor = (role: Role): OfficeLink[] =>
