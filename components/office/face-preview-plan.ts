@@ -3,10 +3,9 @@ import { issuePlan } from '@/lib/inspection/issue-plan';
 import type { Face } from '@/lib/inspection/plan';
 import { emptyPlanDraft, type ElementDraft, type PlanDraft } from './plan-draft';
 import { planFromDraft } from './plan-from-draft';
+import { previewElement } from './preview-element';
 
 export type FacePreviewOf = { kind: 'face'; face: Face } | { kind: 'waiting'; sentences: string[] };
-
-const something = (text: string) => text.trim() || '-';
 
 /** A pour that does not exist yet: its drawn points are an example of how many and how spread. */
 export const EXAMPLE_POUR = '00000000-0000-4000-8000-000000000000';
@@ -29,21 +28,9 @@ export function previewFace(
     checklist: { template: 'none', version: 1, items: [] },
     elements: [
       {
-        ...element,
-        mark: something(element.mark),
-        location: something(element.location),
-        drawing: { number: something(element.drawing.number), revision: something(element.drawing.revision) },
+        ...previewElement(element),
         layers: [],
-        faces: [
-          {
-            ...face,
-            name: something(face.name),
-            requirements: face.requirements.map((one) => ({ ...one, steel: something(one.steel) })),
-            chosenPoints: face.chosenPoints.filter((one) => one.reason && one.x && one.y),
-            openings: face.openings.filter((one) => one.name && one.width && one.height),
-            recesses: face.recesses.filter((one) => one.name && one.width && one.height),
-          },
-        ],
+        faces: previewElement(element).faces.filter((one) => one.id === face.id),
       },
     ],
   });

@@ -31,6 +31,7 @@ function placeIn(parts: string[], draft: PlanDraft): string {
   const last = parts.at(-1) ?? '';
   const elementAt = parts[0] === 'elements' ? indexOf(draft.elements, parts[1]) : -1;
   const element = draft.elements[elementAt];
+  if (parts[0] === 'measurements') return placeInMeasurement(parts, draft);
   if (!element) return ofPlan[last] ?? renamed[last] ?? parts.join('.');
   const base = `elements.${elementAt}`;
   if (ofElement.has(last)) return `${base}.${last}`;
@@ -53,6 +54,22 @@ function placeIn(parts: string[], draft: PlanDraft): string {
   }
   return `${facePath}.${last === 'count' ? 'drawnPoints' : last}`;
 }
+
+/** A measurement's own field; what it takes from elsewhere in the plan is asked for there. */
+function placeInMeasurement(parts: string[], draft: PlanDraft): string {
+  const last = parts.at(-1) ?? '';
+  const at = Math.max(0, indexOf(draft.measurements, parts[1]));
+  const elementAt = indexOf(draft.elements, draft.measurements[at]?.elementId);
+  if (ofPlan[last]) return ofPlan[last];
+  if (ofElement.has(last) && elementAt >= 0) return `elements.${elementAt}.${last}`;
+  return `measurements.${at}.${fieldOfMeasurement[last] ?? last}`;
+}
+
+/** Fields of a computation that the form does not ask for by that name. */
+const fieldOfMeasurement: Record<string, string> = {
+  'top cover': 'faceId',
+  'layers carried': 'carriedLayerIds',
+};
 
 const indexOf = (list: readonly { id: string }[], idOrIndex: string | undefined): number => {
   const byId = list.findIndex((one) => one.id === idOrIndex);

@@ -6,7 +6,7 @@ export interface KeptDraft {
   draft: PlanDraft;
 }
 
-const VERSION = 1;
+const VERSION = 2;
 const keyOf = (name: string) => `cagewright.plan-draft.${VERSION}.${name}`;
 
 /** The draft kept under a name, or null where there is none or it cannot be read. */

@@ -10,6 +10,7 @@ import type {
 } from '@/lib/inspection/plan';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import { exactText } from './length-words';
+import { measurementDraftOf, type MeasurementDraft } from './measurement-draft';
 
 /**
  * The form as it was typed. Names follow `planInput` without "Mm": a length here is text, with or without its unit, so
@@ -124,7 +125,7 @@ export interface PlanDraft {
   leftOut: string[];
   /** The checklist of an earlier revision or pour; null: by the types of the elements. */
   checklist: { template: string; version: number; items: CheckItem[] } | null;
-  measurements: PlanInput['measurements'];
+  measurements: MeasurementDraft[];
 }
 
 /** A key that stays with a face or an element over revisions. */
@@ -289,7 +290,9 @@ export function draftOfPlan(plan: Plan): PlanDraft {
     concrete: concreteDraft(plan.concrete, shown),
     lastWalk: plan.lastWalk,
     checklist: plan.checklist,
-    measurements: plan.measurements.map(measurementInputOf),
+    measurements: plan.measurements.map((item) =>
+      measurementDraftOf(measurementInputOf(item), plan.basis, shown),
+    ),
     elements: plan.elements.map((element) => ({
       id: element.id,
       type: element.type,

@@ -15,6 +15,7 @@ import { ChecklistFields } from './checklist-fields';
 import { ElementFields } from './element-fields';
 import { EXAMPLE_POUR } from './face-preview-plan';
 import { issueProblem } from './issue-problem';
+import { MeasurementsFields } from './measurements-fields';
 import { forgetDraft, keepDraft, readKeptDraft } from './kept-draft';
 import { emptyElement, type PlanDraft } from './plan-draft';
 import { draftPath, pourFromDraft } from './plan-from-draft';
@@ -191,6 +192,9 @@ function OpenPlanForm({ start, projectId, timeZone, personId, revises, copiedFro
         <div>
           <Button onClick={() => elements.append(emptyElement())}>Add an element</Button>
         </div>
+        <SheetFrame heading="Measurements">
+          <MeasurementsFields />
+        </SheetFrame>
         <SheetFrame heading="Checks">
           <ChecklistFields />
         </SheetFrame>

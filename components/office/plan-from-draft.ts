@@ -1,40 +1,13 @@
-import { parseLength } from '@/lib/concrete/length';
 import { pourInput, planInput, type PlanInput, type PourInput } from '@/lib/inspection/plan-input';
 import { checklistTemplate } from '@/lib/inspection/checklist-templates';
 import type { FieldProblem } from '@/lib/inspection/app-error';
+import { DraftReader } from './draft-reader';
+import { readMeasurement } from './measurement-from-draft';
 import type { ElementDraft, FaceDraft, PlanDraft } from './plan-draft';
 import { instantFromField } from './project-time';
 
-/** Collects problems under the draft's own field names while text becomes numbers. */
-class Reader {
-  readonly problems: FieldProblem[] = [];
-  constructor(private readonly units: 'mm' | 'in') {}
-
-  /** Millimetres of a typed length; `NaN` after its problem is noted, so that the schema adds none of its own. */
-  length(path: string, text: string): number {
-    const read = parseLength(text, this.units);
-    if (read.ok && read.length.mm !== null) return read.length.mm;
-    this.problems.push({ path, message: read.ok ? 'Write the unit too.' : read.problem });
-    return Number.NaN;
-  }
-
-  optionalLength(path: string, text: string): number | null {
-    return text.trim() === '' ? null : this.length(path, text);
-  }
-
-  number(path: string, text: string): number {
-    const value = text.trim() === '' ? Number.NaN : Number(text.trim().replace(',', '.'));
-    if (!Number.isFinite(value)) this.problems.push({ path, message: 'Write a number.' });
-    return value;
-  }
-
-  optionalNumber(path: string, text: string): number | null {
-    return text.trim() === '' ? null : this.number(path, text);
-  }
-}
-
 function readFace(
-  reader: Reader,
+  reader: DraftReader,
   at: string,
   face: FaceDraft,
 ): PlanInput['elements'][number]['faces'][number] {
@@ -87,7 +60,7 @@ function readFace(
   };
 }
 
-function readElement(reader: Reader, at: string, element: ElementDraft): PlanInput['elements'][number] {
+function readElement(reader: DraftReader, at: string, element: ElementDraft): PlanInput['elements'][number] {
   return {
     id: element.id,
     type: element.type,
@@ -145,7 +118,7 @@ export function wholeChecklist(
 }
 
 /** What the basis asks of the concrete; what it does not ask for is left out, whatever was typed for another basis. */
-function readConcrete(reader: Reader, draft: PlanDraft): PlanInput['concrete'] {
+function readConcrete(reader: DraftReader, draft: PlanDraft): PlanInput['concrete'] {
   const { concrete: typed, basis } = draft;
   const strength =
     typed.strengthMpa === '' ? {} : { strengthMpa: reader.number('concrete.strengthMpa', typed.strengthMpa) };
@@ -163,7 +136,7 @@ function readConcrete(reader: Reader, draft: PlanDraft): PlanInput['concrete'] {
   };
 }
 
-function readPlan(reader: Reader, draft: PlanDraft): PlanInput {
+function readPlan(reader: DraftReader, draft: PlanDraft): PlanInput {
   const concrete = readConcrete(reader, draft);
   const guardMm = draft.rule === 'guarded' ? reader.optionalLength('guard', draft.guard) : null;
   return {
@@ -185,11 +158,24 @@ function readPlan(reader: Reader, draft: PlanDraft): PlanInput {
           },
     ...(concrete && Object.keys(concrete).length > 0 ? { concrete } : {}),
     elements: draft.elements.map((element, index) => readElement(reader, `elements.${index}`, element)),
-    measurements: draft.measurements,
+    measurements: draft.measurements.map((one, index) =>
+      readMeasurement(reader, `measurements.${index}`, one, draft.elements),
+    ),
     checklist: draftChecklist(draft),
     lastWalk: draft.lastWalk,
   };
 }
+
+/** Fields of a measurement's rule that the form names in its own way; the others go by their last name. */
+const fieldsOfRules: Record<string, string> = {
+  'bay.widthMm': 'bayWidth',
+  'bay.edgeMm': 'edge',
+  'ownMm.minus': 'ownMinus',
+  'ownMm.plus': 'ownPlus',
+  'standsOn.faceId': 'standsOnFaceId',
+  'standsOn.layerIds': 'standsOnLayerIds',
+  'standsOn.otherMm': 'other',
+};
 
 /** Where a schema's path is in the draft: no "Mm", no "plan." in front, and the mix's two fields by name. */
 export function draftPath(path: string): string {
@@ -198,10 +184,14 @@ export function draftPath(path: string): string {
     .replace(/^mix\.name$/, 'mixName')
     .replace(/^mix\.aggregateMm$/, 'mixAggregate')
     .replace(/^decisionRule\b.*$/, 'guard')
+    .replace(/^(measurements\.\d+)\.rule\.(.+)$/, (_, at: string, field: string) => {
+      const last = field.split('.').at(-1) ?? '';
+      return `${at}.${fieldsOfRules[field] ?? last}`;
+    })
     .replace(/Mm(?=\.|$)/g, '');
 }
 
-const mergeProblems = (reader: Reader, found: FieldProblem[]): FieldProblem[] => {
+const mergeProblems = (reader: DraftReader, found: FieldProblem[]): FieldProblem[] => {
   const named = new Set(reader.problems.map((problem) => problem.path));
   return [...reader.problems, ...found.filter((problem) => !named.has(problem.path))];
 };
@@ -210,7 +200,7 @@ export type ReadDraft<T> = { ok: true; input: T } | { ok: false; problems: Field
 
 /** What the form says of a new pour, or what is wrong with it, by the draft's own field names. */
 export function pourFromDraft(draft: PlanDraft, projectId: string, timeZone: string): ReadDraft<PourInput> {
-  const reader = new Reader(draft.units);
+  const reader = new DraftReader(draft.units);
   const plannedAt = draft.plannedAt === '' ? null : instantFromField(draft.plannedAt, timeZone);
   if (draft.plannedAt !== '' && plannedAt === null) {
     reader.problems.push({
@@ -242,7 +232,7 @@ export function pourFromDraft(draft: PlanDraft, projectId: string, timeZone: str
 
 /** What the form says of a plan alone (a revision, or one face for the preview). */
 export function planFromDraft(draft: PlanDraft): ReadDraft<PlanInput> {
-  const reader = new Reader(draft.units);
+  const reader = new DraftReader(draft.units);
   const parsed = planInput.safeParse(readPlan(reader, draft));
   if (parsed.success && reader.problems.length === 0) return { ok: true, input: parsed.data };
   return {

@@ -1,7 +1,6 @@
 import { formatLength, type LengthUnit } from '@/lib/concrete/length';
-import { needsEditionCheck } from '@/lib/concrete/trail';
 import type { Requirement } from '@/lib/inspection/plan';
-import { provenanceWords } from './state-words';
+import { TrailSteps } from './trail-steps';
 
 /** How a requirement was found, step by step, with the code's minimum beside it and what to be careful about. */
 export function RequirementTrail({
@@ -38,33 +37,12 @@ export function TrailBody({ requirement, units }: { requirement: Requirement; un
           {warning}
         </p>
       ))}
-      <ol className="grid gap-1">
-        {requirement.trail.map((step, index) => (
-          <li
-            key={`${index}-${step.rule}`}
-            className="grid gap-x-4 border-b border-rule pb-1 sm:grid-cols-[1fr_auto]"
-          >
-            <span>
-              {step.rule}
-              <span className="block text-label text-pencil">
-                {[...new Set([step.clause, step.edition, provenanceWords[step.provenance]])]
-                  .filter(Boolean)
-                  .join(', ')}
-                {step.note ? `. ${step.note}` : ''}
-              </span>
-            </span>
-            <span className="font-figure font-medium sm:text-right">{step.value}</span>
-          </li>
-        ))}
-      </ol>
+      <TrailSteps trail={requirement.trail} />
       {requirement.codeMinimumMm !== null && (
         <p className="text-pencil">
           Code minimum for comparison: {formatLength(requirement.codeMinimumMm, units)} {units}. The contract
           documents and the local code govern.
         </p>
-      )}
-      {needsEditionCheck(requirement.trail) && (
-        <p className="text-pencil">Verify the steps marked as from memory against your edition.</p>
       )}
     </div>
   );
