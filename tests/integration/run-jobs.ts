@@ -12,6 +12,7 @@ export async function runJobs(world: World): Promise<void> {
   const { queueLog } = await import('@/lib/server/jobs/queue-log');
   const pgPool = new pg.Pool({ connectionString: world.database.ownerUrl, max: 4 });
   pgPool.on('error', () => undefined);
+  pgPool.on('connect', (client) => client.on('error', () => undefined));
   try {
     await runOnce({ pgPool, taskList: tasks, logger: queueLog, noHandleSignals: true });
     // The queue notes how a job ended without waiting for it.
