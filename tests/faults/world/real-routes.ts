@@ -63,13 +63,17 @@ export const cutConnections = (world: World): Promise<void> =>
   );
 
 /** The pour's record as PostgreSQL holds it. */
-export async function recordOf(world: World, pourId: string): Promise<SealedEntry[]> {
+export const recordOf = (world: World, pourId: string): Promise<SealedEntry[]> =>
+  recordIn(world.database.ownerUrl, pourId);
+
+/** The same, of any database. */
+export async function recordIn(ownerUrl: string, pourId: string): Promise<SealedEntry[]> {
   const [{ sealedEntry }, { connect }] = await Promise.all([
     import('@/db/stores/entry-store'),
     import('@/db/connection'),
   ]);
   // A connection as the application has them: others give instants and large numbers back as other types.
-  const owner = connect(world.database.ownerUrl, 1);
+  const owner = connect(ownerUrl, 1);
   try {
     const rows = await owner('entries').where({ pour_id: pourId }).orderBy('seq');
     return rows.map((row: unknown) => sealedEntry(row as Parameters<typeof sealedEntry>[0]));
