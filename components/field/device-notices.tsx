@@ -3,7 +3,7 @@
 import { Button } from '@/components/ui/button';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { Notice } from '@/components/ui/notice';
-import { FieldLink } from './field-router';
+import { FieldLink, useFieldRoute } from './field-router';
 import { fieldPaths } from './field-routes';
 import { clockWords } from './sync-words';
 import { SignInLink } from './sign-in-link';
@@ -20,9 +20,11 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
   const clock = clockWords(sync.clockOffsetMs);
   const lost = sync.lostEntries ?? 0;
   const signIn = person !== null && sync.phase === 'sign-in-needed';
+  const inTray = useFieldRoute().screen === 'not-sent';
+  const refused = inTray ? 0 : sync.refusedEntries;
   const choosePin = person !== null && people.length > 1 && !pin.set;
   if (quiet && lost === 0) return null;
-  if (!updateReady && !clock && lost === 0 && !signIn && !choosePin) return null;
+  if (!updateReady && !clock && lost === 0 && refused === 0 && !signIn && !choosePin) return null;
   return (
     <div className="mx-auto grid w-full max-w-3xl gap-2 px-3 pt-3">
       {lost > 0 && (
@@ -45,6 +47,23 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
           <p>
             The device made room by itself before they were sent. They are not on the server. What was sent is
             safe. Record again what is missing.
+          </p>
+        </Notice>
+      )}
+      {!quiet && refused > 0 && (
+        <Notice
+          tone="hold"
+          role="status"
+          title={`The server refused ${entriesWords(refused)}`}
+          actions={
+            <FieldLink href={fieldPaths.notSent} className={buttonClasses('secondary')}>
+              See which and why
+            </FieldLink>
+          }
+        >
+          <p>
+            {refused === 1 ? 'It does' : 'They do'} not count on any sheet. Record{' '}
+            {refused === 1 ? 'it' : 'them'} again, or let {refused === 1 ? 'it' : 'them'} go.
           </p>
         </Notice>
       )}

@@ -12,6 +12,7 @@ import { fieldPaths } from './field-routes';
 import { PeopleScreen } from './people-screen';
 import { PoursScreen } from './pours-screen';
 import { Screen } from './screen';
+import { StoreFailed } from './store-failed';
 import { useSnapshot } from './use-device';
 
 // The list of pours is what opens first; a pour's screens arrive in pieces of their own, which the worker keeps.
@@ -51,7 +52,8 @@ function Opening() {
 
 function Screens() {
   const route = useFieldRoute();
-  const { asks, people } = useSnapshot();
+  const { asks, people, store } = useSnapshot();
+  if (store === 'failed') return <StoreFailed />;
   // The address stays: who goes on here goes on where the last one was.
   if (asks && people.some((one) => one.pin.state !== 'none')) return <PeopleScreen />;
   switch (route.screen) {

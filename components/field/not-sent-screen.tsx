@@ -2,8 +2,10 @@
 
 import { useState } from 'react';
 import { Button } from '@/components/ui/button';
+import { buttonClasses } from '@/components/ui/button-classes';
 import { EmptyState } from '@/components/ui/empty-state';
 import { Notice } from '@/components/ui/notice';
+import { Spinner } from '@/components/ui/spinner';
 import { problemsOf } from './body-problems';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
@@ -17,12 +19,36 @@ import { WaitingPour } from './waiting-pour';
 import { OthersWaiting } from './others-waiting';
 import { SignInLink } from './sign-in-link';
 import { StorageLine } from './storage-line';
-import { bytesWords, notSentCount, syncWords } from './sync-words';
+import { bytesWords, notSentCount, syncWords, waitingCount } from './sync-words';
 import { useDevice, useSnapshot } from './use-device';
 import { useNow } from './use-now';
 
 /** What the server has not taken in: waiting, being sent, refused with the reason; photos; send now; save to a file. */
 export function NotSentScreen() {
+  const { person, asks } = useSnapshot();
+  if (person) return <NotSent />;
+  return (
+    <Screen title="Not sent yet" back={{ href: fieldPaths.pours, words: 'pours' }}>
+      <div className="grid gap-6">
+        {asks ? (
+          <EmptyState
+            title="Sign in to see what waits"
+            action={<SignInLink className={buttonClasses('primary')}>Sign in</SignInLink>}
+          >
+            What was recorded here is kept for whoever recorded it.
+          </EmptyState>
+        ) : (
+          <p className="p-4">
+            <Spinner label="Opening" />
+          </p>
+        )}
+        <OthersWaiting />
+      </div>
+    </Screen>
+  );
+}
+
+function NotSent() {
   const device = useDevice();
   const { sync, refused, photos, pours } = useSnapshot();
   const now = useNow();
@@ -58,13 +84,14 @@ export function NotSentScreen() {
         {sync.message && sync.phase !== 'sign-in-needed' && (
           <Notice tone={sync.phase === 'idle' ? 'info' : 'watch'}>{sync.message}</Notice>
         )}
-        {notSentCount(sync) === 0 ? (
+        {notSentCount(sync) === 0 && (
           <EmptyState title="Everything is sent">
             {sync.lastSuccessAt
               ? `The server last answered ${timeAway(sync.lastSuccessAt, now)}.`
               : 'Nothing waits on this device.'}
           </EmptyState>
-        ) : (
+        )}
+        {waitingCount(sync) > 0 && (
           <SheetLines
             heading="Waiting"
             aside={sync.oldestWaitingAt ? `oldest from ${timeAway(sync.oldestWaitingAt, now)}` : undefined}

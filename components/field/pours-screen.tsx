@@ -113,7 +113,9 @@ function PourList({
 }
 
 function NothingYet({ snapshot }: { snapshot: DeviceSnapshot }) {
-  const busy = snapshot.sync.phase === 'fetching' || snapshot.sync.phase === 'sending';
+  const { phase, lastSuccessAt } = snapshot.sync;
+  // Until the server has answered once, nothing says that there is no project.
+  const busy = phase === 'fetching' || phase === 'sending' || (phase === 'idle' && lastSuccessAt === null);
   return (
     <EmptyState title={busy ? 'Fetching your projects' : 'No project yet'}>
       {busy

@@ -4,7 +4,7 @@ import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { deviceIndex } from '@/lib/inspection/wire';
 import { browserEnvironment } from './browser-environment';
 import type { DeviceEnvironment } from './device-environment';
-import type { Device, DeviceSnapshot } from './device-types';
+import { DeviceError, type Device, type DeviceSnapshot, type StoreState } from './device-types';
 import { exportUnsent } from './export-unsent';
 import { OpenedPours } from './opened-pours';
 import { DeviceHolder } from './people/device-holder';
@@ -13,6 +13,7 @@ import { DevicePhotos } from './photos/device-photos';
 import { PhotoLane } from './photos/photo-lane';
 import { emptySnapshot, snapshotOf } from './snapshot-of';
 import { markName, personsMarked, readMark } from './store/high-water-mark';
+import { unlessFull } from './store/person-database';
 import { openSettingsStore, type SettingsStore } from './store/settings-store';
 import { askServer } from './sync/ask-server';
 import { SyncLane, type LaneState } from './sync/sync-lane';
@@ -38,6 +39,7 @@ export function createDevice(env: DeviceEnvironment = browserEnvironment()): Run
 class FieldDevice {
   #settings: SettingsStore | null = null;
   #snapshot: DeviceSnapshot = emptySnapshot;
+  #store: StoreState = 'reading';
   #version = 0;
   #refreshing: Promise<void> | null = null;
   /** Nobody's work opened by itself, and the server had its chance to say who has just signed in. */
@@ -89,6 +91,7 @@ class FieldDevice {
       this.#changed();
     });
     this.#ready = this.#start();
+    this.#ready.catch(() => this.#storeIs('failed'));
   }
 
   asDevice(): RunningDevice {
@@ -170,9 +173,14 @@ class FieldDevice {
     }
     await this.#holder.start(settings, deviceId);
     if (!this.#holder.work) this.env.after(ASK_AFTER_MS, () => this.#ask());
-    this.#changed();
+    this.#storeIs('open');
     void this.#measureStorage();
     void this.#refreshPerson();
+  }
+
+  #storeIs(store: StoreState): void {
+    this.#store = store;
+    this.#changed();
   }
 
   #ask(): void {
@@ -197,7 +205,8 @@ class FieldDevice {
     if (this.#closed) return;
     if (answer.kind === 'answered') {
       const { data, clockOffsetMs } = answer;
-      await this.#holder.heard(data);
+      // A full device cannot note whose session it is; it sends all the same, and that makes room.
+      await this.#holder.heard(data).catch(unlessFull);
       this.#lostBefore = null;
       this.#noAnswer = { phase: 'idle', message: null, signedInAs: null };
       const { work } = this.#holder;
@@ -214,7 +223,12 @@ class FieldDevice {
   }
 
   async #openWork(): Promise<PersonWork> {
-    await this.#ready;
+    await this.#ready.catch(() => {
+      throw new DeviceError(
+        'store-failed',
+        'The store of this device did not open. What was kept is still in it. Load this page again.',
+      );
+    });
     return this.#holder.need();
   }
 
@@ -237,6 +251,7 @@ class FieldDevice {
     const shown = this.#holder.shown();
     const common = {
       ...shown,
+      store: this.#store,
       storage: this.#storage,
       updateReady: this.#updateReady,
       asks: !work && this.#asks && shown.people.length > 0,

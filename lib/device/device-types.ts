@@ -110,7 +110,12 @@ export interface OpenPour {
   state: PourState;
 }
 
+/** What is on this device: being read still, open, or out of reach because the store did not open. */
+export type StoreState = 'reading' | 'open' | 'failed';
+
 export interface DeviceSnapshot {
+  /** Until it is `open`, nothing below says that something is not there. */
+  store: StoreState;
   person: DevicePerson | null;
   projects: DeviceProject[];
   pours: DevicePour[];

@@ -13,6 +13,7 @@ import {
   projectStream,
   readMeta,
   streamOf,
+  unlessFull,
   writeMeta,
   type OutboxRecord,
   type PersonDatabase,
@@ -336,7 +337,8 @@ export class PersonWork {
   }
 
   async setIndex(index: DeviceIndex): Promise<void> {
-    await writeMeta(this.db, 'index', index);
+    // What cannot be noted on a full device is asked again after the next start; sending goes on, and makes room.
+    await writeMeta(this.db, 'index', index).catch(unlessFull);
     this.index = index;
     this.#tell({ streams: [] });
   }
@@ -344,7 +346,7 @@ export class PersonWork {
   async setClockOffset(offsetMs: number | null): Promise<void> {
     if (offsetMs === null || offsetMs === this.clockOffsetMs) return;
     this.clockOffsetMs = offsetMs;
-    await writeMeta(this.db, 'clockOffsetMs', offsetMs);
+    await writeMeta(this.db, 'clockOffsetMs', offsetMs).catch(unlessFull);
   }
 
   async setLastSuccess(at: string): Promise<void> {

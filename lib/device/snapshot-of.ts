@@ -10,6 +10,7 @@ type IndexProject = DeviceIndex['projects'][number];
 
 /** What is shown before anything is known, and while nobody is signed in. */
 export const emptySnapshot: DeviceSnapshot = {
+  store: 'reading',
   person: null,
   projects: [],
   pours: [],
@@ -93,7 +94,7 @@ export function snapshotOf(
   work: PersonWork,
   lane: LaneState,
   now: number,
-): Omit<DeviceSnapshot, 'storage' | 'updateReady' | 'people' | 'asks' | 'pin'> {
+): Omit<DeviceSnapshot, 'store' | 'storage' | 'updateReady' | 'people' | 'asks' | 'pin'> {
   const notSent = new Map<string, number>();
   let oldest: string | null = null;
   for (const one of work.outbox.values()) {

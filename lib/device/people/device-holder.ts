@@ -2,6 +2,7 @@ import type { DeviceIndex } from '@/lib/inspection/wire';
 import type { DeviceEnvironment, TabChannel } from '../device-environment';
 import { DeviceError, type DevicePerson, type DeviceSnapshot, type PinAnswer } from '../device-types';
 import { PersonWork } from '../person-work';
+import { unlessFull } from '../store/person-database';
 import type { SettingsStore } from '../store/settings-store';
 import { PeopleHere } from './people-here';
 
@@ -122,7 +123,8 @@ export class DeviceHolder {
     this.work = work;
     before?.close();
     this.host.personChanged();
-    await this.#people?.opened(person);
+    // A full device opens what it holds: that it was opened is noted once there is room.
+    await this.#people?.opened(person).catch(unlessFull);
     this.host.changed();
   }
 

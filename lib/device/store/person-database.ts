@@ -142,6 +142,11 @@ export async function writeMeta<K extends keyof MetaValues>(
   await db.put('meta', value, key);
 }
 
+/** For a write that may be missing: passes on every error except that the device is full. */
+export function unlessFull(error: unknown): void {
+  if (!isDeviceFull(error)) throw error;
+}
+
 /** True when the store refused because the device is full. */
 export function isDeviceFull(error: unknown): boolean {
   return (

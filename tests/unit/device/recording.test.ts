@@ -1,4 +1,5 @@
 import { describe, expect, it, vi } from 'vitest';
+import { createDevice } from '@/lib/device/create-device';
 import { DeviceError } from '@/lib/device/device-types';
 import { jpeg, settle } from '@/tests/faults/world/phone';
 import { at, opened, inspector, note, pourId, projectId, reading, site } from '@/tests/faults/world/site';
@@ -148,6 +149,46 @@ describe('recording on the device', () => {
     });
     expect(tab.pour(pourId)?.sheet?.instruments.map((one) => one.name)).toEqual(['DG-2', 'DG-3']);
     await phone.kill();
+  });
+
+  it('opens what it holds on a full device, says all that waits, and gives it out as a file', async () => {
+    const { phone } = site();
+    const tab = await phone.tab();
+    phone.line = noNetwork;
+    const kept = await tab.record(at, 'reading', reading('A1', 44));
+    await phone.kill();
+
+    const put = vi.spyOn(IDBObjectStore.prototype, 'put').mockImplementation(function (
+      this: IDBObjectStore,
+      ...given: Parameters<IDBObjectStore['put']>
+    ) {
+      queueMicrotask(() => (this.transaction as unknown as Failing)._abort('QuotaExceededError'));
+      return whole.apply(this, given);
+    });
+    const reopened = await phone.tab();
+    await opened(reopened);
+    const { store, person, sync } = reopened.snapshot();
+    expect({ store, name: person?.name, waiting: sync.waitingEntries }).toEqual({
+      store: 'open',
+      name: expect.any(String),
+      waiting: 1,
+    });
+    expect(await (await reopened.exportUnsent()).text()).toContain(kept.id);
+    put.mockRestore();
+    await phone.kill();
+  });
+
+  it('never says that nothing is there while the store cannot be opened', async () => {
+    const { phone } = site();
+    const open = vi.spyOn(indexedDB, 'open').mockImplementation(() => {
+      throw new DOMException('no room', 'UnknownError');
+    });
+    const tab = createDevice(phone.environment());
+    await expect(tab.record(at, 'note', note('lost'))).rejects.toMatchObject({ code: 'store-failed' });
+    await settle();
+    expect(tab.snapshot().store).toBe('failed');
+    open.mockRestore();
+    await tab.close();
   });
 
   it('saves a reading on a full device though a photo found no room, and says so when neither fits', async () => {

@@ -44,6 +44,7 @@ export class MemoryDevice implements Device {
     this.recorded = [...recorded];
     this.current = this.fold();
     this.shown = {
+      store: 'open',
       person: { id: people[who], name: names[who], email: `${who.toLowerCase()}@example.test` },
       projects: [this.current.project],
       pours: [this.current.pour],
