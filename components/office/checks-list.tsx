@@ -1,10 +1,12 @@
 import { MarkIcon } from '@/components/drawings/mark';
 import type { MarkKind } from '@/components/drawings/mark-words';
 import { checkGroupWords } from '@/lib/inspection/holds-work';
+import { judgedCheck } from '@/lib/inspection/judged-words';
 import { checkGroups } from '@/lib/inspection/plan';
 import type { CheckState, Sheet } from '@/lib/inspection/sheet-types';
 import { personName } from './entry-words';
 import { Fold } from './fold';
+import { JudgedDetails } from './judged-details';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
 
@@ -88,6 +90,7 @@ function Check({ check, viewer }: { check: CheckState; viewer: OfficeViewer }) {
           <p className="text-label">Corrected since: {check.correctedSince.body.text}</p>
         )}
         {check.acceptedBy && <p className="text-label">Accepted by a decision of the engineer.</p>}
+        {check.governing && <JudgedDetails about={check.item.question} judged={judgedCheck(check)} />}
       </div>
     </li>
   );

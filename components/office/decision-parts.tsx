@@ -1,13 +1,17 @@
 import { CoverSection } from '@/components/drawings/cover-section';
 import { formatLength } from '@/lib/concrete/length';
 import type { EntryOf } from '@/lib/inspection/entry';
+import { judgedCheck, judgedMeasurement, judgedReading } from '@/lib/inspection/judged-words';
 import { limitWords } from '@/lib/inspection/measured-words';
 import type { Element, Face } from '@/lib/inspection/plan';
 import type { FaceState, Sheet } from '@/lib/inspection/sheet-types';
 import type { facesConcerned } from './acceptable-entries';
 import { FacePlan } from './face-sheet';
+import { byName } from './judged-by-name';
+import { JudgedDetails } from './judged-details';
 import { governingFor, readingMark, readingText, requirementWords } from './reading-words';
 import { TrailBody } from './requirement-trail';
+import { TrailSteps } from './trail-steps';
 import { subjectWords, type WordContext } from './entry-words';
 
 type Concerned = ReturnType<typeof facesConcerned>[number];
@@ -18,6 +22,9 @@ const placeOf = (sheet: Sheet, one: Concerned): { element: Element; face: Face; 
   const state = sheet.faces.find((candidate) => candidate.faceId === one.faceId);
   return element && face && state ? { element, face, state } : null;
 };
+
+const instrumentOf = (sheet: Sheet, { instrumentId }: EntryOf<'reading'>['body']) =>
+  sheet.instruments.find((one) => one.instrumentId === instrumentId) ?? null;
 
 /** The requirement with its trail, and the readings concerned drawn against it; measurements and checks with their limits. */
 export function RequirementPart({
@@ -83,6 +90,14 @@ export function RequirementPart({
                             <span className="font-label font-semibold">{point.label}</span>{' '}
                             <span className="font-figure">{readingText(current, units)}</span>:{' '}
                             {reading.judged.reason}
+                            <JudgedDetails
+                              about={point.label}
+                              judged={byName(
+                                judgedReading(reading, sheet.plan, instrumentOf(sheet, current), units),
+                                point.faceId,
+                                requirement.id,
+                              )}
+                            />
                           </li>
                         ))}
                       </ul>
@@ -103,9 +118,14 @@ export function RequirementPart({
             {state.governing.map((place) => (
               <li key={place.entry.id}>
                 {place.current?.place || 'place not named'}: {place.reason}
+                <JudgedDetails
+                  about={`${state.item.title}, ${place.current?.place || 'place not named'}`}
+                  judged={{ ...judgedMeasurement(state.item, place, units), sources: [] }}
+                />
               </li>
             ))}
           </ul>
+          <TrailSteps trail={state.item.trail} />
         </section>
       ))}
       {checks.map((check) => (
@@ -116,6 +136,7 @@ export function RequirementPart({
             {check.governing ? `Answered: ${check.governing.body.answer.replace('-', ' ')}` : 'Not answered'}
             {check.governing?.body.note && `. ${check.governing.body.note}`}
           </p>
+          <JudgedDetails about={check.item.question} judged={judgedCheck(check)} />
         </section>
       ))}
       {concerned.length + measurements.length + checks.length === 0 && (

@@ -1,9 +1,12 @@
+import type { ReactNode } from 'react';
 import { MarkIcon } from '@/components/drawings/mark';
 import type { MarkKind } from '@/components/drawings/mark-words';
 import type { Verdict } from '@/lib/concrete/judge-reading';
+import { judgedMeasurement } from '@/lib/inspection/judged-words';
 import { limitWords, measuredText } from '@/lib/inspection/measured-words';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { personName } from './entry-words';
+import { JudgedDetails } from './judged-details';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
 import { RuledTable, type RuledRow } from './ruled-table';
@@ -74,6 +77,14 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
               <Mark
                 verdict={place.current === null ? null : place.verdict}
                 reason={place.current === null ? 'withdrawn' : place.verdict === 'met' ? '' : place.reason}
+                judged={
+                  place.current && (
+                    <JudgedDetails
+                      about={`${state.item.title}, ${place.current.place || 'place not named'}`}
+                      judged={judgedMeasurement(state.item, place, sheet.plan.units)}
+                    />
+                  )
+                }
               />
             ),
             by: `${personName(place.entry.authorId, viewer.people)}, ${dayAndTime(place.entry.body.measuredAt, viewer.timeZone)}`,
@@ -84,16 +95,17 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
   );
 }
 
-function Mark({ verdict, reason }: { verdict: Verdict | null; reason: string }) {
+function Mark({ verdict, reason, judged }: { verdict: Verdict | null; reason: string; judged?: ReactNode }) {
   const shown =
     verdict === null ? { mark: 'unread' as const, word: reason || 'not measured' } : marks[verdict];
   return (
-    <span className="grid grid-cols-[auto_1fr] gap-x-1.5">
+    <div className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-1.5">
       <MarkIcon kind={shown.mark} className="mt-0.5" />
-      <span>
+      <div>
         {shown.word}
         {verdict !== null && reason && <span className="block text-label text-pencil">{reason}</span>}
-      </span>
-    </span>
+        {judged}
+      </div>
+    </div>
   );
 }

@@ -1,17 +1,27 @@
 import { MarkIcon } from '@/components/drawings/mark';
 import { markWords } from '@/components/drawings/mark-words';
 import type { LengthUnit } from '@/lib/concrete/length';
-import type { FaceState, PointState, ReadingState, Sheet } from '@/lib/inspection/sheet-types';
+import { judgedReading } from '@/lib/inspection/judged-words';
+import type {
+  FaceState,
+  InstrumentState,
+  PointState,
+  ReadingState,
+  Sheet,
+} from '@/lib/inspection/sheet-types';
 import { personName } from './entry-words';
+import { byName } from './judged-by-name';
+import { JudgedDetails } from './judged-details';
 import { dayAndTime } from './project-time';
 import { readingMark, readingText } from './reading-words';
 import { RuledTable, type RuledRow } from './ruled-table';
 
 interface TableContext {
+  plan: Sheet['plan'];
   units: LengthUnit;
   timeZone: string;
   people: ReadonlyMap<string, string>;
-  instruments: ReadonlyMap<string, string>;
+  instruments: ReadonlyMap<string, InstrumentState>;
 }
 
 /** Every reading of a face, point by point, amended and superseded ones included: the table of its map and section. */
@@ -29,10 +39,11 @@ export function ReadingsTable({
   timeZone: string;
 }) {
   const context: TableContext = {
+    plan: sheet.plan,
     units: sheet.plan.units,
     timeZone,
     people,
-    instruments: new Map(sheet.instruments.map((one) => [one.instrumentId, one.name])),
+    instruments: new Map(sheet.instruments.map((one) => [one.instrumentId, one])),
   };
   const rows = [...face.points, ...face.spots].flatMap((point) => pointRows(point, context));
   return (
@@ -132,6 +143,7 @@ function readingCells(
                 : `An amendment does not count: ${one.problem ?? 'it is not allowed here'}`,
             ),
           ]}
+          judged={<HowJudged {...{ point, reading, context }} />}
         />
       ),
     steel: entry.body.steel,
@@ -140,7 +152,7 @@ function readingCells(
         {dayAndTime(entry.body.measuredAt, context.timeZone)}
         <span className="block text-label text-pencil">
           {entry.body.instrumentId
-            ? (context.instruments.get(entry.body.instrumentId) ?? 'instrument not in the register')
+            ? (context.instruments.get(entry.body.instrumentId)?.name ?? 'instrument not in the register')
             : 'instrument not named'}
           , {personName(entry.authorId, context.people)}
         </span>
@@ -153,22 +165,45 @@ function Verdict({
   kind,
   word,
   lines,
+  judged,
 }: {
   kind: React.ComponentProps<typeof MarkIcon>['kind'];
   word: string;
   lines: string[];
+  judged?: React.ReactNode;
 }) {
   return (
-    <span className="grid grid-cols-[auto_1fr] gap-x-1.5">
+    <div className="grid grid-cols-[auto_minmax(0,1fr)] gap-x-1.5">
       <MarkIcon kind={kind} className="mt-0.5" />
-      <span>
+      <div>
         {word}
         {lines.map((line) => (
           <span key={line} className="block text-label text-pencil">
             {line}
           </span>
         ))}
-      </span>
-    </span>
+        {judged}
+      </div>
+    </div>
+  );
+}
+
+function HowJudged({
+  point,
+  reading,
+  context,
+}: {
+  point: PointState;
+  reading: ReadingState;
+  context: TableContext;
+}) {
+  const instrumentId = (reading.current ?? reading.entry.body).instrumentId;
+  const instrument = instrumentId === null ? undefined : context.instruments.get(instrumentId);
+  const words = judgedReading(reading, context.plan, instrument ?? null, context.units);
+  return (
+    <JudgedDetails
+      about={point.label}
+      judged={byName(words, point.faceId, reading.requirement?.id ?? null)}
+    />
   );
 }

@@ -79,13 +79,3 @@ export const decisionRuleWords = (rule: DecisionRule): string =>
     : rule.guardMm === undefined
       ? "guarded acceptance (a reading is met when it is inside the limit by its instrument's uncertainty)"
       : `guarded acceptance (a reading is met when it is inside the limit by ${rule.guardMm} mm)`;
-
-/** Where a trail step's number comes from, in words. */
-export const provenanceWords = {
-  contract: 'contract documents',
-  seen: 'text seen',
-  'partly-seen': 'text partly seen',
-  memory: 'from memory',
-  computed: 'computed',
-  'common-practice': 'common practice',
-} as const;

@@ -1,6 +1,6 @@
-import { needsEditionCheck } from '@/lib/concrete/trail';
+import { ToneGlyph } from '@/components/ui/tone-glyph';
+import { needsEditionCheck, stepSource } from '@/lib/concrete/trail';
 import type { TrailStep } from '@/lib/inspection/trail-step';
-import { provenanceWords } from './state-words';
 
 /** How a number was found, step by step: rule, clause and edition, value, and where it comes from. */
 export function TrailSteps({ trail }: { trail: readonly TrailStep[] }) {
@@ -14,19 +14,17 @@ export function TrailSteps({ trail }: { trail: readonly TrailStep[] }) {
           >
             <span>
               {step.rule}
-              <span className="block text-label text-pencil">
-                {[...new Set([step.clause, step.edition, provenanceWords[step.provenance]])]
-                  .filter(Boolean)
-                  .join(', ')}
-                {step.note ? `. ${step.note}` : ''}
-              </span>
+              <span className="block text-label text-pencil">{stepSource(step)}</span>
             </span>
             <span className="font-figure font-medium sm:text-right">{step.value}</span>
           </li>
         ))}
       </ol>
       {needsEditionCheck(trail) && (
-        <p className="text-pencil">Verify the steps marked as from memory against your edition.</p>
+        <p className="flex items-baseline gap-1.5 font-label text-label font-semibold text-watch">
+          <ToneGlyph tone="watch" className="shrink-0 translate-y-0.5" />
+          Verify against your edition: steps marked as from memory.
+        </p>
       )}
     </>
   );

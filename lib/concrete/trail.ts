@@ -15,3 +15,19 @@ export interface TrailStep {
 export function needsEditionCheck(trail: readonly { provenance: string }[]): boolean {
   return trail.some((step) => step.provenance === 'memory');
 }
+
+/** Where a step's number comes from, in words. */
+export const provenanceWords: Record<Provenance, string> = {
+  contract: 'contract documents',
+  seen: 'text seen',
+  'partly-seen': 'text partly seen',
+  memory: 'from memory',
+  computed: 'computed',
+  'common-practice': 'common practice',
+};
+
+/** Clause, edition and provenance of a step on one line, none of them twice, and its note. */
+export function stepSource(step: TrailStep): string {
+  const words = [...new Set([step.clause, step.edition, provenanceWords[step.provenance]])];
+  return [words.filter(Boolean).join(', '), step.note].filter(Boolean).join('. ');
+}

@@ -7,6 +7,8 @@ import { DecisionList } from '@/components/office/decision-list';
 import { ExtentPart, RequirementPart } from '@/components/office/decision-parts';
 import { DecisionSheet } from '@/components/office/decision-sheet';
 import { personName } from '@/components/office/entry-words';
+import { namedSources } from '@/components/office/judged-by-name';
+import { JudgedSources } from '@/components/office/judged-sources';
 import { LivePour } from '@/components/office/live-pour';
 import { NonconformanceStand } from '@/components/office/nonconformance-rows';
 import type { OfficeViewer } from '@/components/office/office-viewer';
@@ -114,7 +116,11 @@ export default async function DecisionPage({ params }: { params: Promise<{ nonco
       </SheetFrame>
 
       <DecisionSheet
-        requirement={<RequirementPart {...{ sheet, body, concerned }} />}
+        requirement={
+          <JudgedSources sources={namedSources(sheet.plan)}>
+            <RequirementPart {...{ sheet, body, concerned }} />
+          </JudgedSources>
+        }
         extent={<ExtentPart {...{ sheet, body, concerned, context }} />}
         photos={<PhotoStrip photos={photos} large />}
         counts={{

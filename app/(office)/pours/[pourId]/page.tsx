@@ -4,6 +4,8 @@ import { ChecksList } from '@/components/office/checks-list';
 import { ConditionsList } from '@/components/office/conditions-list';
 import { FaceSheet } from '@/components/office/face-sheet';
 import { HoldsList } from '@/components/office/holds-list';
+import { namedSources } from '@/components/office/judged-by-name';
+import { JudgedSources } from '@/components/office/judged-sources';
 import { LivePour } from '@/components/office/live-pour';
 import { MeasurementsTable } from '@/components/office/measurements-table';
 import { NonconformanceRows } from '@/components/office/nonconformance-rows';
@@ -130,24 +132,26 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
         </div>
       </div>
 
-      <div id="faces" className={`grid gap-6 *:min-w-0 ${part}`}>
-        {sheet.plan.elements.flatMap((element) =>
-          element.faces.map((face) => {
-            const faceState = sheet.faces.find((one) => one.faceId === face.id);
-            return (
-              faceState && (
-                <FaceSheet
-                  key={face.id}
-                  {...{ sheet, element, face }}
-                  state={faceState}
-                  people={viewer.people}
-                  timeZone={viewer.timeZone}
-                />
-              )
-            );
-          }),
-        )}
-      </div>
+      <JudgedSources sources={namedSources(sheet.plan)}>
+        <div id="faces" className={`grid gap-6 *:min-w-0 ${part}`}>
+          {sheet.plan.elements.flatMap((element) =>
+            element.faces.map((face) => {
+              const faceState = sheet.faces.find((one) => one.faceId === face.id);
+              return (
+                faceState && (
+                  <FaceSheet
+                    key={face.id}
+                    {...{ sheet, element, face }}
+                    state={faceState}
+                    people={viewer.people}
+                    timeZone={viewer.timeZone}
+                  />
+                )
+              );
+            }),
+          )}
+        </div>
+      </JudgedSources>
 
       <SheetFrame
         id="checks"
