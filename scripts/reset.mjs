@@ -25,7 +25,7 @@ await runMain(async () => {
     password: '',
   });
   cluster.stop();
-  for (const name of ['postgres', 'objects', 'mail'])
+  for (const name of ['postgres', 'objects', 'mail', 'logs'])
     rmSync(path.join(dataFolder, name), { recursive: true, force: true });
   rmSync(path.join(root, '.env.local'), { force: true });
   say('Done. "npm start" begins anew.');

@@ -5,12 +5,13 @@ import { Cluster } from './setup/cluster.mjs';
 import { prepareDatabase } from './setup/database.mjs';
 import { ensurePackages, ensurePostgres, requireNode } from './setup/installed.mjs';
 import { requireFree } from './setup/ports.mjs';
-import { answers, ask, Companions, run } from './setup/run.mjs';
+import { ask, Companions, run } from './setup/run.mjs';
 import { runMain, say } from './setup/say.mjs';
 import { environmentFor, localSecrets } from './setup/secrets.mjs';
 import path from 'node:path';
 
 const dev = process.argv.includes('--dev');
+const logFolder = path.join(dataFolder, 'logs');
 const ports = {
   app: Number(process.env.PORT ?? 3000),
   postgres: Number(process.env.POSTGRES_PORT ?? 54329),
@@ -39,7 +40,7 @@ async function main() {
   cluster.create();
   if (!cluster.isRunning()) await requireFree(ports.postgres, 'database', 'POSTGRES_PORT');
 
-  const companions = new Companions();
+  const companions = new Companions(logFolder);
   let stopped = false;
   const stop = async () => {
     if (stopped) return;
@@ -60,7 +61,7 @@ async function main() {
     companions.start('local services', process.execPath, [...tsx, 'scripts/local-services.ts'], {
       env: { ...env, LOCAL_SERVICES_FOLDER: dataFolder, MAIL_WEB_PORT: String(ports.mail) },
     });
-    await answers(`http://localhost:${ports.objects}/`);
+    await companions.answers(`http://localhost:${ports.objects}/`);
     run(process.execPath, [...tsx, 'scripts/seed-demo.ts'], { env });
     if (dev) run(process.execPath, ['scripts/copy-vendor.mjs']);
     else ensureBuild();
@@ -74,10 +75,11 @@ async function main() {
       [next, dev ? 'dev' : 'start', '-H', '127.0.0.1', '-p', String(ports.app)],
       {
         env: { ...env, NODE_ENV: dev ? 'development' : 'production' },
-        stdio: ['ignore', dev ? 'inherit' : 'ignore', 'inherit'],
+        // Whoever changes the code wants to see at once what Next says of it.
+        ...(dev ? { stdio: 'inherit' } : {}),
       },
     );
-    await answers(`http://localhost:${ports.app}/api/health`);
+    await companions.answers(`http://localhost:${ports.app}/api/health`);
     welcome(env);
     await Promise.race([interrupted, companions.ended]);
   } finally {
@@ -93,6 +95,7 @@ Cagewright is running.
   Office        ${env.APP_URL}
   Phone         ${env.APP_URL}/field
   Mail it sent  http://localhost:${ports.mail}
+  Logs          ${path.relative(root, logFolder)}/
 
 Demo sign-ins (invented people, this machine only):
 ${people
