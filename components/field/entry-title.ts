@@ -1,9 +1,9 @@
 import type { Entry } from '@/lib/inspection/entry';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { measuredText } from '@/lib/inspection/measured-words';
+import { readingText } from '@/lib/inspection/reading-text';
 import { answerWords } from './state-tone';
 import { subjectWords } from './subject-words';
-import { readingText } from './verdict-words';
 
 const eventWords = {
   rain: 'Rain',

@@ -9,8 +9,8 @@ import { formatLength, MM_PER_INCH, withUnit, type LengthUnit } from '@/lib/conc
 import { markOfReading } from '@/lib/inspection/judge-point';
 import type { Requirement } from '@/lib/inspection/plan';
 import type { FaceState, PointState } from '@/lib/inspection/sheet-types';
+import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import type { FaceOfPlan } from './open-sheet';
-import { bodyShown, readingText } from './verdict-words';
 import { Disclosure } from './disclosure';
 
 /** A distance on the form to the nearest mark of a tape: whole millimetres, or sixteenths of an inch. */

@@ -1,4 +1,4 @@
-import type { FixItem } from './fix-list';
+import type { FixItem } from '@/lib/inspection/fix-list-item';
 
 export const fixLanguages = ['en', 'es'] as const;
 export type FixLanguage = (typeof fixLanguages)[number];
@@ -86,7 +86,7 @@ export function fixItemWords({ what }: FixItem, language: FixLanguage): { title:
         : english
           ? 'Nonconformance'
           : 'No conformidad';
-      return { title: `${head}: ${what.title}`, lines: what.reason ? [what.reason] : [] };
+      return { title: `${head}: ${what.title}`, lines: [what.reason, what.extent].filter(Boolean) };
     }
   }
 }

@@ -5,8 +5,9 @@ import { formatLength, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { isOtherBar, limitsFor, markOfReading } from '@/lib/inspection/judge-point';
 import type { Plan } from '@/lib/inspection/plan';
 import type { InstrumentState, ReadingState } from '@/lib/inspection/sheet-types';
+import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { RequirementTrail } from './requirement-trail';
-import { bodyShown, readingText, verdictWords } from './verdict-words';
+import { verdictWords } from './verdict-words';
 
 const ruleWords = (rule: Plan['decisionRule'], uncertaintyMm: number | null) => {
   if (rule.kind === 'simple')

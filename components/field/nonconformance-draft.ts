@@ -2,8 +2,8 @@ import { withUnit } from '@/lib/concrete/length';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import { limitsFor } from '@/lib/inspection/judge-point';
 import type { Sheet } from '@/lib/inspection/sheet-types';
+import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { pointOf, subjectWords } from './subject-words';
-import { bodyShown, readingText } from './verdict-words';
 
 /** What a nonconformance form begins with: filled in from where it was raised. */
 export interface NonconformanceDraft {

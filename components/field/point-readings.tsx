@@ -6,11 +6,12 @@ import { classNames } from '@/components/ui/class-names';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import { markOfReading } from '@/lib/inspection/judge-point';
 import type { PointState } from '@/lib/inspection/sheet-types';
+import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
 import { nameOf, type OpenSheet } from './open-sheet';
-import { bodyShown, readingText, verdictWords } from './verdict-words';
+import { verdictWords } from './verdict-words';
 
 /** Every reading at a point, newest first, withdrawn ones struck through; each opens to correct it or ask about it. */
 export function PointReadings({ open, point }: { open: OpenSheet; point: PointState }) {

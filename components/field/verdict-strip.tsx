@@ -8,11 +8,12 @@ import type { LengthUnit } from '@/lib/concrete/length';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import { markOfReading } from '@/lib/inspection/judge-point';
 import type { ReadingState } from '@/lib/inspection/sheet-types';
+import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import type { OpenSheet } from './open-sheet';
 import { markTone } from './state-tone';
-import { bodyShown, marginWords, readingText, verdictWords } from './verdict-words';
+import { marginWords, verdictWords } from './verdict-words';
 
 const depthWords = { met: 'met', 'not-met': 'not met', 'not-verified': 'not verified' } as const;
 

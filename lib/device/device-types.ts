@@ -1,5 +1,6 @@
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import type { SubjectRef, siteBodies, projectBodies } from '@/lib/inspection/entry-bodies';
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { Role } from '@/lib/inspection/roles';
 import type { Hold, PourState, Sheet } from '@/lib/inspection/sheet-types';
 import type { refusalCodes } from '@/lib/inspection/wire';
@@ -108,6 +109,15 @@ export interface OpenPour {
   sheet: Sheet | null;
   holds: Hold[];
   state: PourState;
+  /** For crew, who have no sheet: what to put right, and their own entries here. Null for everybody else. */
+  crew: CrewPour | null;
+}
+
+/** What crew have of a pour. */
+export interface CrewPour {
+  /** Null until it was fetched. */
+  list: CrewList | null;
+  own: Entry[];
 }
 
 /** What is on this device: being read still, open, or out of reach because the store did not open. */

@@ -1,6 +1,21 @@
-import type { OpenPour } from './device-types';
+import { readEntry } from '@/lib/inspection/entry';
+import type { CrewPour, OpenPour } from './device-types';
 import type { PersonWork } from './person-work';
 import { pourOf, projectOf } from './snapshot-of';
+
+/** What of an opened pour is compared by its content. */
+const restOf = ({ pour, project, crew }: OpenPour): string =>
+  JSON.stringify([pour, project, crew?.list?.digest, crew?.own.map((one) => [one.id, one.seq])]);
+
+function crewPourOf(work: PersonWork, pourId: string): CrewPour {
+  const own = work.memory
+    .entriesOf(pourId)
+    .filter((entry) => entry.authorId === work.person.id)
+    .map(readEntry)
+    .flatMap((read) => (read.kind === 'known' ? [read.entry] : []))
+    .sort((a, b) => a.deviceSeq - b.deviceSeq);
+  return { list: work.crewLists.get(pourId) ?? null, own };
+}
 
 /** The pours that screens look at: the same object as long as nothing in it changed. */
 export class OpenedPours {
@@ -33,11 +48,9 @@ export class OpenedPours {
     if (known && sameSheet && known.version === version) return known.open;
     const pour = pourOf(work, project.id, pourId, now);
     if (!pour) return undefined;
-    const open: OpenPour = { pour, project: projectOf(project), ...folded };
-    const same =
-      known &&
-      sameSheet &&
-      JSON.stringify([known.open.pour, known.open.project]) === JSON.stringify([pour, open.project]);
+    const crew = project.role === 'crew' ? crewPourOf(work, pourId) : null;
+    const open: OpenPour = { pour, project: projectOf(project), ...folded, crew };
+    const same = known && sameSheet && restOf(known.open) === restOf(open);
     this.#opened.set(pourId, { version, open: same ? known.open : open });
     return same ? known.open : open;
   }

@@ -1,4 +1,5 @@
 import type { BodyOf } from '@/lib/inspection/entry';
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { DeviceIndex, PushOutcome } from '@/lib/inspection/wire';
 import type { DeviceEnvironment, TabChannel, TabMessage } from './device-environment';
@@ -43,6 +44,8 @@ export class PersonWork {
   readonly outbox = new Map<string, Waiting>();
   readonly refused = new Map<string, RefusedRecord>();
   readonly photos = new Map<string, PhotoRecord>();
+  /** Of crew only, by pour. */
+  readonly crewLists = new Map<string, CrewList>();
   index: DeviceIndex | null = null;
   keep: Record<string, boolean> = {};
   lastSuccessAt: string | null = null;
@@ -94,12 +97,15 @@ export class PersonWork {
   }
 
   async #readAll(): Promise<void> {
-    const [outbox, refused, photos, cursors] = await Promise.all([
+    const [outbox, refused, photos, cursors, crewLists] = await Promise.all([
       this.db.getAll('outbox'),
       this.db.getAll('refused'),
       this.db.getAll('photos'),
       this.db.getAll('cursors'),
+      this.db.getAll('crewLists'),
     ]);
+    this.crewLists.clear();
+    for (const { pourId, list } of crewLists) this.crewLists.set(pourId, list);
     this.outbox.clear();
     for (const record of outbox) this.#waits(record);
     this.refused.clear();
@@ -243,7 +249,7 @@ export class PersonWork {
       deviceId: this.deviceId,
       now: this.env.now(),
       clockOffsetMs: this.clockOffsetMs,
-      planRevision: place.pourId === null ? 0 : (this.memory.planOf(place.pourId)?.revision ?? 0),
+      planRevision: place.pourId === null ? 0 : this.#planRevisionOf(place.pourId),
       seenSeq: this.memory.headOf(stream) ?? 0,
     };
     try {
@@ -271,6 +277,10 @@ export class PersonWork {
             'This could not be saved on the device. Everything saved before is kept. Load this page again and enter it once more.',
           );
     }
+  }
+
+  #planRevisionOf(pourId: string): number {
+    return this.memory.planOf(pourId)?.revision ?? this.crewLists.get(pourId)?.planRevision ?? 0;
   }
 
   /** The next records to send, in the order in which they were made, at most `most`. */
@@ -316,11 +326,16 @@ export class PersonWork {
     // From here on without a pause: what is being read from the store meanwhile is read again (see #loadStream).
     this.memory.merge(page.stream, page.entries, page.head);
     if (page.plan) this.memory.setPlan(page.plan);
+    if (page.crewList) this.crewLists.set(page.stream, page.crewList);
     this.planRevisions.set(page.stream, stored.cursor.planRevision);
     for (const photo of stored.photos) this.photos.set(photo.photoId, photo);
     for (const record of stored.offeredAgain) this.#waits(record);
     if (stored.offeredAgain.length > 0) this.#mark();
-    const news = page.entries.length > 0 || page.plan !== null || stored.offeredAgain.length > 0;
+    const news =
+      page.entries.length > 0 ||
+      page.plan !== null ||
+      Boolean(page.crewList) ||
+      stored.offeredAgain.length > 0;
     if (news) this.#tell({ streams: [page.stream] });
   }
 
@@ -340,7 +355,30 @@ export class PersonWork {
     // What cannot be noted on a full device is asked again after the next start; sending goes on, and makes room.
     await writeMeta(this.db, 'index', index).catch(unlessFull);
     this.index = index;
+    for (const stream of await this.#notTheirs(index)) await this.#forget(stream);
     this.#tell({ streams: [] });
+  }
+
+  /**
+   * Streams of which this device holds what the person's role does not give them (any more): a record where they are
+   * crew now, a crew's list where they are not, anything of a pour that crew are no longer assigned to.
+   */
+  async #notTheirs({ projects }: DeviceIndex): Promise<string[]> {
+    const crewOf = new Map(
+      projects.flatMap(({ role, pours }) => pours.map(({ id }) => [id, role === 'crew'] as const)),
+    );
+    const cursors = await this.db.getAll('cursors');
+    const followed = new Set(cursors.filter(({ after }) => after > 0).map(({ stream }) => stream));
+    const withPlan = await this.db.getAllKeys('plans');
+    return [
+      ...withPlan.filter((pourId) => crewOf.get(pourId) === true),
+      ...[...this.crewLists.keys()].filter((pourId) => crewOf.get(pourId) !== true),
+      // Crew are given nothing of the project's own stream.
+      ...projects
+        .filter(({ role }) => role === 'crew')
+        .map(({ id }) => projectStream(id))
+        .filter((stream) => followed.has(stream)),
+    ];
   }
 
   async setClockOffset(offsetMs: number | null): Promise<void> {
@@ -357,12 +395,15 @@ export class PersonWork {
   async choose(pourId: string, keep: boolean): Promise<void> {
     this.keep = { ...this.keep, [pourId]: keep };
     await writeMeta(this.db, 'keep', this.keep);
-    if (!keep) {
-      for (const photoId of await forgetPour(this.db, pourId)) this.photos.delete(photoId);
-      this.planRevisions.delete(pourId);
-      this.memory.close(pourId);
-    }
+    if (!keep) await this.#forget(pourId);
     this.#tell({ streams: [] });
+  }
+
+  async #forget(pourId: string): Promise<void> {
+    for (const photoId of await forgetPour(this.db, pourId)) this.photos.delete(photoId);
+    this.planRevisions.delete(pourId);
+    this.crewLists.delete(pourId);
+    this.memory.close(pourId);
   }
 
   async setPhoto(photo: PhotoRecord): Promise<void> {

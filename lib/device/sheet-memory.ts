@@ -55,6 +55,11 @@ export class SheetMemory {
     return this.#streams.get(stream)?.head;
   }
 
+  /** The entries of a stream that is held. */
+  entriesOf(stream: string): RecordedEntry[] {
+    return [...(this.#streams.get(stream)?.entries.values() ?? [])];
+  }
+
   planOf(pourId: string): Plan | null {
     return this.#plans.get(pourId) ?? null;
   }

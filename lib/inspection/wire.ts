@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { entryEnvelope, receipt } from './entry';
-import { instant, recordId } from './primitives';
+import { crewList } from './fix-list-item';
+import { digest, instant, recordId } from './primitives';
 import { plan } from './plan';
 import { role } from './roles';
 
@@ -65,7 +66,16 @@ export const pullRequest = z.object({
   projectId: recordId,
   /** The project's own stream. */
   project: cursor,
-  pours: z.array(cursor.extend({ pourId: recordId, planRevision: z.number().int().nonnegative() })).max(60),
+  pours: z
+    .array(
+      cursor.extend({
+        pourId: recordId,
+        planRevision: z.number().int().nonnegative(),
+        /** Digest of the crew's list that the device holds; devices of an earlier version name none. */
+        crewList: digest.nullable().optional(),
+      }),
+    )
+    .max(60),
 });
 export type PullRequest = z.infer<typeof pullRequest>;
 
@@ -82,7 +92,15 @@ const streamPage = z.object({
 export const pullResponse = z.object({
   serverTime: instant,
   project: streamPage,
-  pours: z.array(streamPage.extend({ pourId: recordId, found: z.boolean(), plan: plan.nullable() })),
+  pours: z.array(
+    streamPage.extend({
+      pourId: recordId,
+      found: z.boolean(),
+      plan: plan.nullable(),
+      /** For crew only, who get it in place of the plan and of others' entries; null where the device holds it. */
+      crewList: crewList.nullable().optional(),
+    }),
+  ),
 });
 export type PullResponse = z.infer<typeof pullResponse>;
 

@@ -8,7 +8,7 @@ import type { PersonDatabase } from './person-database';
  */
 export async function forgetPour(db: PersonDatabase, pourId: string): Promise<string[]> {
   const tx = db.transaction(
-    ['entries', 'acked', 'cursors', 'plans', 'photos', 'photoBytes', 'outbox'],
+    ['entries', 'acked', 'cursors', 'plans', 'crewLists', 'photos', 'photoBytes', 'outbox'],
     'readwrite',
   );
   return allOrNothing(tx, async () => {
@@ -25,6 +25,7 @@ export async function forgetPour(db: PersonDatabase, pourId: string): Promise<st
     await Promise.all([
       tx.objectStore('cursors').delete(pourId),
       tx.objectStore('plans').delete(pourId),
+      tx.objectStore('crewLists').delete(pourId),
       ...entries.filter((id) => !waits.has(id)).map((id) => tx.objectStore('entries').delete(id)),
       ...acked.map((id) => tx.objectStore('acked').delete(id)),
       ...gone.flatMap((id) => [tx.objectStore('photos').delete(id), tx.objectStore('photoBytes').delete(id)]),

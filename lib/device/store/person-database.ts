@@ -3,6 +3,7 @@ import type { EntryEnvelope } from '@/lib/inspection/entry';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import type { Plan } from '@/lib/inspection/plan';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { DeviceIndex } from '@/lib/inspection/wire';
 import type { PhotoProgress, RefusedEntry } from '../device-types';
 
@@ -69,6 +70,12 @@ export interface CursorRecord {
   planRevision: number;
 }
 
+/** What crew have of a pour. */
+export interface CrewListRecord {
+  pourId: string;
+  list: CrewList;
+}
+
 export interface MetaValues {
   /** Made with the store; another one in the cookie means that this store was emptied behind our back. */
   storeId: string;
@@ -97,6 +104,8 @@ export interface PersonSchema extends DBSchema {
   photos: { key: string; value: PhotoRecord };
   photoBytes: { key: string; value: { photoId: string; bytes: ArrayBuffer } };
   cursors: { key: string; value: CursorRecord };
+  /** Of crew only, in place of plans and others' entries. */
+  crewLists: { key: string; value: CrewListRecord };
   meta: { key: string; value: unknown };
 }
 
@@ -107,8 +116,10 @@ export type PersonDatabase = IDBPDatabase<PersonSchema>;
  * @param name from `DeviceEnvironment.databaseName`
  */
 export function openPersonDatabase(name: string): Promise<PersonDatabase> {
-  return openDB<PersonSchema>(name, 1, {
-    upgrade(db) {
+  return openDB<PersonSchema>(name, 2, {
+    upgrade(db, before) {
+      if (before < 2) db.createObjectStore('crewLists', { keyPath: 'pourId' });
+      if (before >= 1) return;
       db.createObjectStore('plans', { keyPath: 'pourId' });
       db.createObjectStore('entries', { keyPath: 'id' }).createIndex('stream', 'stream');
       db.createObjectStore('outbox', { keyPath: 'id' }).createIndex('deviceSeq', 'deviceSeq');

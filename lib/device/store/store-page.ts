@@ -1,3 +1,4 @@
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { Plan } from '@/lib/inspection/plan';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { StoredEntry } from '@/lib/inspection/wire';
@@ -14,6 +15,8 @@ export interface StreamPage {
   /** Nothing follows: the stream is complete up to `head`. */
   complete: boolean;
   plan: Plan | null;
+  /** Crew get this in place of the plan. */
+  crewList?: CrewList | null;
 }
 
 export interface StoredPage {
@@ -32,7 +35,7 @@ const REFUSALS_TO_RETRY = 1;
  */
 export async function storePage(db: PersonDatabase, page: StreamPage): Promise<StoredPage> {
   const tx = db.transaction(
-    ['entries', 'cursors', 'plans', 'acked', 'outbox', 'photos', 'strays'],
+    ['entries', 'cursors', 'plans', 'acked', 'outbox', 'photos', 'strays', 'crewLists'],
     'readwrite',
   );
   return allOrNothing(tx, async () => {
@@ -50,7 +53,7 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
       stream: page.stream,
       after: page.head,
       headHash: page.headHash,
-      planRevision: page.plan?.revision ?? before?.planRevision ?? 0,
+      planRevision: page.plan?.revision ?? page.crewList?.planRevision ?? before?.planRevision ?? 0,
     };
     const pulled = new Set(page.entries.map((entry) => entry.id));
     const missing = page.complete ? acked.filter((one) => !pulled.has(one.id)) : [];
@@ -58,6 +61,8 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
 
     const writes: Promise<unknown>[] = [tx.objectStore('cursors').put(cursor)];
     if (page.plan) writes.push(tx.objectStore('plans').put(page.plan));
+    if (page.crewList)
+      writes.push(tx.objectStore('crewLists').put({ pourId: page.stream, list: page.crewList }));
     for (const entry of page.entries) {
       writes.push(
         tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }),

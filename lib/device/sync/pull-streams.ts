@@ -1,3 +1,4 @@
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import { PROTOCOL, pullResponse, type PullRequest, type PullResponse } from '@/lib/inspection/wire';
 import type { DeviceEnvironment } from '../device-environment';
 import type { PersonWork } from '../person-work';
@@ -80,7 +81,13 @@ async function requestFor(
     protocol: PROTOCOL,
     projectId,
     project: { after, headHash },
-    pours: await Promise.all(pourIds.map(async (pourId) => ({ pourId, ...(await cursorOf(pourId)) }))),
+    pours: await Promise.all(
+      pourIds.map(async (pourId) => ({
+        pourId,
+        ...(await cursorOf(pourId)),
+        crewList: work.crewLists.get(pourId)?.digest ?? null,
+      })),
+    ),
   };
 }
 
@@ -94,20 +101,21 @@ async function take(
     stream: string,
     page: PullResponse['project'],
     plan: PullResponse['pours'][number]['plan'],
+    crewList: CrewList | null,
   ) => {
     if (!page.headKnown) {
       await work.restart(stream);
       return true;
     }
     const { entries, head, headHash, more } = page;
-    await work.takePage({ stream, entries, head, headHash, complete: !more, plan });
+    await work.takePage({ stream, entries, head, headHash, complete: !more, plan, crewList });
     return more;
   };
-  const project = await takeStream(projectStream(projectId), data.project, null);
+  const project = await takeStream(projectStream(projectId), data.project, null, null);
   const pours: string[] = [];
   for (const pour of data.pours) {
     if (!pour.found) continue;
-    if (await takeStream(pour.pourId, pour, pour.plan)) pours.push(pour.pourId);
+    if (await takeStream(pour.pourId, pour, pour.plan, pour.crewList ?? null)) pours.push(pour.pourId);
   }
   return { project, pours };
 }

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import canonicalize from 'canonicalize';
 import { entryEnvelope, isEntryType } from '@/lib/inspection/entry';
 import { bodies } from '@/lib/inspection/entry-bodies';
+import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { Plan } from '@/lib/inspection/plan';
 import type { Role } from '@/lib/inspection/roles';
 import {
@@ -49,6 +50,8 @@ export const contentOf = (entry: object): string =>
 export class ModelServer {
   entries: StoredEntry[] = [];
   photos = new Map<string, Uint8Array>();
+  /** What crew are given of a pour, by its id. */
+  crewLists = new Map<string, CrewList>();
   /** In whose session each entry came that was kept. */
   readonly sentBy = new Map<string, string>();
   pageSize = 1000;
@@ -95,9 +98,13 @@ export class ModelServer {
     this.entries = [...backup];
   }
 
-  /** Writes an entry as the server itself does (a photo stored, say). */
-  writes(pourId: string | null, type: string, body: StoredEntry['body']): StoredEntry {
-    const by = this.people[0];
+  /** Writes an entry as the server itself does (a photo stored, say), or as somebody does elsewhere. */
+  writes(
+    pourId: string | null,
+    type: string,
+    body: StoredEntry['body'],
+    by: Pick<ModelPerson, 'id' | 'role'> | undefined = this.people[0],
+  ): StoredEntry {
     const number = this.entries.length + 1;
     return this.#seal(
       {
@@ -126,7 +133,7 @@ export class ModelServer {
     if (!session) return json(401, { code: 'sign-in-needed', sentence: 'Sign in to go on.' });
     if (path === '/api/sync/index') return json(200, this.#index(session));
     if (path === '/api/sync/push') return json(200, this.#push(session, await bodyOf(init)));
-    if (path === '/api/sync/pull') return json(200, this.#pull(await bodyOf(init)));
+    if (path === '/api/sync/pull') return json(200, this.#pull(session, await bodyOf(init)));
     const photo = /^\/api\/photos\/([^/]+)\/(upload-address|uploaded|address)$/.exec(path);
     if (photo) return this.#photo(session, photo[1] ?? '', photo[2] ?? '');
     if (/^\/api\/signatures\/[^/]+\/confirm$/.test(path)) {
@@ -214,13 +221,17 @@ export class ModelServer {
     return sealed;
   }
 
-  #pull(raw: unknown): PullResponse {
+  #pull(person: ModelPerson, raw: unknown): PullResponse {
     const request: PullRequest = pullRequest.parse(raw);
     return {
       serverTime: this.#now(),
-      project: this.#page(null, request.project),
+      project: {
+        ...this.#page(null, request.project),
+        ...(person.role === 'crew' && nothingOf(request.project)),
+      },
       pours: request.pours.map((cursor) => {
         const pour = this.pours.find((one) => one.id === cursor.pourId);
+        if (person.role === 'crew') return this.#pullForCrew(person, cursor, pour !== undefined);
         return {
           pourId: cursor.pourId,
           found: pour !== undefined,
@@ -228,6 +239,24 @@ export class ModelServer {
           ...this.#page(cursor.pourId, cursor),
         };
       }),
+    };
+  }
+
+  #pullForCrew(
+    person: ModelPerson,
+    cursor: PullRequest['pours'][number],
+    found: boolean,
+  ): PullResponse['pours'][number] {
+    const { pourId } = cursor;
+    const page = this.#page(pourId, cursor);
+    const list = this.crewLists.get(pourId);
+    return {
+      pourId,
+      found,
+      plan: null,
+      crewList: list && list.digest !== cursor.crewList ? list : null,
+      ...page,
+      entries: page.entries.filter((entry) => entry.authorId === person.id),
     };
   }
 
@@ -271,30 +300,50 @@ export class ModelServer {
       });
     }
     if (verb === 'address') return json(200, { url: `/store/${photoId}?signed` });
+    // As the real one does: what is found of a photo is written under the name of who took it.
+    const author = { id: entry.authorId, role: entry.authorRole };
     const bytes = this.photos.get(photoId);
     const stored = this.entries.some((one) => one.type === 'photo-stored' && one.body.photoId === photoId);
     if (stored) return json(200, {});
     const sha256 = bytes ? createHash('sha256').update(bytes).digest('hex') : null;
     if (sha256 === entry.body.sha256) {
       const { bytes: length = 1, contentType = '' } = entry.body;
-      this.writes(entry.pourId, 'photo-stored', {
-        photoId,
-        key: `photos/${sha256}`,
-        sha256,
-        bytes: length,
-        contentType,
-        widthPx: 4,
-        heightPx: 3,
-      });
+      this.writes(
+        entry.pourId,
+        'photo-stored',
+        {
+          photoId,
+          key: `photos/${sha256}`,
+          sha256,
+          bytes: length,
+          contentType,
+          widthPx: 4,
+          heightPx: 3,
+        },
+        author,
+      );
     } else {
-      this.writes(entry.pourId, 'photo-refused', {
-        photoId,
-        problem: 'The bytes are not those that were recorded.',
-      });
+      this.writes(
+        entry.pourId,
+        'photo-refused',
+        {
+          photoId,
+          problem: 'The bytes are not those that were recorded.',
+        },
+        author,
+      );
     }
     return json(200, {});
   }
 }
+
+/** Crew are given nothing of the project's own stream, and their cursor stays where it is. */
+const nothingOf = ({ after, headHash }: PullRequest['project']) => ({
+  entries: [],
+  head: after,
+  headHash,
+  more: false,
+});
 
 const receiptOf = ({ seq, receivedAt, authorRole, prevHash, hash }: StoredEntry) => ({
   seq,

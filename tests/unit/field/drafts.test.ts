@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest';
-import { correctedTogether, failingOnFace } from '@/components/field/corrected-together';
+import { correctedTogether, failingOnFace } from '@/lib/inspection/corrected-together';
 import { failingBeside, nonconformanceDraft } from '@/components/field/nonconformance-draft';
 import { holdPath } from '@/components/field/hold-path';
 import { clockWords, notSentWords, syncWords } from '@/components/field/sync-words';

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
-import { fixList } from '@/components/field/fix-list';
 import { fixItemWords, fixListText } from '@/components/field/fix-list-words';
+import { fixList } from '@/lib/inspection/fix-list';
 import { holds } from '@/lib/inspection/holds';
 import { foldSheet } from '@/lib/inspection/sheet';
 import { PourStory, smallPlan } from '../../stories/pour-story';

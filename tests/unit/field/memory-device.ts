@@ -105,6 +105,7 @@ export class MemoryDevice implements Device {
       sheet,
       holds: standing,
       state: pourState(sheet, standing, now),
+      crew: null,
     };
   }
 

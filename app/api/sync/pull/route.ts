@@ -10,6 +10,6 @@ export const POST = handleRoute({
   load: async ({ body }) => ({ projectId: body.projectId }),
   run: async ({ tx, person, role, body, now }) => ({
     serverTime: now,
-    ...(await pullStreams(tx, body, { id: person.id, role })),
+    ...(await pullStreams(tx, body, { id: person.id, role }, now)),
   }),
 });

@@ -1,5 +1,5 @@
-import type { SubjectRef } from '@/lib/inspection/entry-bodies';
-import type { Sheet } from '@/lib/inspection/sheet-types';
+import type { SubjectRef } from './entry-bodies';
+import type { Sheet } from './sheet-types';
 
 /**
  * What one correction puts right: the subject itself, and for a nonconformance the points, checks and measurements
