@@ -21,8 +21,11 @@ export function JudgedDetails({
   const [open, setOpen] = useState(false);
   return (
     <details className="print:hidden" onToggle={(event) => setOpen(event.currentTarget.open)}>
-      <summary className="min-h-6 w-fit font-label text-label font-semibold text-chalk">
-        How was this judged?<span className="sr-only"> {about}</span>
+      <summary
+        aria-label={`How was this judged? ${about}`}
+        className="min-h-6 w-fit font-label text-label font-semibold text-chalk"
+      >
+        How was this judged?
       </summary>
       {open && (
         <div className="grid min-w-0 gap-2 py-1">

@@ -10,13 +10,13 @@ export function TrailSteps({ trail }: { trail: readonly TrailStep[] }) {
         {trail.map((step, index) => (
           <li
             key={`${index}-${step.rule}`}
-            className="grid gap-x-4 border-b border-rule pb-1 sm:grid-cols-[1fr_auto]"
+            className="flex flex-wrap items-baseline justify-between gap-x-4 border-b border-rule pb-1"
           >
-            <span>
+            <span className="min-w-0 flex-1 basis-48">
               {step.rule}
               <span className="block text-label text-pencil">{stepSource(step)}</span>
             </span>
-            <span className="font-figure font-medium sm:text-right">{step.value}</span>
+            <span className="ml-auto min-w-0 text-right font-figure font-medium">{step.value}</span>
           </li>
         ))}
       </ol>

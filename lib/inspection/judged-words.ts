@@ -116,13 +116,20 @@ function readingLines(
   return [
     { label: 'read', value: withUnit(mm, unit, least) },
     { label: 'least accepted', value: withUnit(least, unit, mm) },
-    { label: 'difference', value: withUnit(mm - least, unit, 0), decides: true },
+    marginLine('least', mm - least, (length) => withUnit(length, unit, 0)),
     ...(most === null
       ? []
-      : [...upper(mm), { label: 'left to the most', value: withUnit(most - mm, unit, 0), decides: true }]),
+      : [...upper(mm), marginLine('most', mm - most, (length) => withUnit(length, unit, 0))]),
     ...uncertainty,
   ];
 }
+
+/** "below the least: 7 mm": on which side of a limit a value lies, and how far. */
+const marginLine = (limit: 'least' | 'most', by: number, show: (size: number) => string): JudgedLine => ({
+  label: `${by < 0 ? 'below' : 'above'} the ${limit}`,
+  value: show(Math.abs(by)),
+  decides: true,
+});
 
 /** What was said of it since: its round, and a decision that accepts it. */
 function standing(one: {
@@ -228,13 +235,13 @@ function against(
       ? []
       : [
           { label: 'least accepted', value: show(least, value) },
-          { label: 'difference', value: show(value - least, 0), decides: true },
+          marginLine('least', value - least, (size) => show(size, 0)),
         ]),
     ...(most === null
       ? []
       : [
           { label: 'most accepted', value: show(most, value) },
-          { label: 'left to the most', value: show(most - value, 0), decides: true },
+          marginLine('most', value - most, (size) => show(size, 0)),
         ]),
   ];
 }
