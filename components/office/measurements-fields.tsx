@@ -66,13 +66,14 @@ function OneMeasurement({ index, onRemove }: { index: number; onRemove: () => vo
   const path = `measurements.${index}` as const;
   const { control, register } = useFormContext<PlanDraft>();
   const [draft, elements] = useWatch({ control, name: [path, 'elements'] as const });
-  const name = draft.title || defaultTitle(draft, elements);
+  const untitled = defaultTitle(draft, elements);
+  const name = draft.title || untitled;
   return (
     <fieldset className="grid gap-4 border-t border-rule pt-3 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
       <legend className="float-left w-full font-label text-lead font-semibold lg:col-span-2">{name}</legend>
       <div className="grid content-start gap-3">
         <div className="grid gap-3 sm:grid-cols-2 lg:grid-cols-3">
-          <PlanText path={`${path}.title`} label="Title" hint={`Left empty: ${name}`} optional />
+          <PlanText path={`${path}.title`} label="Title" hint={`Left empty: ${untitled}`} optional />
           <PlanSelect
             path={`${path}.elementId`}
             label="Element"
