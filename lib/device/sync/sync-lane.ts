@@ -10,6 +10,8 @@ import { pushOutbox } from './push-outbox';
 /** Readings that follow each other quickly go in one batch. */
 const GATHER_MS = 400;
 const POLL_MS = 45_000;
+/** A photo that was sent is looked at by the server within seconds: what it found is asked for soon, then less often. */
+const PHOTO_POLL_MS = 3_000;
 const OTHER_TAB_SENDS_MS = 3_000;
 /** The server is asked who is signed in, and for which pours there are, no more often than this. */
 const INDEX_MS = 30_000;
@@ -37,6 +39,8 @@ export class SyncLane {
   #running: Promise<void> | null = null;
   #again = false;
   #failures = 0;
+  /** Rounds since the last one that found no photo sent and not heard of. */
+  #photoPolls = 0;
   /** The server asked to wait. A timer ends it: the device's clock may be set meanwhile. */
   #askedToWait = false;
   #stopWaiting: (() => void) | null = null;
@@ -136,7 +140,7 @@ export class SyncLane {
       if (this.#stopped || this.host.work() !== work) continue;
       if (ended === 'taken') {
         if (work.outbox.size > 0) this.#in(OTHER_TAB_SENDS_MS * (1 + this.env.random()));
-        else this.#poll();
+        else this.#poll(work);
         return;
       }
       if (ended === 'stopped') continue;
@@ -161,11 +165,14 @@ export class SyncLane {
     this.#set('idle', ended.problem && `${ended.problem} ${keptWords(work)}`.trim());
     this.host.changed();
     this.host.wentThrough();
-    this.#poll();
+    this.#poll(work);
   }
 
-  #poll(): void {
-    if (this.env.inSight()) this.#in(POLL_MS * (1 + this.env.random() / 4));
+  #poll(work: PersonWork): void {
+    const unheard = [...work.photos.values()].some((photo) => photo.progress === 'sent');
+    this.#photoPolls = unheard ? this.#photoPolls + 1 : 0;
+    const wait = unheard ? Math.min(POLL_MS, PHOTO_POLL_MS * 2 ** (this.#photoPolls - 1)) : POLL_MS;
+    if (this.env.inSight()) this.#in(wait * (1 + this.env.random() / 4));
   }
 
   async #round(work: PersonWork): Promise<LaneTrouble | Through | 'stopped'> {
