@@ -1,4 +1,4 @@
-import { openDB, type DBSchema, type IDBPDatabase } from 'idb';
+import type { DBSchema, IDBPDatabase } from 'idb';
 import type { EntryEnvelope } from '@/lib/inspection/entry';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import type { Plan } from '@/lib/inspection/plan';
@@ -6,6 +6,7 @@ import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { DeviceIndex } from '@/lib/inspection/wire';
 import type { PhotoProgress, RefusedEntry } from '../device-types';
+import { openLastingDatabase } from './lasting-database';
 
 /** The stream of a pour is named by its id; the project's own stream by its project. */
 export const streamOf = (entry: { pourId: string | null; projectId: string }): string =>
@@ -116,25 +117,19 @@ export type PersonDatabase = IDBPDatabase<PersonSchema>;
  * @param name from `DeviceEnvironment.databaseName`
  */
 export function openPersonDatabase(name: string): Promise<PersonDatabase> {
-  return openDB<PersonSchema>(name, 2, {
-    upgrade(db, before) {
-      if (before < 2) db.createObjectStore('crewLists', { keyPath: 'pourId' });
-      if (before >= 1) return;
-      db.createObjectStore('plans', { keyPath: 'pourId' });
-      db.createObjectStore('entries', { keyPath: 'id' }).createIndex('stream', 'stream');
-      db.createObjectStore('outbox', { keyPath: 'id' }).createIndex('deviceSeq', 'deviceSeq');
-      db.createObjectStore('refused', { keyPath: 'id' });
-      db.createObjectStore('acked', { keyPath: 'id' }).createIndex('stream', 'stream');
-      db.createObjectStore('strays', { keyPath: 'id' });
-      db.createObjectStore('photos', { keyPath: 'photoId' });
-      db.createObjectStore('photoBytes', { keyPath: 'photoId' });
-      db.createObjectStore('cursors', { keyPath: 'stream' });
-      db.createObjectStore('meta');
-    },
-    // A tab with a newer program wants to change the shape of the store: this one lets go and reloads its data later.
-    blocking(_current, _blocked, event) {
-      (event.target as IDBDatabase).close();
-    },
+  return openLastingDatabase<PersonSchema>(name, 2, (db, before) => {
+    if (before < 2) db.createObjectStore('crewLists', { keyPath: 'pourId' });
+    if (before >= 1) return;
+    db.createObjectStore('plans', { keyPath: 'pourId' });
+    db.createObjectStore('entries', { keyPath: 'id' }).createIndex('stream', 'stream');
+    db.createObjectStore('outbox', { keyPath: 'id' }).createIndex('deviceSeq', 'deviceSeq');
+    db.createObjectStore('refused', { keyPath: 'id' });
+    db.createObjectStore('acked', { keyPath: 'id' }).createIndex('stream', 'stream');
+    db.createObjectStore('strays', { keyPath: 'id' });
+    db.createObjectStore('photos', { keyPath: 'photoId' });
+    db.createObjectStore('photoBytes', { keyPath: 'photoId' });
+    db.createObjectStore('cursors', { keyPath: 'stream' });
+    db.createObjectStore('meta');
   });
 }
 

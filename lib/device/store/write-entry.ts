@@ -1,6 +1,7 @@
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { allOrNothing } from './all-or-nothing';
 import { envelopeOf } from './envelope';
+import { onceMoreIfReopened } from './lasting-database';
 import {
   isDeviceFull,
   streamOf,
@@ -29,7 +30,7 @@ export async function writeEntry(
   photo?: PhotoToStore,
 ): Promise<{ entry: RecordedEntry; outbox: OutboxRecord }> {
   try {
-    return await writeOnce(db, floor, build, photo);
+    return await onceMoreIfReopened(db, () => writeOnce(db, floor, build, photo));
   } catch (error) {
     if (!isDeviceFull(error)) throw error;
     // Photos already on the server can be shown from there; a reading can also have the room that was set aside.
