@@ -4,6 +4,18 @@ import { useState } from 'react';
 import { Button } from '@/components/ui/button';
 import { askJson, textOf } from './post-json';
 
+/** A job writes a certificate; before that its address leads to an answer of the store that helps nobody. */
+async function isThere(url: string): Promise<boolean> {
+  const abort = new AbortController();
+  try {
+    return (await fetch(url, { signal: abort.signal })).ok;
+  } catch {
+    return false;
+  } finally {
+    abort.abort();
+  }
+}
+
 /** Opens the certificate of a release by its short-lived address; says so where it is not written yet. */
 export function CertificateButton({
   pourId,
@@ -21,12 +33,10 @@ export function CertificateButton({
     setProblem(null);
     const answer = await askJson('GET', `/api/pours/${pourId}/releases/${releaseId}/certificate`);
     const url = answer.ok ? textOf(answer.data, 'url') : null;
+    const there = url !== null && (await isThere(url));
     setBusy(false);
-    if (url) window.location.assign(url);
-    else
-      setProblem(
-        answer.ok ? 'It cannot be opened now.' : `${answer.sentence} It is written within a minute.`,
-      );
+    if (url && there) window.location.assign(url);
+    else setProblem(answer.ok ? 'It is not written yet. Try again in a minute.' : answer.sentence);
   };
   return (
     <span className="grid gap-1">
