@@ -22,6 +22,8 @@ export interface NonconformanceListRow {
 export interface NonconformanceListFilter {
   projectId: string;
   statuses?: readonly NonconformanceStatus[];
+  /** Only those with a condition that is still to be verified. */
+  conditionsOpen?: boolean;
   cursor?: string | null;
   /** 1 to 200, 50 unless told. */
   limit?: number;
@@ -68,6 +70,7 @@ export async function readNonconformanceList(
       'p.title as pour_title',
       'p.planned_at',
     );
+  if (filter.conditionsOpen) void query.where('n.conditions_open', '>', 0);
   if (filter.statuses) void query.whereIn('n.status', filter.statuses);
   const after = filter.cursor ? readCursor(filter.cursor, listKey) : null;
   if (after) void query.where('n.seq', '<', after[0]);

@@ -18,22 +18,25 @@ import { LinkButton } from '@/components/ui/link-button';
 import { Select } from '@/components/ui/select';
 import { SheetFrame } from '@/components/ui/sheet-frame';
 import { Time } from '@/components/ui/time';
-import { readNonconformanceList } from '@/db/read/nonconformance-list';
+import { readNonconformanceList, type NonconformanceListFilter } from '@/db/read/nonconformance-list';
 import { readProjectsOfPerson } from '@/db/read/projects-of-person';
-import type { NonconformanceStatus } from '@/lib/inspection/sheet-types';
 import { withAccess } from '@/lib/server/with-access';
 
 export const metadata: Metadata = { title: 'Nonconformances' };
 
-const groups: Record<string, { label: string; statuses: NonconformanceStatus[] }> = {
-  open: { label: 'Not closed', statuses: ['open', 'decision-asked', 'corrected', 'rejected'] },
-  asked: { label: 'A decision is asked', statuses: ['decision-asked'] },
-  corrected: { label: 'Corrected, recheck awaited', statuses: ['corrected'] },
-  done: { label: 'Accepted or closed', statuses: ['accepted', 'closed'] },
-};
+const groups = {
+  open: { label: 'Not closed', filter: { statuses: ['open', 'decision-asked', 'corrected', 'rejected'] } },
+  asked: { label: 'A decision is asked', filter: { statuses: ['decision-asked'] } },
+  corrected: { label: 'Corrected, recheck awaited', filter: { statuses: ['corrected'] } },
+  conditions: { label: 'Conditions to be verified', filter: { conditionsOpen: true } },
+  done: { label: 'Accepted or closed', filter: { statuses: ['accepted', 'closed'] } },
+} as const satisfies Record<
+  string,
+  { label: string; filter: Pick<NonconformanceListFilter, 'statuses' | 'conditionsOpen'> }
+>;
 
 const listQuery = z.object({
-  show: z.enum(['open', 'asked', 'corrected', 'done']).optional().catch(undefined),
+  show: z.enum(['open', 'asked', 'corrected', 'conditions', 'done']).optional().catch(undefined),
   after: z.string().max(300).optional().catch(undefined),
 });
 
@@ -47,7 +50,7 @@ export default async function NonconformancesPage({ searchParams }: { searchPara
     require('nonconformances.list', project.id);
     const list = await readNonconformanceList(tx, {
       projectId: project.id,
-      statuses: query.show ? groups[query.show]?.statuses : undefined,
+      ...(query.show ? groups[query.show].filter : {}),
       cursor: query.after,
       limit: 100,
     });
