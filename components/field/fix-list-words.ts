@@ -10,10 +10,35 @@ interface Words {
   print: string;
   share: string;
   language: string;
+  pour: string;
+  element: string;
+  location: string;
   planned: string;
   drawing: string;
   afterwards: string;
   asTyped: string;
+  extent: string;
+  awaited: string;
+  waitsToBeSent: string;
+  noList: string;
+  fromLeftAndUp: (left: string, up: string) => string;
+  photo: string;
+  photoNotHere: string;
+  photoTake: string;
+  photoFromFiles: string;
+  photoKept: string;
+  photoOfIt: string;
+  photoBusy: string;
+  putRight: string;
+  tickSome: string;
+  askedToDecide: string;
+  whatWasDone: string;
+  writeSomething: string;
+  reportIt: string;
+  reported: string;
+  reportedThen: string;
+  back: string;
+  gone: string;
 }
 
 /** The fix list's own words; what people typed stays as they typed it. Spanish from memory of the trade. */
@@ -25,10 +50,35 @@ export const fixListWords: Record<FixLanguage, Words> = {
     print: 'Print',
     share: 'Share',
     language: 'English',
+    pour: 'Pour',
+    element: 'Element',
+    location: 'Location',
     planned: 'Planned',
     drawing: 'Drawing',
     afterwards: 'Report each with a photo. The inspector then looks again.',
     asTyped: '',
+    extent: 'Extent',
+    awaited: 'Reported, the inspector looks again',
+    waitsToBeSent: 'Reported. It is sent when there is a network.',
+    noList: 'The list is not on this device yet. It comes as soon as there is a network.',
+    fromLeftAndUp: (left, up) => `${left} from the left, ${up} up`,
+    photo: 'Photo',
+    photoNotHere: 'The photo is shown when there is a network.',
+    photoTake: 'Take the photo',
+    photoFromFiles: 'From files',
+    photoKept: 'Photo kept on this device.',
+    photoOfIt: 'A photo of it as it is now',
+    photoBusy: 'Making it smaller and keeping it',
+    putRight: 'What was put right',
+    tickSome: 'Tick what was put right.',
+    askedToDecide: 'the engineer is asked to decide on it',
+    whatWasDone: 'What was done',
+    writeSomething: 'Write what was done.',
+    reportIt: 'Report it',
+    reported: 'Reported',
+    reportedThen: 'The inspector looks again. Add a photo that shows it as it is now.',
+    back: 'To the list',
+    gone: 'This is not on the list any more.',
   },
   es: {
     heading: 'Lista de correcciones',
@@ -37,10 +87,35 @@ export const fixListWords: Record<FixLanguage, Words> = {
     print: 'Imprimir',
     share: 'Compartir',
     language: 'Español',
+    pour: 'Vaciado',
+    element: 'Elemento',
+    location: 'Lugar',
     planned: 'Previsto',
     drawing: 'Plano',
     afterwards: 'Avise de cada una con una foto. Después el inspector vuelve a revisar.',
     asTyped: 'Lo escrito por las personas queda en su idioma.',
+    extent: 'Alcance',
+    awaited: 'Avisado, el inspector vuelve a revisar',
+    waitsToBeSent: 'Avisado. Se envía cuando haya red.',
+    noList: 'La lista todavía no está en este dispositivo. Llega en cuanto haya red.',
+    fromLeftAndUp: (left, up) => `${left} desde la izquierda, ${up} hacia arriba`,
+    photo: 'Foto',
+    photoNotHere: 'La foto se muestra cuando haya red.',
+    photoTake: 'Tomar la foto',
+    photoFromFiles: 'De archivos',
+    photoKept: 'Foto guardada en este dispositivo.',
+    photoOfIt: 'Una foto de cómo está ahora',
+    photoBusy: 'Reduciendo y guardando la foto',
+    putRight: 'Qué se corrigió',
+    tickSome: 'Marque lo que se corrigió.',
+    askedToDecide: 'se pidió al ingeniero que decida',
+    whatWasDone: 'Qué se hizo',
+    writeSomething: 'Escriba qué se hizo.',
+    reportIt: 'Avisar',
+    reported: 'Avisado',
+    reportedThen: 'El inspector vuelve a revisar. Agregue una foto de cómo está ahora.',
+    back: 'A la lista',
+    gone: 'Esto ya no está en la lista.',
   },
 };
 
@@ -86,7 +161,12 @@ export function fixItemWords({ what }: FixItem, language: FixLanguage): { title:
         : english
           ? 'Nonconformance'
           : 'No conformidad';
-      return { title: `${head}: ${what.title}`, lines: [what.reason, what.extent].filter(Boolean) };
+      return {
+        title: `${head}: ${what.title}`,
+        lines: [what.reason, what.extent && `${fixListWords[language].extent}: ${what.extent}`].filter(
+          Boolean,
+        ),
+      };
     }
   }
 }

@@ -12,13 +12,13 @@ import { ReadingScreen } from './reading-screen';
 import { Screen } from './screen';
 import { SignInLink } from './sign-in-link';
 import { useOpenPour, useSnapshot } from './use-device';
-import { LeaveLink } from './leave-link';
 
 // What is not needed at once arrives in its own pieces; the worker keeps them all, so that they open without a network.
 const ChecksScreen = lazy(async () => ({ default: (await import('./checks-screen')).ChecksScreen }));
 const MeasurementsScreen = lazy(async () => ({
   default: (await import('./measurements-screen')).MeasurementsScreen,
 }));
+const CrewPour = lazy(async () => ({ default: (await import('./crew-pour')).CrewPour }));
 const FixListScreen = lazy(async () => ({ default: (await import('./fix-list-screen')).FixListScreen }));
 const HoldsScreen = lazy(async () => ({ default: (await import('./holds-screen')).HoldsScreen }));
 const PhotosScreen = lazy(async () => ({ default: (await import('./photos-screen')).PhotosScreen }));
@@ -79,17 +79,11 @@ export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute
       </Screen>
     );
   }
-  if (!open.sheet && open.project.role === 'crew') {
+  if (open.crew) {
     return (
-      <Message
-        title={open.pour.number}
-        heading="The fix list of this pour"
-        text="It opens where there is a network."
-      >
-        <LeaveLink href={`/pours/${encodeURIComponent(pourId)}`} className={buttonClasses('primary')}>
-          Open the fix list
-        </LeaveLink>
-      </Message>
+      <Suspense fallback={<Opening title={open.pour.number} />}>
+        <CrewPour open={open} crew={open.crew} route={route} />
+      </Suspense>
     );
   }
   if (!open.sheet) {

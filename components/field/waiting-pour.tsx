@@ -9,7 +9,8 @@ import { useOpenPour } from './use-device';
 /** What of one pour waits to be sent, entry by entry. */
 export function WaitingPour({ pour }: { pour: DevicePour }) {
   const open = useOpenPour(pour.id);
-  const waiting = open?.sheet?.entries.filter((entry) => entry.seq === null) ?? [];
+  const recorded = open?.sheet?.entries ?? open?.crew?.own ?? [];
+  const waiting = recorded.filter((entry) => entry.seq === null);
   return (
     <li className="border-b border-rule px-3">
       <Disclosure summary={`${pour.number} ${pour.title}: ${pour.notSent} not sent`}>

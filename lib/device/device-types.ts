@@ -117,6 +117,8 @@ export interface OpenPour {
 export interface CrewPour {
   /** Null until it was fetched. */
   list: CrewList | null;
+  /** Highest `seq` that the list rests on. */
+  headSeq: number;
   own: Entry[];
 }
 

@@ -5,7 +5,13 @@ import { pourOf, projectOf } from './snapshot-of';
 
 /** What of an opened pour is compared by its content. */
 const restOf = ({ pour, project, crew }: OpenPour): string =>
-  JSON.stringify([pour, project, crew?.list?.digest, crew?.own.map((one) => [one.id, one.seq])]);
+  JSON.stringify([
+    pour,
+    project,
+    crew?.list?.digest,
+    crew?.headSeq,
+    crew?.own.map((one) => [one.id, one.seq]),
+  ]);
 
 function crewPourOf(work: PersonWork, pourId: string): CrewPour {
   const own = work.memory
@@ -14,7 +20,7 @@ function crewPourOf(work: PersonWork, pourId: string): CrewPour {
     .map(readEntry)
     .flatMap((read) => (read.kind === 'known' ? [read.entry] : []))
     .sort((a, b) => a.deviceSeq - b.deviceSeq);
-  return { list: work.crewLists.get(pourId) ?? null, own };
+  return { list: work.crewLists.get(pourId) ?? null, headSeq: work.memory.headOf(pourId) ?? 0, own };
 }
 
 /** The pours that screens look at: the same object as long as nothing in it changed. */

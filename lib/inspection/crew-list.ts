@@ -10,6 +10,7 @@ export function crewListOf(sheet: Sheet, holds: readonly Hold[]): Omit<CrewList,
   const { plan } = sheet;
   return {
     planRevision: plan.revision,
+    units: plan.units,
     drawings: [...new Set(plan.elements.map(({ drawing }) => `${drawing.number} rev ${drawing.revision}`))],
     items: fixList(sheet, holds),
     awaited: holds.filter((hold) => hold.kind === 'recheck-awaited').map(({ id, where }) => ({ id, where })),

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { siteBodies, subjectRef } from './entry-bodies';
 import { opening, recess } from './plan';
-import { digest, millimetres, planKey, positiveMillimetres, recordId } from './primitives';
+import { digest, lengthUnit, millimetres, planKey, positiveMillimetres, recordId } from './primitives';
 
 const found = z.object({ label: z.string(), value: z.string() });
 
@@ -69,6 +69,7 @@ export const crewList = z.object({
   /** Tells a list that a device holds already. */
   digest,
   planRevision: z.number().int().positive(),
+  units: lengthUnit,
   drawings: z.array(z.string()),
   items: z.array(fixItem),
   /** Reported as put right, and to be looked at again by the inspector. */

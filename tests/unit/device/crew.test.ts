@@ -25,6 +25,7 @@ const point = { kind: 'point' as const, id: 'soffit.A1' };
 const list = (digest: string, part: Partial<CrewList> = {}): CrewList => ({
   digest: digest.repeat(64),
   planRevision: 1,
+  units: 'mm',
   drawings: ['FL-S-201 rev B'],
   items: [
     {
