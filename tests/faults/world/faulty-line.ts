@@ -12,7 +12,8 @@ const html = (status: number) =>
     headers: { 'content-type': 'text/html' },
   });
 
-const faults = [
+/** What may happen to a request, and how often where a seed decides. */
+export const faults = [
   [30, 'delivered'],
   [8, 'request lost'],
   [10, 'reply lost'],
