@@ -48,17 +48,18 @@ export function CalculationField({ name, field, draft, problem }: FieldProps<Fie
     );
   }
   const unit = unitOf(field, draft);
+  const optional = mayBeEmpty(field, draft);
   return (
     <TextInput
       label={field.label}
       hint={field.hint}
       error={problem}
-      optional={mayBeEmpty(field, draft)}
+      optional={optional}
       unit={unit}
       figure
       autoComplete="off"
       spellCheck={false}
-      fieldClassName={field.wide ? 'col-span-2' : undefined}
+      fieldClassName={field.wide ? 'col-span-2' : optional ? 'col-span-2 sm:col-span-1' : undefined}
       className={classNames(clear, roomFor(unit))}
       {...register(name)}
     />

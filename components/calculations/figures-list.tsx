@@ -9,13 +9,13 @@ export function FiguresList({ figures }: { figures: readonly Figure[] }) {
       {figures.map((figure) => (
         <div
           key={figure.id}
-          data-figure={figure.id}
-          className="grid grid-cols-[minmax(0,3fr)_minmax(0,2fr)] sm:grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-4 border-b border-rule py-1.5 print:py-0.5"
+          className="grid grid-cols-[minmax(0,1fr)_auto] items-baseline gap-x-4 border-b border-rule py-1.5 print:py-0.5"
         >
           <dt className={figure.main ? 'font-label text-lead font-semibold' : undefined}>{figure.label}</dt>
           <dd
             className={classNames(
               'text-right sm:max-w-[22rem]',
+              figure.main ? 'whitespace-nowrap' : 'max-w-[9.5rem]',
               figure.words ? 'font-label font-semibold' : 'font-figure font-medium',
               figure.main && 'text-heading',
             )}

@@ -6,6 +6,7 @@ import type { FieldGroup } from './calculation';
 import { CalculationField } from './calculation-field';
 import { isShown, unitsOf, type Draft, type FieldSet } from './field-spec';
 import { switchUnits } from './switch-units';
+import { origin, useInBrowser } from './use-in-browser';
 
 /** The inputs, by groups; a group that the choices made ask nothing of is not there. */
 export function InputsForm<Fields extends FieldSet>({
@@ -19,6 +20,7 @@ export function InputsForm<Fields extends FieldSet>({
   draft: Draft;
   problems: Record<string, string>;
 }) {
+  const ready = useInBrowser(origin);
   const shownGroups = groups.flatMap((group) => {
     const shown = group.names.flatMap((name) => {
       const field = fields[name];
@@ -27,20 +29,23 @@ export function InputsForm<Fields extends FieldSet>({
     return shown.length > 0 ? [{ legend: group.legend, shown }] : [];
   });
   return (
-    <form onSubmit={(event) => event.preventDefault()} noValidate className="grid gap-5 print:hidden">
-      <UnitsSwitch fields={fields} draft={draft} />
-      {shownGroups.map((group) => (
-        <fieldset key={group.legend} className="min-w-0">
-          <legend className="mb-1.5 w-full border-b border-rule pb-0.5 font-label text-body font-semibold">
-            {group.legend}
-          </legend>
-          <div className="grid grid-cols-2 gap-x-3 gap-y-2.5">
-            {group.shown.map(({ name, field }) => (
-              <CalculationField key={name} {...{ name, field, draft }} problem={problems[name]} />
-            ))}
-          </div>
-        </fieldset>
-      ))}
+    <form onSubmit={(event) => event.preventDefault()} noValidate className="print:hidden">
+      {/* What is typed before the page answers would be lost: until then nothing can be typed. */}
+      <fieldset disabled={ready === ''} className="grid min-w-0 gap-5">
+        <UnitsSwitch fields={fields} draft={draft} />
+        {shownGroups.map((group) => (
+          <fieldset key={group.legend} className="min-w-0">
+            <legend className="mb-1.5 w-full border-b border-rule pb-0.5 font-label text-body font-semibold">
+              {group.legend}
+            </legend>
+            <div className="grid grid-cols-2 gap-x-3 gap-y-2.5">
+              {group.shown.map(({ name, field }) => (
+                <CalculationField key={name} {...{ name, field, draft }} problem={problems[name]} />
+              ))}
+            </div>
+          </fieldset>
+        ))}
+      </fieldset>
     </form>
   );
 }

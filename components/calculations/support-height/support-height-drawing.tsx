@@ -59,7 +59,7 @@ export function SupportHeightDrawing({ scene }: { scene: SupportScene }) {
   const foot = top + tall;
   return (
     <svg
-      viewBox={`0 0 430 ${foot + 26}`}
+      viewBox={`0 0 440 ${foot + 26}`}
       role="img"
       aria-label={`Section of ${say(thicknessMm)}, from the top: ${parts.map((part) => `${part.name} ${say(part.sizeMm)}`).join(', ')}.`}
       className="block w-full max-w-[34rem]"
@@ -96,7 +96,7 @@ export function SupportHeightDrawing({ scene }: { scene: SupportScene }) {
               x={left + wide + 25}
               y={(labels[index] ?? 0) + 4}
               className="font-label"
-              fontSize="13"
+              fontSize="14"
               fontWeight={part.kind === 'support' ? 700 : 500}
               fill="var(--ink)"
             >
