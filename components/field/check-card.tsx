@@ -8,12 +8,15 @@ import { Textarea } from '@/components/ui/textarea';
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { toneText, type Tone } from '@/components/ui/tone';
 import { mayRecord } from '@/lib/inspection/entry-access';
+import { judgedCheck } from '@/lib/inspection/judged-words';
 import { roleWords } from '@/lib/inspection/roles';
 import type { CheckState } from '@/lib/inspection/sheet-types';
+import { Disclosure } from './disclosure';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
 import { FormProblem } from './form-problem';
+import { JudgedBody } from './judged-body';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { answerWords } from './state-tone';
 import { useRecord } from './use-record';
@@ -91,6 +94,11 @@ export function CheckCard({ open, check }: { open: OpenSheet; check: CheckState 
               </span>
             </span>
           </p>
+        )}
+        {governing && (
+          <Disclosure summary="How was this judged?">
+            <JudgedBody judged={judgedCheck(check)} />
+          </Disclosure>
         )}
         {photoMissing && (
           <p className="font-label text-label font-semibold text-watch">

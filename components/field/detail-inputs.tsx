@@ -64,11 +64,12 @@ export function StarterInput({ measure, unit, onChange }: Props<'starter'> & { u
 /** A coupler: what it says on it, both bars in to their marks, and threads left in sight. */
 export function CouplerInput({ item, measure, onChange }: Props<'coupler'> & { item: MeasurementItem }) {
   const choices = choicesOf(marksWords, ['both-in', 'one-short', 'not-marked']);
-  const counted = item.against?.by === 'coupler' && item.against.mostThreads !== null;
+  const planned = item.against?.by === 'coupler' ? item.against : null;
   return (
     <div className="grid gap-3">
       <TextInput
         label="Type on the coupler"
+        hint={planned ? `Planned: ${planned.type}.` : undefined}
         maxLength={60}
         value={measure.type}
         onChange={(event) => onChange({ ...measure, type: event.target.value })}
@@ -81,7 +82,7 @@ export function CouplerInput({ item, measure, onChange }: Props<'coupler'> & { i
           onChange({ ...measure, marks: choices.find((one) => one.value === value)?.value ?? '' })
         }
       />
-      {counted && (
+      {planned?.mostThreads != null && (
         <TextInput
           label="Threads in sight"
           figure

@@ -4,6 +4,7 @@ import { classNames } from '@/components/ui/class-names';
 import { isAmendable } from '@/lib/inspection/amendments';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { Entry } from '@/lib/inspection/entry';
+import { judgedCheck, judgedMeasurement, type JudgedWords } from '@/lib/inspection/judged-words';
 import { roleWords } from '@/lib/inspection/roles';
 import { AmendForm } from './amend-form';
 import { amendmentsOf, currentBody } from './current-body';
@@ -11,6 +12,7 @@ import { EntryNotHere } from './entry-not-here';
 import { entryTitle } from './entry-title';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
+import { JudgedBody } from './judged-body';
 import { JudgedPanel } from './judged-panel';
 import { LiftHold } from './lift-hold';
 import { nameOf, type OpenSheet } from './open-sheet';
@@ -36,6 +38,20 @@ function backOf(open: OpenSheet, entry: Entry) {
   }
 }
 
+/** How a measured place or a check was judged, where this entry is one. */
+function judgedOf({ sheet }: OpenSheet, entry: Entry): JudgedWords | null {
+  if (entry.type === 'measurement') {
+    const state = sheet.measurements.find((one) => one.item.id === entry.body.itemId);
+    const place = state?.places.find((one) => one.entry.id === entry.id);
+    return state && place?.current ? judgedMeasurement(state.item, place, sheet.plan.units) : null;
+  }
+  if (entry.type === 'answer') {
+    const check = sheet.checks.find((one) => one.item.id === entry.body.checkId);
+    return check ? judgedCheck(check) : null;
+  }
+  return null;
+}
+
 /** One entry of the record: what it says, what has been said of it since, and what you may do about it. */
 export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: string }) {
   const { sheet, project, person } = open;
@@ -51,6 +67,7 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
   const current = currentBody(sheet, entry);
   const withdrawn = current === null;
   const found = entry.type === 'reading' ? findReading(open, entry.id) : null;
+  const judged = judgedOf(open, entry);
   const own = entry.authorId === person.id;
   return (
     <Screen title="Entry" aside={open.pour.number} back={backOf(open, entry)} form>
@@ -90,6 +107,12 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
                 null
               }
             />
+          </section>
+        )}
+        {judged && (
+          <section className="border border-ink bg-sheet p-3">
+            <h2 className="mb-2 text-heading">How was this judged?</h2>
+            <JudgedBody judged={judged} />
           </section>
         )}
         {entry.type === 'hold' && <LiftHold open={open} hold={entry} />}

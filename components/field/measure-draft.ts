@@ -27,8 +27,8 @@ export type Measure =
   | {
       quantity: 'height';
       presses: readonly Press[];
-      from: Value<'height'>['from'];
-      to: Value<'height'>['to'];
+      from: Value<'height'>['from'] | '';
+      to: Value<'height'>['to'] | '';
     }
   | { quantity: 'ticket'; ticket: string; fibreType: string; dosage: string };
 
@@ -51,16 +51,13 @@ export function emptyMeasure(item: MeasurementItem): Measure {
       return { quantity: 'part', count: '', of: '' };
     case 'starter':
       return { quantity: 'starter', presses: [], pulled: '' };
-    case 'coupler': {
-      const type = item.against?.by === 'coupler' ? item.against.type : '';
-      return { quantity: 'coupler', type, marks: '', threads: '' };
-    }
+    case 'coupler':
+      // Nothing is filled in that somebody has to look at.
+      return { quantity: 'coupler', type: '', marks: '', threads: '' };
     case 'damage':
       return emptyDamage();
-    case 'height': {
-      const datum = item.against?.by === 'datum' ? item.against : ({ from: 'soffit', to: 'centre' } as const);
-      return { quantity: 'height', presses: [], from: datum.from, to: datum.to };
-    }
+    case 'height':
+      return { quantity: 'height', presses: [], from: '', to: '' };
     case 'ticket':
       return { quantity: 'ticket', ticket: '', fibreType: '', dosage: '' };
   }
@@ -110,8 +107,10 @@ export function measuredValue(measure: Measure, unit: LengthUnit): ReadMeasure {
     case 'damage':
       return readDamage(measure, unit);
     case 'height': {
-      const read = readPresses(measure.presses, unit);
       const { from, to } = measure;
+      if (from === '' || to === '')
+        return refuse('Say where it was taken from, and to which part of the tendon.');
+      const read = readPresses(measure.presses, unit);
       return read.ok ? { ok: true, value: { quantity: 'height', length: read.value, from, to } } : read;
     }
     case 'ticket':

@@ -1,35 +1,32 @@
 'use client';
 
-import type { Plan } from '@/lib/inspection/plan';
-
-const provenance = {
-  contract: 'contract documents',
-  seen: 'text seen',
-  'partly-seen': 'text partly seen',
-  memory: 'from memory',
-  computed: 'computed',
-  'common-practice': 'common practice',
-} as const;
-
-type Step = Plan['measurements'][number]['trail'][number];
+import { ToneGlyph } from '@/components/ui/tone-glyph';
+import { needsEditionCheck, stepSource } from '@/lib/concrete/trail';
+import type { TrailStep } from '@/lib/inspection/trail-step';
 
 /** How a limit came about, step by step: rule, clause, edition, number, and where it comes from. */
-export function RequirementTrail({ trail }: { trail: readonly Step[] }) {
+export function RequirementTrail({ trail }: { trail: readonly TrailStep[] }) {
   if (trail.length === 0) return <p className="text-pencil">The plan gives no steps for this limit.</p>;
   return (
-    <ol className="border-y border-rule">
-      {trail.map((step, index) => (
-        <li
-          key={index}
-          className="grid grid-cols-[1fr_auto] gap-x-3 border-b border-rule py-2 last:border-b-0"
-        >
-          <span className="font-label font-semibold">{step.rule}</span>
-          <span className="text-right font-figure font-medium">{step.value}</span>
-          <span className="col-span-2 text-label text-pencil">
-            {[step.clause, step.edition, provenance[step.provenance], step.note].filter(Boolean).join(' · ')}
-          </span>
-        </li>
-      ))}
-    </ol>
+    <>
+      <ol className="border-y border-rule">
+        {trail.map((step, index) => (
+          <li
+            key={index}
+            className="flex flex-wrap items-baseline justify-between gap-x-3 border-b border-rule py-2 last:border-b-0"
+          >
+            <span className="min-w-0 flex-1 basis-48 font-label font-semibold">{step.rule}</span>
+            <span className="ml-auto min-w-0 text-right font-figure font-medium">{step.value}</span>
+            <span className="w-full text-label text-pencil">{stepSource(step)}</span>
+          </li>
+        ))}
+      </ol>
+      {needsEditionCheck(trail) && (
+        <p className="flex items-baseline gap-1.5 font-label text-label font-semibold text-watch">
+          <ToneGlyph tone="watch" className="shrink-0 translate-y-0.5" />
+          Verify against your edition: steps marked as from memory.
+        </p>
+      )}
+    </>
   );
 }

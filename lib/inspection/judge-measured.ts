@@ -118,9 +118,11 @@ function judgeCount({ least, most }: MeasurementItem, count: number): Judged {
 }
 
 /** Compared as whole ties, so that no rounding of a percentage decides. */
-function judgeTied(item: MeasurementItem, { of, tied, onPerimeter }: Of<'share'>): Judged {
+function judgeTied(item: MeasurementItem, { of, tied, onPerimeter, atEdge }: Of<'share'>): Judged {
   const apart = item.against?.by === 'tie-pattern' && item.against.perimeterApart;
   if (!apart && item.least === null) return notVerified('The plan sets no limit for this.');
+  if (apart && (atEdge === undefined || (atEdge && onPerimeter === undefined)))
+    return notVerified('Say how many of its crossings lie on the mat’s outermost rows.');
   const needed = apart
     ? requiredTies({
         pattern: { kind: 'perimeter-every' },

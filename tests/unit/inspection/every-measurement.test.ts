@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { BodyOf } from '@/lib/inspection/entry';
 import { siteBodies } from '@/lib/inspection/entry-bodies';
 import { holds } from '@/lib/inspection/holds';
+import { judgeMeasured } from '@/lib/inspection/judge-measured';
 import { measuredText } from '@/lib/inspection/measured-words';
 import { measuredValue, type MeasuredValue } from '@/lib/inspection/measured-value';
 import { measurementKinds, quantities } from '@/lib/inspection/measurement-kind';
@@ -416,6 +417,8 @@ describe('measurements with more to them', () => {
       return foldSheet(plan, story.recorded).measurements[0]?.governing[0]?.verdict;
     };
     expect([27, 28].map(verdict)).toEqual(['not-met', 'met']);
+    const unsaid = judgeMeasured(item, { quantity: 'share', of: 49, tied: 49, atEdge: true }, plan);
+    expect(unsaid.verdict).toBe('not-verified');
   });
 
   it('coating damage over its limit is the engineer’s, and under it the superintendent’s', () => {
