@@ -7,7 +7,7 @@ import { Notice } from '@/components/ui/notice';
 import { Spinner } from '@/components/ui/spinner';
 import type { OpenPour } from '@/lib/device/device-types';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import { fixListWords, type FixLanguage } from './fix-list-words';
 import { useDevice } from './use-device';
 

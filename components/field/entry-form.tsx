@@ -2,7 +2,7 @@
 
 import { useState, type ReactNode } from 'react';
 import { Button } from '@/components/ui/button';
-import type { Problems } from './body-problems';
+import type { Problems } from './problems-of';
 import { FormProblem } from './form-problem';
 
 /** The frame of a small form: its problem, its button, and a word once it is kept. */

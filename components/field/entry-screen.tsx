@@ -18,6 +18,7 @@ import { LiftHold } from './lift-hold';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { QueryParts } from './query-parts';
 import { Screen } from './screen';
+import { clockOff } from './sync-words';
 import { findReading } from './use-keep-reading';
 
 function backOf(open: OpenSheet, entry: Entry) {
@@ -69,6 +70,7 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
   const found = entry.type === 'reading' ? findReading(open, entry.id) : null;
   const judged = judgedOf(open, entry);
   const own = entry.authorId === person.id;
+  const clock = clockOff(entry.clockOffsetMs);
   return (
     <Screen title="Entry" aside={open.pour.number} back={backOf(open, entry)} form>
       <div className="grid gap-5">
@@ -81,6 +83,11 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
             {dayAndTime(entry.recordedAt, project.timeZone)}
             {entry.seq === null ? ' · not sent yet' : ` · entry ${entry.seq}`}
           </p>
+          {clock && (
+            <p className="font-label text-label font-semibold text-watch">
+              Recorded while the device&apos;s clock was {clock}: its times are doubtful, its order is not.
+            </p>
+          )}
           {amendments.map((amendment) => {
             const applied = found?.reading.amendments.find((one) => one.entry.id === amendment.id);
             return (

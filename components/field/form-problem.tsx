@@ -1,7 +1,7 @@
 'use client';
 
 import { Notice } from '@/components/ui/notice';
-import type { Problems } from './body-problems';
+import type { Problems } from './problems-of';
 
 /** What is wrong with a form as a whole: problems that belong to none of the fields shown. */
 export function FormProblem({ problems, shown }: { problems: Problems; shown: readonly string[] }) {

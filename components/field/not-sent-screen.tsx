@@ -6,7 +6,7 @@ import { buttonClasses } from '@/components/ui/button-classes';
 import { EmptyState } from '@/components/ui/empty-state';
 import { Notice } from '@/components/ui/notice';
 import { Spinner } from '@/components/ui/spinner';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { timeAway } from './field-time';

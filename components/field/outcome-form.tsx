@@ -3,7 +3,7 @@
 import { useState, type ReactNode } from 'react';
 import { Button } from '@/components/ui/button';
 import { Textarea } from '@/components/ui/textarea';
-import type { Problems } from './body-problems';
+import type { Problems } from './problems-of';
 import { ChoiceList } from './choice-list';
 import { FormProblem } from './form-problem';
 

@@ -6,7 +6,7 @@ import { buttonClasses } from '@/components/ui/button-classes';
 import { classNames } from '@/components/ui/class-names';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
 import type { PersonOnDevice } from '@/lib/device/device-types';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import { PinPad } from './pin-pad';
 import { Screen } from './screen';
 import { SignInLink } from './sign-in-link';

@@ -9,7 +9,7 @@ import { Spinner } from '@/components/ui/spinner';
 import { TextInput } from '@/components/ui/text-input';
 import type { BodyOf } from '@/lib/inspection/entry';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import type { OpenSheet } from './open-sheet';
 import { PhotoOverlay } from './photo-overlay';
 import { subjectChoices, subjectValue, subjectWords } from './subject-words';

@@ -5,7 +5,7 @@ import { Button } from '@/components/ui/button';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { Notice } from '@/components/ui/notice';
 import { pinProblem } from '@/lib/device/people/pin-guard';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { PinPad } from './pin-pad';

@@ -2,7 +2,7 @@
 
 import { SheetFrame } from '@/components/ui/sheet-frame';
 import { TitleBlock } from '@/components/ui/title-block';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { pourStateWords } from '@/lib/inspection/pour-state';
 import { fieldPaths } from './field-routes';
 import { dayAndTime, timeAway } from './field-time';

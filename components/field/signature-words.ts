@@ -1,7 +1,7 @@
 import type { DevicePour } from '@/lib/device/device-types';
 import { holdsInScope } from '@/lib/inspection/holds';
 import { placesMeasured } from '@/lib/inspection/judge-measurements';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { roleWords } from '@/lib/inspection/roles';
 import type { Hold, Sheet } from '@/lib/inspection/sheet-types';
 

@@ -37,8 +37,8 @@ export function notSentWords(sync: SyncState): string {
 
 export const DOUBTFUL_CLOCK_MINUTES = 5;
 
-/** Says by how much this device's clock is off, where that is more than five minutes; null otherwise. */
-export function clockWords(offsetMs: number | null): string | null {
+/** "23 minutes slow": by how much a device's clock was off, where that is more than five minutes; null otherwise. */
+export function clockOff(offsetMs: number | null): string | null {
   if (offsetMs === null) return null;
   const minutes = Math.round(Math.abs(offsetMs) / 60_000);
   if (minutes <= DOUBTFUL_CLOCK_MINUTES) return null;
@@ -48,8 +48,16 @@ export function clockWords(offsetMs: number | null): string | null {
       : minutes < 2880
         ? `${Math.round(minutes / 60)} hours`
         : `${Math.round(minutes / 1440)} days`;
-  const side = offsetMs > 0 ? 'slow' : 'fast';
-  return `This device's clock is ${size} ${side}. Your entries keep their order and are marked. Set the clock when you can.`;
+  return `${size} ${offsetMs > 0 ? 'slow' : 'fast'}`;
+}
+
+/** Says that this device's clock is off, and what follows from it; null where it is right or nothing is known. */
+export function clockWords(offsetMs: number | null): string | null {
+  const off = clockOff(offsetMs);
+  return (
+    off &&
+    `This device's clock is ${off}. Your entries keep their order and are marked. Set the clock when you can.`
+  );
 }
 
 /** Bytes as people read them: 3.2 MB. */

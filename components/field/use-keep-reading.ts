@@ -3,7 +3,7 @@
 import { useEffect, useState } from 'react';
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import type { PointState, ReadingState } from '@/lib/inspection/sheet-types';
-import { problemsOf } from './body-problems';
+import { problemsOf } from './problems-of';
 import type { OpenSheet } from './open-sheet';
 import { signalVerdict } from './signal-verdict';
 import { useDevice } from './use-device';

@@ -3,7 +3,8 @@
 import { useCallback, useState } from 'react';
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import type { DeviceEntryType, OpenPour } from '@/lib/device/device-types';
-import { bodyProblems, problemsOf, type Problems } from './body-problems';
+import { bodyProblems } from './body-problems';
+import { problemsOf, type Problems } from './problems-of';
 import { useDevice } from './use-device';
 import { forgetAsked } from './use-refused-again';
 

@@ -1,7 +1,8 @@
 import type { z } from 'zod';
 import { uploadPhoto } from '@/lib/device/photos/upload-photo';
 import { batchesOf, type UnsentFile } from '@/lib/device/unsent-file';
-import { PROTOCOL, pushResponse } from '@/lib/inspection/wire';
+import { PROTOCOL } from '@/lib/inspection/protocol';
+import { pushResponse } from '@/lib/inspection/wire';
 import { postJson } from './post-json';
 
 type Photo = UnsentFile['photos'][number];

@@ -1,5 +1,6 @@
 import { formatLength } from '@/lib/concrete/length';
-import { revisionLetter, type Plan } from '@/lib/inspection/plan';
+import type { Plan } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { personName } from './entry-words';
 import { Fold } from './fold';
 import type { OfficeViewer } from './office-viewer';

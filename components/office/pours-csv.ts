@@ -1,4 +1,4 @@
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { pourStateWords } from '@/lib/inspection/pour-state';
 import { roleWords, roles } from '@/lib/inspection/roles';
 import { csvText } from './csv-text';

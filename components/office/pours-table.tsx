@@ -3,7 +3,7 @@ import { MarkIcon } from '@/components/drawings/mark';
 import { EmptyState } from '@/components/ui/empty-state';
 import { LinkButton } from '@/components/ui/link-button';
 import { Time } from '@/components/ui/time';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { pourStateWords } from '@/lib/inspection/pour-state';
 import type { Role } from '@/lib/inspection/roles';
 import type { PourState } from '@/lib/inspection/sheet-types';

@@ -1,6 +1,7 @@
 import { v7 as uuid } from 'uuid';
 import { ENTRY_VERSION } from '@/lib/inspection/entry';
-import { pushResponse, PROTOCOL } from '@/lib/inspection/wire';
+import { PROTOCOL } from '@/lib/inspection/protocol';
+import { pushResponse } from '@/lib/inspection/wire';
 import { postJson, type Posted } from './post-json';
 
 const DEVICE_KEY = 'cagewright.office-device';

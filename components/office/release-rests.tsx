@@ -1,5 +1,5 @@
 import type { Sheet } from '@/lib/inspection/sheet-types';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { personName } from './entry-words';
 import type { OfficeViewer } from './office-viewer';
 import { fullTime } from './project-time';

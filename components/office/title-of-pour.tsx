@@ -1,5 +1,6 @@
 import { TitleBlock } from '@/components/ui/title-block';
-import { revisionLetter, type Plan } from '@/lib/inspection/plan';
+import type { Plan } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { pourStateWords } from '@/lib/inspection/pour-state';
 import type { PourState } from '@/lib/inspection/sheet-types';
 import { dayAndTime } from './project-time';

@@ -1,7 +1,5 @@
 import { v7 as newId } from 'uuid';
 import type { DeviceEnvironment, TabChannel } from './device-environment';
-import { browserPhotoTools } from './photos/browser-photo-tools';
-import { preparePhoto } from './photos/prepare-photo';
 import { watchUpdates } from './register-worker';
 
 const FOUR_HUNDRED_DAYS_S = 400 * 86_400;
@@ -37,7 +35,13 @@ export function browserEnvironment(): DeviceEnvironment {
     inSight: () => document.visibilityState === 'visible',
     storage: { estimate, keep: async () => void (await navigator.storage?.persist?.()) },
     askForBackgroundSync: () => void askForBackgroundSync().catch(() => undefined),
-    preparePhoto: (file) => preparePhoto(file, browserPhotoTools),
+    preparePhoto: async (file) => {
+      const [{ preparePhoto }, { browserPhotoTools }] = await Promise.all([
+        import('./photos/prepare-photo'),
+        import('./photos/browser-photo-tools'),
+      ]);
+      return preparePhoto(file, browserPhotoTools);
+    },
     photoUrl: (bytes, contentType) => URL.createObjectURL(new Blob([bytes], { type: contentType })),
     updates: 'serviceWorker' in navigator ? watchUpdates() : null,
   };

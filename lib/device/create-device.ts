@@ -1,11 +1,9 @@
-import { z } from 'zod';
-import { readEntry, type Entry } from '@/lib/inspection/entry';
+import type { Entry } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
-import { deviceIndex } from '@/lib/inspection/wire';
 import { browserEnvironment } from './browser-environment';
 import type { DeviceEnvironment } from './device-environment';
 import { DeviceError, type Device, type DeviceSnapshot, type StoreState } from './device-types';
-import { exportUnsent } from './export-unsent';
+import { loadSchemas } from './load-schemas';
 import { OpenedPours } from './opened-pours';
 import { DeviceHolder } from './people/device-holder';
 import type { PersonWork } from './person-work';
@@ -23,7 +21,6 @@ export interface RunningDevice extends Device {
   close(): Promise<void>;
 }
 
-const anything = z.object({}).loose();
 /** Whoever has just signed in is told by the server; so long is waited before the device asks who is holding it. */
 const ASK_AFTER_MS = 1_500;
 
@@ -133,7 +130,10 @@ class FieldDevice {
         await this.#lane.run();
         await this.#photoLane.run();
       },
-      exportUnsent: async () => exportUnsent(await this.#openWork(), this.env.now()),
+      exportUnsent: async () => {
+        const [{ exportUnsent }, work] = await Promise.all([import('./export-unsent'), this.#openWork()]);
+        return exportUnsent(work, this.env.now());
+      },
       confirmSignature: (signatureId, password) => this.#confirm(signatureId, password),
       refreshPerson: async () => {
         await this.#ready;
@@ -200,7 +200,7 @@ class FieldDevice {
     const answer = await askServer(
       this.env,
       { method: 'GET', path: '/api/sync/index', timeoutMs: 10_000 },
-      deviceIndex,
+      'deviceIndex',
     );
     if (this.#closed) return;
     if (answer.kind === 'answered') {
@@ -273,7 +273,7 @@ class FieldDevice {
     if (keep) void this.#lane.run();
   }
 
-  #recorded(recorded: RecordedEntry): Entry {
+  async #recorded(recorded: RecordedEntry): Promise<Entry> {
     if (!this.#askedToKeep) {
       this.#askedToKeep = true;
       void this.env.storage.keep().then(
@@ -281,6 +281,7 @@ class FieldDevice {
         () => undefined,
       );
     }
+    const { readEntry } = await loadSchemas();
     const read = readEntry(recorded);
     if (read.kind !== 'known') throw new Error(`An entry of type ${recorded.type} cannot be read back.`);
     return read.entry;
@@ -299,7 +300,7 @@ class FieldDevice {
     const answer = await askServer(
       this.env,
       { method: 'POST', path: `/api/signatures/${signatureId}/confirm`, json: { password } },
-      anything,
+      'done',
     );
     if (answer.kind === 'trouble') return { ok: false, sentence: answer.sentence };
     await this.#lane.run();

@@ -1,4 +1,3 @@
-import { readEntry } from '@/lib/inspection/entry';
 import type { CrewPour, OpenPour } from './device-types';
 import type { PersonWork } from './person-work';
 import { pourOf, projectOf } from './snapshot-of';
@@ -17,8 +16,10 @@ function crewPourOf(work: PersonWork, pourId: string): CrewPour {
   const own = work.memory
     .entriesOf(pourId)
     .filter((entry) => entry.authorId === work.person.id)
-    .map(readEntry)
-    .flatMap((read) => (read.kind === 'known' ? [read.entry] : []))
+    .flatMap((entry) => {
+      const read = work.reader?.(entry);
+      return read?.kind === 'known' ? [read.entry] : [];
+    })
     .sort((a, b) => a.deviceSeq - b.deviceSeq);
   return { list: work.crewLists.get(pourId) ?? null, headSeq: work.memory.headOf(pourId) ?? 0, own };
 }

@@ -4,7 +4,9 @@ import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { DeviceIndex, PushOutcome } from '@/lib/inspection/wire';
 import type { DeviceEnvironment, TabChannel, TabMessage } from './device-environment';
 import { DeviceError, type DeviceEntryType, type DevicePerson } from './device-types';
-import { checkedBody, entryToRecord, type EntryPlace } from './entry-to-record';
+import type { EntryPlace } from './entry-to-record';
+import { loadSchemas } from './load-schemas';
+import type { RecordSchemas } from './record-schemas';
 import { LossWatch } from './loss-watch';
 import { SheetMemory } from './sheet-memory';
 import { forgetPour } from './store/forget-pour';
@@ -53,6 +55,8 @@ export class PersonWork {
   /** Revision of the plan kept here, by pour. */
   readonly planRevisions = new Map<string, number>();
   readonly loss: LossWatch;
+  /** Reads an entry by its schemas; null until they were wanted first. */
+  reader: RecordSchemas['readEntry'] | null = null;
   readonly #opening = new Map<string, Promise<void>>();
   readonly #channel: TabChannel;
   #closed = false;
@@ -119,6 +123,28 @@ export class PersonWork {
     this.planRevisions.clear();
     for (const cursor of cursors) this.planRevisions.set(cursor.stream, cursor.planRevision);
     await this.loss.read();
+    this.#readRefused();
+  }
+
+  /** @throws DeviceError where that piece of the program is not on this device */
+  async #schemas(): Promise<RecordSchemas> {
+    const schemas = await loadSchemas().catch(() => {
+      throw new DeviceError(
+        'store-failed',
+        'A piece of Cagewright is not on this device yet. Load this page again once there is a network.',
+      );
+    });
+    this.reader = schemas.readEntry;
+    return schemas;
+  }
+
+  /** What was refused is shown as entries, and those are read by their schemas. */
+  #readRefused(): void {
+    if (this.refused.size === 0 || this.reader) return;
+    void this.#schemas().then(
+      () => this.changed(false),
+      () => undefined,
+    );
   }
 
   /** How much waits here, and how old it is: what others on this device are told. */
@@ -204,6 +230,7 @@ export class PersonWork {
     const opening = (async () => {
       const [{ sheetEngine }] = await Promise.all([
         import('./sheet-engine'),
+        this.#schemas(),
         this.#loadStream(pourId),
         this.#loadStream(projectStream(projectId)),
       ]);
@@ -238,6 +265,7 @@ export class PersonWork {
     body: BodyOf<T>,
     photo?: PhotoToStore,
   ): Promise<RecordedEntry> {
+    const { checkedBody, entryToRecord } = await this.#schemas();
     const checked = checkedBody(type, body);
     const stream = streamOf(place);
     if (place.pourId !== null) await this.openPour(place.pourId, place.projectId);
@@ -297,6 +325,7 @@ export class PersonWork {
       this.outbox.delete(record.id);
       this.refused.set(record.id, record);
     }
+    this.#readRefused();
     for (const photo of settled.photos) this.photos.set(photo.photoId, photo);
     for (const stream of streams) {
       this.memory.merge(

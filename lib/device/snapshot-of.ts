@@ -1,4 +1,3 @@
-import { readEntry } from '@/lib/inspection/entry';
 import type { PourState } from '@/lib/inspection/sheet-types';
 import type { DeviceIndex } from '@/lib/inspection/wire';
 import type { DevicePour, DeviceProject, DeviceSnapshot, QueuedPhoto, RefusedEntry } from './device-types';
@@ -125,15 +124,17 @@ export function snapshotOf(
       lostEntries: work.loss.lost || null,
       signedInAs: lane.signedInAs,
     },
-    refused: [...work.refused.values()].sort((a, b) => a.deviceSeq - b.deviceSeq).flatMap(refusedEntry),
+    refused: [...work.refused.values()]
+      .sort((a, b) => a.deviceSeq - b.deviceSeq)
+      .flatMap((record) => refusedEntry(record, work.reader)),
     photos: photos.map(queuedPhoto),
   };
 }
 
-function refusedEntry(record: RefusedRecord): RefusedEntry[] {
+function refusedEntry(record: RefusedRecord, reader: PersonWork['reader']): RefusedEntry[] {
   // The role plays no part in the tray; the server has judged it already.
-  const read = readEntry({ ...record.envelope, authorRole: 'viewer' });
-  if (read.kind !== 'known') return [];
+  const read = reader?.({ ...record.envelope, authorRole: 'viewer' });
+  if (read?.kind !== 'known') return [];
   const { code, sentence, field, at } = record;
   return [{ entry: read.entry, code, sentence, field, at }];
 }

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { recordId } from '@/lib/inspection/primitives';
-import { MOST_ENTRIES_IN_A_BATCH } from '@/lib/inspection/wire';
+import { MOST_ENTRIES_IN_A_BATCH } from '@/lib/inspection/protocol';
 
 /** An entry as the file holds it: its whole content travels untouched, and the server parses it. */
 const waiting = z.looseObject({

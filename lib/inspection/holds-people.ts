@@ -1,4 +1,4 @@
-import { revisionLetter } from './plan';
+import { revisionLetter } from './revision-letter';
 import { roleWords } from './roles';
 import type { Hold, NonconformanceState, Sheet, SignatureState } from './sheet-types';
 

@@ -3,12 +3,8 @@ import { entryEnvelope, receipt } from './entry';
 import { crewList } from './fix-list-item';
 import { digest, instant, recordId } from './primitives';
 import { plan } from './plan';
+import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL } from './protocol';
 import { role } from './roles';
-
-/** Version of the protocol between device and server; see SPEC.md beside lib/device/sync. */
-export const PROTOCOL = 1;
-export const MOST_ENTRIES_IN_A_BATCH = 500;
-export const PULL_PAGE = 1000;
 
 /** A batch of one project and one author. Entries are parsed one by one, so that one bad entry leaves the rest kept. */
 export const pushRequest = z.object({

@@ -1,7 +1,8 @@
 import { entryTypes } from '@/lib/inspection/entry';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { Role } from '@/lib/inspection/roles';
-import { PULL_PAGE, type PullRequest, type PullResponse } from '@/lib/inspection/wire';
+import { PULL_PAGE } from '@/lib/inspection/protocol';
+import type { PullRequest, PullResponse } from '@/lib/inspection/wire';
 import { hashesAt, readPages, type SealedEntry } from '@/db/stores/entry-store';
 import { assignedPourIds, currentPlans, poursByIds } from '@/db/stores/pour-store';
 import type { Tx } from '@/db/connection';

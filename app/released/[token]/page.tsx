@@ -6,7 +6,7 @@ import { Caution } from '@/components/office/caution';
 import { PrintButton } from '@/components/office/print-button';
 import { SheetFrame } from '@/components/ui/sheet-frame';
 import { TitleBlock } from '@/components/ui/title-block';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { roles, roleWords } from '@/lib/inspection/roles';
 import { publicRelease, type PublicRelease } from '@/lib/server/public-release';
 

@@ -1,4 +1,3 @@
-import { z } from 'zod';
 import type { BodyOf } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { DeviceEnvironment } from '../device-environment';
@@ -47,7 +46,7 @@ export class DevicePhotos {
     const answer = await askServer(
       this.env,
       { method: 'GET', path: `/api/photos/${photoId}/address` },
-      z.object({ url: z.string() }),
+      'photoAddress',
     );
     return answer.kind === 'answered' ? answer.data.url : null;
   }

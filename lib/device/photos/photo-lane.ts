@@ -2,7 +2,6 @@ import type { DeviceEnvironment } from '../device-environment';
 import type { PersonWork } from '../person-work';
 import type { PhotoRecord } from '../store/person-database';
 import { backOff } from '../sync/back-off';
-import { uploadPhoto } from './upload-photo';
 
 /** A photo that was sent and not heard of for this long is sent again. */
 const UNHEARD_MS = 10 * 60_000;
@@ -88,6 +87,7 @@ export class PhotoLane {
         continue;
       }
       await work.setPhoto({ ...photo, progress: 'sending', problem: null });
+      const { uploadPhoto } = await import('./upload-photo');
       const upload = await uploadPhoto(this.env, { photoId: photo.photoId, bytes: stored.bytes });
       if (work.closed) return null;
       // A pull may have said meanwhile that it is stored: what the record says counts.

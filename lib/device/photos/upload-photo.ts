@@ -1,13 +1,6 @@
-import { z } from 'zod';
 import type { DeviceEnvironment } from '../device-environment';
+import type { AnswerOf } from '../record-schemas';
 import { askServer, type Trouble } from '../sync/ask-server';
-
-const uploadAddress = z.object({
-  url: z.string().min(1),
-  headers: z.record(z.string(), z.string()),
-  expiresAt: z.string(),
-});
-const uploaded = z.object({}).loose();
 
 export type Upload = { kind: 'sent' } | { kind: 'refused'; sentence: string } | Trouble;
 
@@ -26,12 +19,12 @@ export async function uploadPhoto(
   const address = await askServer(
     env,
     { method: 'POST', path: `${base}/upload-address`, json: {} },
-    uploadAddress,
+    'uploadAddress',
   );
   if (address.kind === 'trouble') return refusal(address) ?? address;
   const put = await putBytes(env, address.data, photo.bytes);
   if (put) return put;
-  const told = await askServer(env, { method: 'POST', path: `${base}/uploaded`, json: {} }, uploaded);
+  const told = await askServer(env, { method: 'POST', path: `${base}/uploaded`, json: {} }, 'done');
   if (told.kind === 'trouble') return refusal(told) ?? told;
   return { kind: 'sent' };
 }
@@ -47,7 +40,7 @@ function refusal(trouble: Trouble): Upload | null {
 
 async function putBytes(
   env: Pick<DeviceEnvironment, 'fetch' | 'after'>,
-  address: z.infer<typeof uploadAddress>,
+  address: AnswerOf<'uploadAddress'>,
   bytes: ArrayBuffer,
 ): Promise<Trouble | null> {
   const stop = new AbortController();

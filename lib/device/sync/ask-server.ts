@@ -1,6 +1,7 @@
-import type { z } from 'zod';
 import type { SyncPhase } from '../device-types';
 import type { DeviceEnvironment } from '../device-environment';
+import { loadSchemas } from '../load-schemas';
+import type { AnswerName, AnswerOf } from '../record-schemas';
 import { jsonBody } from './gzip';
 
 /** A request that was not answered as the protocol says. Nothing is taken out of the outbox for it. */
@@ -30,17 +31,18 @@ const QUICK_ANSWER_MS = 10_000;
 
 /**
  * Asks the server, and sorts every way in which it may not answer. (SPEC 12 to 17)
- * @param schema what a good answer looks like; an answer of another shape is trouble
+ * @param name which answer is a good one; an answer of another shape is trouble
  */
-export async function askServer<T>(
+export async function askServer<N extends AnswerName>(
   env: Pick<DeviceEnvironment, 'fetch' | 'now' | 'after'>,
   request: { method: 'GET' | 'POST'; path: string; json?: unknown; timeoutMs?: number },
-  schema: z.ZodType<T>,
-): Promise<Answer<T>> {
+  name: N,
+): Promise<Answer<AnswerOf<N>>> {
   const stop = new AbortController();
   const stopTimer = env.after(request.timeoutMs ?? 30_000, () => stop.abort());
   const started = env.now();
   try {
+    const { readAnswer } = await loadSchemas();
     const { body, headers } =
       request.json === undefined ? { body: null, headers: {} } : await jsonBody(request.json);
     const response = await env.fetch(request.path, {
@@ -54,7 +56,7 @@ export async function askServer<T>(
       signal: stop.signal,
     });
     const text = await response.text();
-    return read(response, text, schema, { started, ended: env.now() });
+    return read(response, text, (json) => readAnswer(name, json), { started, ended: env.now() });
   } catch {
     return stop.signal.aborted
       ? trouble('server-trouble', 'The server did not answer in time.')
@@ -67,7 +69,7 @@ export async function askServer<T>(
 function read<T>(
   response: Response,
   text: string,
-  schema: z.ZodType<T>,
+  readAnswer: (json: unknown) => T | null,
   times: { started: number; ended: number },
 ): Answer<T> {
   const { status } = response;
@@ -93,15 +95,15 @@ function read<T>(
       aboutRequest: true,
     });
   }
-  const result = schema.safeParse(json);
-  if (!result.success) {
+  const data = readAnswer(json);
+  if (data === null) {
     return trouble(
       'server-trouble',
       'The server answered in a way that this version does not understand. Look for an update.',
       { status },
     );
   }
-  return { kind: 'answered', data: result.data, clockOffsetMs: clockOffset(json, times) };
+  return { kind: 'answered', data, clockOffsetMs: clockOffset(json, times) };
 }
 
 function trouble(

@@ -1,5 +1,6 @@
 import type { CrewList } from '@/lib/inspection/fix-list-item';
-import { PROTOCOL, pullResponse, type PullRequest, type PullResponse } from '@/lib/inspection/wire';
+import { PROTOCOL } from '@/lib/inspection/protocol';
+import type { PullRequest, PullResponse } from '@/lib/inspection/wire';
 import type { DeviceEnvironment } from '../device-environment';
 import type { PersonWork } from '../person-work';
 import { projectStream } from '../store/person-database';
@@ -53,7 +54,7 @@ async function pullGroup(
         json: await requestFor(work, projectId, asked),
         timeoutMs: 60_000,
       },
-      pullResponse,
+      'pullResponse',
     );
     if (answer.kind === 'trouble') return answer;
     await work.setClockOffset(answer.clockOffsetMs);

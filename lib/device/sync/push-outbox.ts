@@ -1,4 +1,4 @@
-import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL, pushResponse } from '@/lib/inspection/wire';
+import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL } from '@/lib/inspection/protocol';
 import type { DeviceEnvironment } from '../device-environment';
 import type { PersonWork } from '../person-work';
 import type { OutboxRecord } from '../store/person-database';
@@ -73,7 +73,7 @@ function sendBatch(env: DeviceEnvironment, work: PersonWork, batch: readonly Out
       },
       timeoutMs: 60_000,
     },
-    pushResponse,
+    'pushResponse',
   );
 }
 

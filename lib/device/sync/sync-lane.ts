@@ -1,4 +1,3 @@
-import { deviceIndex } from '@/lib/inspection/wire';
 import type { DeviceEnvironment } from '../device-environment';
 import type { SyncPhase } from '../device-types';
 import type { PersonWork } from '../person-work';
@@ -202,7 +201,7 @@ export class SyncLane {
 
   /** An outbox is sent only in its author's own session: ask first whose session this is. (SPEC 11) */
   async #askWhoIsSignedIn(work: PersonWork, goOn: () => boolean): Promise<LaneTrouble | 'stopped' | null> {
-    const answer = await askServer(this.env, { method: 'GET', path: '/api/sync/index' }, deviceIndex);
+    const answer = await askServer(this.env, { method: 'GET', path: '/api/sync/index' }, 'deviceIndex');
     if (!goOn()) return 'stopped';
     if (answer.kind === 'trouble') return answer;
     if (answer.data.person.id !== work.person.id) {

@@ -1,6 +1,6 @@
 import type { Entry, EntryOf } from '@/lib/inspection/entry';
 import type { ReleaseScope } from '@/lib/inspection/entry-bodies';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { roleWords, type Role } from '@/lib/inspection/roles';
 import type { Hold, Sheet } from '@/lib/inspection/sheet-types';
 import type { MailPayload } from '../jobs/enqueue-job';

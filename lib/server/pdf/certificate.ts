@@ -1,5 +1,6 @@
 import { withUnit } from '@/lib/concrete/length';
-import { revisionLetter, type DecisionRule } from '@/lib/inspection/plan';
+import type { DecisionRule } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { inScope } from '@/lib/inspection/scope';
 import type { MarkKind, PointState, Sheet } from '@/lib/inspection/sheet-types';
 import type { ReleasedPage } from '@/db/read/released-page';

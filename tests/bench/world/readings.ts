@@ -1,6 +1,6 @@
 import { v7 as uuid } from 'uuid';
 import type { EntryEnvelope } from '@/lib/inspection/entry';
-import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL } from '@/lib/inspection/wire';
+import { MOST_ENTRIES_IN_A_BATCH, PROTOCOL } from '@/lib/inspection/protocol';
 import type { BenchPour, Site } from './site';
 
 /** An hour of 60 readings a face; values as a good cage gives them, all met. */

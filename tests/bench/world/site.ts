@@ -1,5 +1,6 @@
 import { v7 as uuid } from 'uuid';
-import { PROTOCOL, type PullResponse } from '@/lib/inspection/wire';
+import { PROTOCOL } from '@/lib/inspection/protocol';
+import type { PullResponse } from '@/lib/inspection/wire';
 import type { PlanInput } from '@/lib/inspection/plan-input';
 import type { Role } from '@/lib/inspection/roles';
 import type { Product } from './product';

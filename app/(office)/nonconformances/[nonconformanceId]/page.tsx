@@ -25,7 +25,7 @@ import { SheetFrame } from '@/components/ui/sheet-frame';
 import { TitleBlock } from '@/components/ui/title-block';
 import { findNonconformance, readNonconformanceList } from '@/db/read/nonconformance-list';
 import { AppError } from '@/lib/inspection/app-error';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { recordId } from '@/lib/inspection/primitives';
 import { allowed } from '@/lib/server/access';
 import { withAccess } from '@/lib/server/with-access';

@@ -7,7 +7,7 @@ import { TitleOfPour } from '@/components/office/title-of-pour';
 import { Notice } from '@/components/ui/notice';
 import { SheetFrame } from '@/components/ui/sheet-frame';
 import { LinkButton } from '@/components/ui/link-button';
-import { revisionLetter } from '@/lib/inspection/plan';
+import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { readPourPage } from '../read-pour-page';
 
 export const metadata: Metadata = { title: 'Revise the plan' };
