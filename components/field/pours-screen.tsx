@@ -65,9 +65,11 @@ export function PoursScreen() {
         <footer className="grid gap-4 border-t border-rule pt-4">
           <ThemeSwitch />
           <nav aria-label="Elsewhere" className="flex flex-wrap gap-2">
-            <LeaveLink href="/pours" className={buttonClasses('quiet')}>
-              The office side
-            </LeaveLink>
+            {snapshot.projects.some((project) => project.role !== 'crew') && (
+              <LeaveLink href="/pours" className={buttonClasses('quiet')}>
+                The office side
+              </LeaveLink>
+            )}
             <LeaveLink href="/account" className={buttonClasses('quiet')}>
               Account
             </LeaveLink>
