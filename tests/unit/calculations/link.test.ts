@@ -4,7 +4,7 @@ import { exampleOf, isShown, type Draft, type FieldSet } from '@/components/calc
 import { openLink, queryOf } from '@/components/calculations/link';
 import { readDraft } from '@/components/calculations/read-draft';
 import { allCalculations, calculationNamed } from './all-calculations';
-import { typedDrafts, typedNames } from './typed-drafts';
+import { PATIENT_MS, typedDrafts, typedNames } from './typed-drafts';
 
 const opened = (fields: FieldSet, query: string) =>
   openLink(fields, Object.fromEntries(new URLSearchParams(query)));
@@ -17,39 +17,47 @@ const shownOf = (fields: FieldSet, draft: Draft) =>
   );
 
 describe.each(allCalculations)('a link to $slug', ({ fields, evaluate }) => {
-  test('opens with the very inputs and the very result that it was copied from', () => {
-    fc.assert(
-      fc.property(typedDrafts(fields, false), (draft) => {
-        fc.pre(readDraft(fields, draft).ok);
-        const again = opened(fields, queryOf(fields, draft));
-        expect(again.leftOut).toEqual([]);
-        expect(again.assumed).toEqual([]);
-        expect(shownOf(fields, again.draft)).toEqual(shownOf(fields, draft));
-        expect(evaluate(again.draft)).toEqual(evaluate(draft));
-      }),
-      { numRuns: 60 },
-    );
-  });
+  test(
+    'opens with the very inputs and the very result that it was copied from',
+    () => {
+      fc.assert(
+        fc.property(typedDrafts(fields, false), (draft) => {
+          fc.pre(readDraft(fields, draft).ok);
+          const again = opened(fields, queryOf(fields, draft));
+          expect(again.leftOut).toEqual([]);
+          expect(again.assumed).toEqual([]);
+          expect(shownOf(fields, again.draft)).toEqual(shownOf(fields, draft));
+          expect(evaluate(again.draft)).toEqual(evaluate(draft));
+        }),
+        { numRuns: 60 },
+      );
+    },
+    PATIENT_MS,
+  );
 
-  test('leaves out what cannot be read, names it, and puts nothing in its place', () => {
-    fc.assert(
-      fc.property(typedDrafts(fields), (draft) => {
-        const read = readDraft(fields, draft);
-        fc.pre(!read.ok);
-        if (read.ok) return;
-        const again = opened(fields, queryOf(fields, draft));
-        for (const name of Object.keys(read.problems)) {
-          expect(again.draft[name]).toBe('');
-          const text = (draft[name] ?? '').trim();
-          if (text !== '')
-            expect(again.leftOut).toContainEqual(
-              expect.objectContaining({ label: fields[name]?.label, text: text.slice(0, 40) }),
-            );
-        }
-      }),
-      { numRuns: 100 },
-    );
-  });
+  test(
+    'leaves out what cannot be read, names it, and puts nothing in its place',
+    () => {
+      fc.assert(
+        fc.property(typedDrafts(fields), (draft) => {
+          const read = readDraft(fields, draft);
+          fc.pre(!read.ok);
+          if (read.ok) return;
+          const again = opened(fields, queryOf(fields, draft));
+          for (const name of Object.keys(read.problems)) {
+            expect(again.draft[name]).toBe('');
+            const text = (draft[name] ?? '').trim();
+            if (text !== '')
+              expect(again.leftOut).toContainEqual(
+                expect.objectContaining({ label: fields[name]?.label, text: text.slice(0, 40) }),
+              );
+          }
+        }),
+        { numRuns: 100 },
+      );
+    },
+    PATIENT_MS,
+  );
 
   test('without inputs opens the example', () => {
     expect(opened(fields, '').draft).toEqual(exampleOf(fields, 'mm'));

@@ -1,6 +1,9 @@
 import fc from 'fast-check';
 import { isTyped, type Draft, type Field, type FieldSet } from '@/components/calculations/field-spec';
 
+/** For tests of many drafts: a busy machine makes them slow and not wrong. */
+export const PATIENT_MS = 60_000;
+
 const texts: Record<'length' | 'number' | 'quantity' | 'bar', readonly string[]> = {
   length: ['38', '300', '40.5', '1 3/8 in', '2\' 6"', '0', '12 cm', '7', '250 mm', '1/2"', '0.001'],
   number: ['0', '1', '0.7', '1.5', '50', '95', '33', '2', '14', '0.3', '100'],
