@@ -1,3 +1,5 @@
+import { notNegative, positive } from '@/lib/concrete/check-input';
+
 /** Systems of reinforcing bar sizes. */
 export type BarSystem = 'astm' | 'en' | 'csa' | 'as-nzs' | 'is';
 
@@ -170,5 +172,5 @@ export function isSameBar(one: string, other: string, basis = 'contract'): boole
 
 /** Mass in kg of `lengthMm` of a bar, by the mass of its table. */
 export function massOf(of: Bar, lengthMm: number): number {
-  return (of.massKgPerM * lengthMm) / 1000;
+  return (positive('mass per metre', of.massKgPerM) * notNegative('length', lengthMm)) / 1000;
 }

@@ -1,4 +1,4 @@
-import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { ConcreteError, numberProblem, positiveProblem } from '@/lib/concrete/concrete-error';
 
 /**
  * Checks on typed numbers. Each returns what it was given, or throws a `ConcreteError` that names the field and the
@@ -13,15 +13,15 @@ export function given<T>(field: string, value: T | undefined | null): T {
 
 /** A finite number. */
 export function finite(field: string, value: number): number {
-  if (typeof value !== 'number' || !Number.isFinite(value)) {
-    throw new ConcreteError(field, 'It has to be a number.');
-  }
+  const problem = numberProblem(value);
+  if (problem !== null) throw new ConcreteError(field, problem);
   return value;
 }
 
 /** A finite number above zero. */
 export function positive(field: string, value: number): number {
-  if (finite(field, value) <= 0) throw new ConcreteError(field, 'It has to be more than zero.');
+  const problem = positiveProblem(value);
+  if (problem !== null) throw new ConcreteError(field, problem);
   return value;
 }
 

@@ -1,3 +1,4 @@
+import { finite } from '@/lib/concrete/check-input';
 import { ConcreteError, requirePositive } from '@/lib/concrete/concrete-error';
 import { coverByAci318 } from '@/lib/concrete/cover-aci-318';
 import { coverByAs3600 } from '@/lib/concrete/cover-as-3600';
@@ -141,6 +142,7 @@ function checkSection(input: CoverRequirementInput, specifiedMm: number): void {
  * as-found bar. Throws where the two leave nothing between them.
  */
 export function stricterOf(planned: CoverRequirement, asFound: CoverRequirement): CoverRequirement {
+  for (const one of [planned, asFound]) checkFinite(one);
   const most = [planned.mostAcceptedMm, asFound.mostAcceptedMm].filter((limit) => limit !== null);
   const codes = [planned.codeMinimumMm, asFound.codeMinimumMm].filter((limit) => limit !== null);
   const stricter = asFound.leastAcceptedMm > planned.leastAcceptedMm ? asFound : planned;
@@ -156,4 +158,11 @@ export function stricterOf(planned: CoverRequirement, asFound: CoverRequirement)
     warnings: [...new Set([...planned.warnings, ...asFound.warnings])],
     trail: stricter.trail,
   };
+}
+
+function checkFinite(requirement: CoverRequirement): void {
+  for (const field of ['specifiedMm', 'leastAcceptedMm', 'mostAcceptedMm', 'codeMinimumMm'] as const) {
+    const value = requirement[field];
+    if (value !== null) finite(field, value);
+  }
 }

@@ -66,6 +66,9 @@ export function chlorideTimeRatio(
   const exponent = 2 / (1 - ageingExponent(m));
   const inputs = [...coverInputs(measuredMm, specifiedMm), { name: 'Ageing exponent m', value: m, unit: '' }];
   const ratio = (measuredMm / specifiedMm) ** exponent;
+  if (!Number.isFinite(ratio)) {
+    throw new ConcreteError('ageing exponent m', 'It is so near to 1 that no ratio follows.');
+  }
   const base = `${numberText(measuredMm, 2)} / ${numberText(specifiedMm, 2)}`;
   const value = `(${base})^${numberText(exponent, 3)} = ${numberText(ratio, 3)}`;
   return {

@@ -1,3 +1,4 @@
+import { finite } from '@/lib/concrete/check-input';
 import { ConcreteError, requirePositive } from '@/lib/concrete/concrete-error';
 import { seededRandom } from '@/lib/concrete/seeded-random';
 
@@ -212,8 +213,8 @@ export function neighboursOf<P extends { xMm: number; yMm: number }>(
 ): P[] {
   const nearest = new Map<string, { point: P; distance: number }>();
   for (const other of points) {
-    const dx = other.xMm - point.xMm;
-    const dy = other.yMm - point.yMm;
+    const dx = finite('xMm', other.xMm) - finite('xMm', point.xMm);
+    const dy = finite('yMm', other.yMm) - finite('yMm', point.yMm);
     const distance = Math.hypot(dx, dy);
     if (distance === 0) continue;
     const side = Math.abs(dx) >= Math.abs(dy) ? (dx < 0 ? 'left' : 'right') : dy < 0 ? 'above' : 'below';

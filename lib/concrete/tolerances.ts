@@ -99,6 +99,8 @@ export const CSA_A23_TOLERANCE = {
 /** EN 13670 permitted increase of cover in mm at a section height, interpolated. */
 export function en13670Plus(heightMm: number, toleranceClass: 1 | 2, foundation: boolean): number {
   requirePositive('thicknessMm', heightMm);
+  if (toleranceClass !== 1 && toleranceClass !== 2)
+    throw new ConcreteError('toleranceClass', 'EN 13670 has the classes 1 and 2.');
   const value = (row: (typeof EN_13670_TOLERANCE.plus)[number]) =>
     toleranceClass === 1 ? row.class1 : row.class2;
   const [low, middle, high] = EN_13670_TOLERANCE.plus;
@@ -128,7 +130,7 @@ function aciDeviation(input: CoverRequirementInput, specifiedMm: number, unit: L
     minusMm = Math.min(minusMm, soffitMm);
     trail.push(step('Cover to a formed soffit', minus(soffitMm)));
   }
-  const third = specifiedMm * ACI_318_19_TOLERANCE.mostShare;
+  const third = requirePositive('specifiedMm', specifiedMm) * ACI_318_19_TOLERANCE.mostShare;
   const limited = Math.min(minusMm, third);
   trail.push(
     step('Never more than one third of the specified cover', `${minus(third)}, so ${minus(limited)}`),
@@ -179,7 +181,7 @@ function asDeviation(input: CoverRequirementInput, unit: LengthUnit): CoverDevia
 }
 
 function csaDeviation(specifiedMm: number, unit: LengthUnit): CoverDeviation {
-  const third = specifiedMm * CSA_A23_TOLERANCE.mostShare;
+  const third = requirePositive('specifiedMm', specifiedMm) * CSA_A23_TOLERANCE.mostShare;
   const minusMm = Math.min(CSA_A23_TOLERANCE.coverMm, third);
   const step = trailSource('CSA A23.1 6.6.8', '2009 to 2019', 'memory');
   return {
