@@ -1,7 +1,11 @@
 import { formatLength, type LengthUnit } from '@/lib/concrete/length';
 import type { MeasuredValue } from '@/lib/inspection/measured-value';
-import type { Measure } from './measure-draft';
+import type { MeasurementItem } from '@/lib/inspection/plan';
+import { emptyMeasure, type Measure } from './measure-draft';
 import { pressesOf } from './reading-keys';
+
+/** Bars of a sample square each way: 2 m at 100 mm. */
+export const MOST_BARS = 21;
 
 /** A value that was recorded, as the form that entered it would show it. */
 export function measureOfValue(value: MeasuredValue, unit: LengthUnit): Measure {
@@ -56,6 +60,20 @@ export function measureOfValue(value: MeasuredValue, unit: LengthUnit): Measure 
       return { quantity: 'ticket', ticket: value.ticket, fibreType: value.fibreType ?? '', dosage };
     }
   }
+}
+
+/**
+ * The empty form for the next place: what places have in common is kept from the last one, so that a square of the same
+ * size is counted without setting it up again.
+ */
+export function nextMeasure(item: MeasurementItem, last: MeasuredValue | null, unit: LengthUnit): Measure {
+  const empty = emptyMeasure(item);
+  if (last === null || last.quantity !== empty.quantity) return empty;
+  const before = measureOfValue(last, unit);
+  if (empty.quantity === 'share' && before.quantity === 'share' && before.rows <= MOST_BARS)
+    return { ...empty, rows: before.rows, columns: before.columns };
+  if (empty.quantity === 'coupler' && before.quantity === 'coupler') return { ...empty, type: before.type };
+  return empty;
 }
 
 /** The side of a square of so many crossings, or of the rectangle that is nearest to one. */

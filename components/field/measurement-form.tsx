@@ -12,8 +12,8 @@ import { ChoiceList } from './choice-list';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { FormProblem } from './form-problem';
-import { emptyMeasure, measuredValue, type Measure } from './measure-draft';
-import { measureOfValue } from './measure-of-value';
+import { measuredValue, type Measure } from './measure-draft';
+import { measureOfValue, nextMeasure } from './measure-of-value';
 import { MeasureInput } from './measure-input';
 import type { OpenSheet } from './open-sheet';
 import { signalVerdict } from './signal-verdict';
@@ -46,12 +46,15 @@ export function MeasurementForm({
   limits: string;
 }) {
   const { item } = state;
+  const { units } = open.sheet.plan;
   const device = useDevice();
   const again = useRefusedAgain('measurement', (body) => body.itemId === item.id);
   const [place, setPlace] = useState(() => again?.body.place ?? nextPlace(state));
   const [stage, setStage] = useState<Stage>(again?.body.stage ?? (item.loaded ? 'before' : 'single'));
   const [measure, setMeasure] = useState<Measure>(() =>
-    again ? measureOfValue(again.body.value, open.sheet.plan.units) : emptyMeasure(item),
+    again
+      ? measureOfValue(again.body.value, units)
+      : nextMeasure(item, state.places.at(-1)?.current?.value ?? null, units),
   );
   const [problem, setProblem] = useState<string | null>(null);
   const [keptId, setKeptId] = useState<string | null>(null);
@@ -60,7 +63,7 @@ export function MeasurementForm({
   const about = { kind: 'measurement', id: item.id } as const;
 
   const keep = async () => {
-    const value = measuredValue(measure, open.sheet.plan.units);
+    const value = measuredValue(measure, units);
     setProblem(value.ok ? null : value.problem);
     if (!value.ok) return;
     const entry = await record('measurement', {
@@ -72,7 +75,7 @@ export function MeasurementForm({
     });
     if (!entry) return;
     setKeptId(entry.id);
-    setMeasure(emptyMeasure(item));
+    setMeasure(nextMeasure(item, value.value, units));
     const now = device.pour(open.sheet.pourId)?.sheet?.measurements.find((one) => one.item.id === item.id);
     const judged = now?.places.find((one) => one.entry.id === entry.id);
     if (judged) signalVerdict(judged.verdict, false);
@@ -110,7 +113,7 @@ export function MeasurementForm({
           choices={loadedStages.map((one) => ({ value: one, label: stageWords[one] }))}
         />
       )}
-      <MeasureInput item={item} measure={measure} unit={open.sheet.plan.units} onChange={setMeasure} />
+      <MeasureInput item={item} measure={measure} unit={units} onChange={setMeasure} />
       {problem && (
         <p role="alert" className="font-label font-semibold text-hold">
           {problem}

@@ -60,9 +60,12 @@ export function PhotoOverlay({ photoId, onTake }: { photoId: string; onTake: (fi
               className="absolute inset-0 size-full object-cover opacity-35"
             />
           </div>
-          <Button variant="primary" onClick={shoot}>
-            Take it from the same place
-          </Button>
+          <div className="grid grid-cols-[2fr_1fr] gap-2">
+            <Button variant="primary" className="min-h-15" onClick={shoot}>
+              Take it from the same place
+            </Button>
+            <Button onClick={() => setStream(null)}>Close the camera</Button>
+          </div>
         </>
       ) : (
         <>

@@ -3,9 +3,9 @@
 import { Button } from '@/components/ui/button';
 import { classNames } from '@/components/ui/class-names';
 import type { Measure } from './measure-draft';
+import { MOST_BARS } from './measure-of-value';
 
 type Share = Extract<Measure, { quantity: 'share' }>;
-const MOST_BARS = 12;
 
 /** A sample square as a grid of intersections: tap those that are tied. */
 export function TieGrid({ measure, onChange }: { measure: Share; onChange: (measure: Share) => void }) {

@@ -2,7 +2,7 @@ import { expect, test } from 'vitest';
 import { againPath } from '@/components/field/again-path';
 import { governingBeside } from '@/components/field/governing-beside';
 import { measuredValue } from '@/components/field/measure-draft';
-import { measureOfValue } from '@/components/field/measure-of-value';
+import { measureOfValue, nextMeasure } from '@/components/field/measure-of-value';
 import { pressesOf, readPresses } from '@/components/field/reading-keys';
 import { readRoute } from '@/components/field/field-routes';
 import { notSentWords, syncWords } from '@/components/field/sync-words';
@@ -36,6 +36,15 @@ test('a count of ties is refilled as the square it was counted on', () => {
   const measure = measureOfValue(value, 'mm');
   expect(measure).toMatchObject({ rows: 13, columns: 13 });
   expect(measuredValue(measure, 'mm')).toEqual({ ok: true, value });
+});
+
+test('the next square of ties has the size of the last one, and none of its ties', () => {
+  const item = smallPlan().measurements.find((one) => one.quantity === 'share') ?? {
+    ...smallPlan().measurements[0]!,
+    quantity: 'share' as const,
+  };
+  const next = nextMeasure(item, { quantity: 'share', of: 169, tied: 92 }, 'mm');
+  expect(next).toMatchObject({ rows: 13, columns: 13, tied: [] });
 });
 
 test('a refused entry leads to the screen that begins with it', () => {
