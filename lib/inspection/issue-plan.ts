@@ -1,8 +1,9 @@
 import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { numberText } from '@/lib/concrete/number-text';
 import { defaultPointCount, drawPoints } from '@/lib/concrete/reading-points';
 import { issueMeasurement } from './issue-measurement';
 import { barDiameter, issueRequirement } from './issue-requirement';
-import type { Element, Face, Plan, ReadingPoint } from './plan';
+import type { Element, Face, Layer, Plan, ReadingPoint } from './plan';
 import type { PlanInput } from './plan-input';
 
 export interface IssueContext {
@@ -152,7 +153,7 @@ export function issuePlan(input: PlanInput, context: IssueContext): Plan {
 }
 
 function issueElement(input: PlanInput, pourId: string, element: ElementInput): Element {
-  return {
+  const issued: Element = {
     id: element.id,
     type: element.type,
     mark: element.mark,
@@ -169,4 +170,28 @@ function issueElement(input: PlanInput, pourId: string, element: ElementInput): 
       ),
     })),
   };
+  for (const layer of issued.layers)
+    at(`elements.${element.id}.layers.${layer.id}`, () => refuseWhatDoesNotFit(issued, layer));
+  return issued;
+}
+
+/** Bars have to fit beside each other, and layers one behind the other between their face and the other side. */
+function refuseWhatDoesNotFit(element: Element, layer: Layer): void {
+  const face = element.faces.find((one) => one.id === layer.faceId);
+  if (!face) throw new ConcreteError('faceId', 'Choose the face that the layer is counted from.', 'absent');
+  if (layer.spacingMm !== null && layer.spacingMm <= layer.barDiameterMm) {
+    throw new ConcreteError(
+      'spacingMm',
+      `Bars ${layer.barDesignation} do not fit beside each other at this spacing.`,
+    );
+  }
+  const outside = element.layers.filter((one) => one.faceId === layer.faceId && one.order <= layer.order);
+  const coverMm = face.requirements[0]?.specifiedMm ?? 0;
+  const neededMm = outside.reduce((sum, one) => sum + one.barDiameterMm, coverMm);
+  if (neededMm > element.thicknessMm) {
+    throw new ConcreteError(
+      'barDesignation',
+      `The cover of ${face.name} and the layers to ${layer.name} need ${numberText(neededMm, 1)} mm, and the section has ${numberText(element.thicknessMm, 1)} mm.`,
+    );
+  }
 }
