@@ -1,5 +1,4 @@
 import type { Page } from '@playwright/test';
-import type { EntryEnvelope } from '@/lib/inspection/entry';
 
 /** As much of the peer as these functions use. */
 interface PeerDatabase {
@@ -19,7 +18,7 @@ declare global {
 const BATCH = 500;
 
 /** Keeps these entries in a store of the peer's in this page, as documents; not timed. */
-export async function keepAsDocuments(page: Page, entries: readonly EntryEnvelope[]): Promise<void> {
+export async function keepAsDocuments(page: Page, entries: readonly { id: string }[]): Promise<void> {
   await page.evaluate(
     async ({ all, size }) => {
       const local = new window.PouchDB('local');
