@@ -1,9 +1,12 @@
 import { expect, test } from 'vitest';
 import type { CoverRequirementInput } from '@/lib/concrete/cover-input';
 import { coverRequirement } from '@/lib/concrete/cover-requirement';
+import { lapTolerance } from '@/lib/concrete/laps';
+import { spacingTolerance } from '@/lib/concrete/spacing-tolerance';
+import { tendonBand } from '@/lib/concrete/tendons';
 import { basisDeviation, depthTolerance, en13670Plus } from '@/lib/concrete/tolerances';
 import { checkName } from './check-name';
-import { numberAt, Topic } from './load-records';
+import { numberAt, textAt, Topic } from './load-records';
 
 const topic = '03 tolerances';
 const book = new Topic('03-tolerances');
@@ -150,4 +153,57 @@ test(checkName(topic, as), () => {
   expect(band({ element: 'footing', meeting: 'cast-against-ground' })).toEqual(
     as.values.footings_in_ground_mm,
   );
+});
+
+const noSpacing = of('tol.aci318.spacing');
+const spacing117 = of('tol.aci117.spacing');
+test(checkName(topic, spacing117, 'Spacing of bars, of which ACI 318 itself sets none'), () => {
+  expect(noSpacing.values.value).toBeNull();
+  const found = (steel: 'slab-or-wall' | 'stirrups' | 'column-ties', memberIn: number) =>
+    spacingTolerance({ basis: 'aci-318-19', steel, specifiedMm: 6 * IN, memberMm: memberIn * IN });
+  const slab = found('slab-or-wall', 8);
+  expect(slab.plusMm).toBeCloseTo(numberAt(spacing117.values, 'slabs_walls_in') * IN, 9);
+  expect(slab.trail.map((step) => step.provenance)).toEqual([noSpacing.provenance, spacing117.provenance]);
+  for (const [steel, words] of [
+    ['stirrups', 'lesser of 3 in and 1 in per ft of beam depth'],
+    ['column-ties', 'lesser of 3 in and 1 in per ft of least column width'],
+  ] as const) {
+    expect(textAt(spacing117.values, steel === 'stirrups' ? 'stirrups' : 'ties')).toBe(words);
+    expect(found(steel, 24).minusMm).toBeCloseTo(2 * IN, 9);
+    expect(found(steel, 48).minusMm).toBeCloseTo(3 * IN, 9);
+  }
+});
+
+const lap117 = of('tol.aci117.lap');
+test(checkName(topic, lap117), () => {
+  const short = (inches: number) => {
+    const { minusMm, trail } = lapTolerance('aci-117-10', { diameterMm: inches * IN, requiredMm: 40 * IN });
+    expect(trail[0]?.provenance).toBe(lap117.provenance);
+    return -minusMm / IN;
+  };
+  for (const inches of [0.375, 1, 1.41]) {
+    expect(short(inches)).toBeCloseTo(numberAt(lap117.values, 'no3_to_no11_in'), 9);
+  }
+  for (const inches of [1.693, 2.257]) {
+    expect(short(inches)).toBeCloseTo(numberAt(lap117.values, 'no14_no18_in'), 9);
+  }
+});
+
+const lap13670 = of('tol.en13670.lap');
+test(checkName(topic, lap13670), () => {
+  const share = Number.parseFloat(textAt(lap13670.values, 'tol'));
+  const { minusMm, trail } = lapTolerance('en-13670', { diameterMm: 20, requiredMm: 1000 });
+  expect(-minusMm / 1000).toBeCloseTo(share, 12);
+  expect(trail[0]?.provenance).toBe(lap13670.provenance);
+});
+
+const other3600 = of('tol.as3600.other');
+test(checkName(topic, other3600, 'Spacing and tendon profile'), () => {
+  expect(textAt(other3600.values, 'spacing')).toBe('greater of 10 % of specified spacing and 15 mm');
+  const spacing = (specifiedMm: number) =>
+    spacingTolerance({ basis: 'as-3600', steel: 'slab-or-wall', specifiedMm, memberMm: 200 });
+  expect(spacing(120).minusMm).toBe(15);
+  expect(spacing(200).plusMm).toBeCloseTo(20, 12);
+  expect(spacing(200).trail[0]?.provenance).toBe(other3600.provenance);
+  expect(tendonBand('as-3600', 300).plusMm).toBe(numberAt(other3600.values, 'tendon_profile_mm'));
 });
