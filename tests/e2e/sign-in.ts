@@ -16,6 +16,12 @@ export const demo = {
 /** Where the product under test answers; set by the global set-up. */
 export const appAddress = (path = '') => `${process.env.E2E_APP ?? ''}${path}`;
 
+/** What a browser is opened with: the size of a screen, and whether it is touched. */
+export interface ScreenSize {
+  viewport: { width: number; height: number };
+  hasTouch: boolean;
+}
+
 export const phone = { viewport: { width: 390, height: 844 }, hasTouch: true } as const;
 export const laptop = { viewport: { width: 1280, height: 800 }, hasTouch: false } as const;
 
@@ -23,7 +29,7 @@ export const laptop = { viewport: { width: 1280, height: 800 }, hasTouch: false 
 export async function signedIn(
   browser: Browser,
   who: keyof typeof demo,
-  screen: typeof phone | typeof laptop,
+  screen: ScreenSize,
   path: string,
 ): Promise<{ context: BrowserContext; page: Page }> {
   const context = await browser.newContext(screen);

@@ -1,0 +1,215 @@
+import { expect, test, type Page } from '@playwright/test';
+import { keepScreenshot } from './keep-screenshot';
+import { litPoint, openPour, pointOnMap, readWith } from './on-site';
+import { outboxOf } from './outbox';
+import { phone, signedIn } from './sign-in';
+
+test.describe.configure({ timeout: 240_000 });
+
+/** Opens a face of a pour, as the sheet leads to it. */
+async function openFace(page: Page, face: RegExp): Promise<void> {
+  await page.getByRole('link', { name: face }).last().click();
+  await expect(page.getByRole('group', { name: /^Points of/ })).toBeVisible();
+}
+
+/** Taps on the page since it was asked last: what a hand did, whatever the test called. */
+async function countTaps(page: Page): Promise<() => Promise<number>> {
+  await page.evaluate(() => {
+    const counted = window as unknown as { taps: number };
+    counted.taps = 0;
+    window.addEventListener('click', () => (counted.taps += 1), true);
+  });
+  return () =>
+    page.evaluate(() => {
+      const counted = window as unknown as { taps: number };
+      const taps = counted.taps;
+      counted.taps = 0;
+      return taps;
+    });
+}
+
+async function tapReading(page: Page, value: string): Promise<void> {
+  for (const digit of value) await page.getByRole('button', { name: digit, exact: true }).tap();
+  await page.getByRole('button', { name: /^Keep/ }).tap();
+}
+
+const verdict = (page: Page, words: RegExp) => page.getByRole('status').filter({ hasText: words });
+
+// Without a network nothing of this reaches the server: other tests find the pours as they were.
+test('twenty readings in a row with the keypad take three taps each, and none to get on', async ({
+  browser,
+}) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await page.getByRole('link', { name: 'Back to pours' }).click();
+  await openPour(page, 'P-014');
+  await page.getByRole('link', { name: 'Back to pours' }).click();
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  const taps = await countTaps(page);
+  let read = 0;
+
+  const readAll = async (count: number) => {
+    for (let index = 0; index < count; index += 1) {
+      const label = await litPoint(page);
+      await taps();
+      await tapReading(page, String(44 + (index % 5)));
+      await expect(verdict(page, new RegExp(`^${label}: 4\\d mm, (not )?met`))).toHaveCount(1);
+      expect(await taps(), `taps for ${label}`).toBeLessThanOrEqual(3);
+      read += 1;
+    }
+  };
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'DG-1');
+  await readAll(9);
+  await expect(page.getByRole('banner')).toContainText('9 of 9 read');
+  await page.getByRole('link', { name: /^Next: Underside/ }).tap();
+  await readAll(6);
+  await page.getByRole('link', { name: 'Back to P-017' }).first().tap();
+  await page.getByRole('link', { name: 'Back to pours' }).tap();
+  await page.getByRole('link', { name: /P-014/ }).first().tap();
+  await openFace(page, /Quay deck, bay 3, Soffit .*14 of 17/);
+  await readAll(3);
+  await page.getByRole('link', { name: /^Next: Top/ }).tap();
+  await readAll(2);
+
+  expect(read).toBe(20);
+  const kept = await outboxOf(page);
+  expect(kept.filter((entry) => entry.type === 'reading')).toHaveLength(20);
+  await keepScreenshot(page, 'field-reading-twenty');
+  await context.close();
+});
+
+test('a gauge that types is heard wherever the focus is, and Enter keeps what it typed', async ({
+  browser,
+}) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'DG-1');
+
+  const focused = [
+    page.getByRole('button', { name: '7', exact: true }),
+    page.getByRole('button', { name: /^Instrument/ }),
+    page.getByRole('link', { name: 'Back to P-017' }),
+    page.getByRole('heading', { level: 1 }),
+  ];
+  for (const [index, place] of focused.entries()) {
+    const label = await litPoint(page);
+    await place.focus();
+    await page.keyboard.type(`4${index}.5`);
+    await expect(page.getByLabel('Reading', { exact: true })).toContainText(`4${index}.5`);
+    await page.keyboard.press('Enter');
+    await expect(verdict(page, new RegExp(`^${label}: 4${index}\\.5 mm, met`))).toHaveCount(1);
+    await expect(page.getByRole('dialog')).toHaveCount(0);
+  }
+  await expect(page.getByRole('banner')).toContainText('4 of 9 read');
+  await context.close();
+});
+
+test('undo takes the last reading back as a withdrawal, and the point is lit again', async ({ browser }) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'DG-1');
+  const label = await litPoint(page);
+  await tapReading(page, '64');
+  await expect(page.getByRole('banner')).toContainText('1 of 9 read');
+  await page.getByRole('button', { name: 'Undo' }).tap();
+  await expect(page.getByRole('banner')).toContainText('0 of 9 read');
+  expect(await litPoint(page)).toBe(label);
+
+  const [reading, withdrawal, ...more] = await outboxOf(page);
+  expect(more).toEqual([]);
+  expect(reading).toMatchObject({ type: 'reading', body: { value: { mm: 64 } } });
+  expect(withdrawal).toMatchObject({
+    type: 'amendment',
+    body: { rootId: reading?.id, replacement: null, reason: expect.stringContaining('undone') },
+  });
+  await context.close();
+});
+
+test('a tap beside the points reads a spot, and a low one asks what next without erasing', async ({
+  browser,
+}) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'DG-1');
+
+  const map = page.getByRole('group', { name: /^Points of/ });
+  const box = (await map.boundingBox())!;
+  await page.touchscreen.tap(box.x + box.width * 0.5, box.y + box.height * 0.85);
+  await expect(page.getByText('Spot reading')).toBeVisible();
+  await tapReading(page, '31');
+  await expect(verdict(page, /^spot 1: 31 mm, not met, low/)).toHaveCount(1);
+  await expect(pointOnMap(page, 'spot 1')).toHaveAccessibleName(/not met, low/);
+  await expect(page.getByRole('link', { name: 'Photo', exact: true })).toBeVisible();
+  await expect(page.getByRole('link', { name: 'Nonconformance', exact: true })).toBeVisible();
+
+  await page.getByRole('button', { name: /^Read again/ }).tap();
+  await tapReading(page, '46');
+  await expect(verdict(page, /^spot 1: 46 mm, met/)).toHaveCount(1);
+  await expect(page.getByText('31 mm, read before, still governs.')).toBeVisible();
+  await expect(pointOnMap(page, 'spot 1')).toHaveAccessibleName(/not met, low/);
+
+  const [first, second] = await outboxOf(page);
+  expect(first).toMatchObject({ type: 'reading', body: { pointId: null, value: { mm: 31 } } });
+  expect(second).toMatchObject({ type: 'reading', body: { pointId: `spot:${first?.id}` } });
+  await keepScreenshot(page, 'field-reading-spot');
+  await context.close();
+});
+
+test('a block that passes or not has two keys, and proves no number', async ({ browser }) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  await page.getByRole('link', { name: /^Instruments/ }).click();
+  await page.getByRole('button', { name: 'Add an instrument' }).tap();
+  await page.getByLabel('Name on site').fill('Block 38');
+  await page.getByLabel('Kind').selectOption('block');
+  await page.getByRole('button', { name: 'Add it' }).tap();
+  await page.getByRole('link', { name: 'Back to P-017' }).tap();
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'Block 38');
+  const label = await litPoint(page);
+  await page.getByRole('button', { name: /^Passes/ }).tap();
+  await expect(verdict(page, new RegExp(`^${label}: block 38 mm passes, met`))).toHaveCount(1);
+  const low = await litPoint(page);
+  await page.getByRole('button', { name: /^Does not pass/ }).tap();
+  await expect(verdict(page, new RegExp(`^${low}: block 38 mm does not pass, not met, low`))).toHaveCount(1);
+  const readings = (await outboxOf(page)).filter((entry) => entry.type === 'reading');
+  expect(readings.map((entry) => entry.body)).toEqual([
+    expect.objectContaining({ value: null, goNoGo: { blockMm: 38, passes: true } }),
+    expect.objectContaining({ value: null, goNoGo: { blockMm: 38, passes: false } }),
+  ]);
+  await context.close();
+});
+
+test('a block check that fails marks at once what was read since the last good one', async ({ browser }) => {
+  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
+  await openPour(page, 'P-017');
+  await context.setOffline(true);
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await readWith(page, 'DG-1');
+  const label = await litPoint(page);
+  await tapReading(page, '46');
+  await expect(pointOnMap(page, label)).toHaveAccessibleName(/, met/);
+
+  await page.getByRole('button', { name: /^Instrument/ }).tap();
+  await page.getByRole('link', { name: /^Block check/ }).tap();
+  const card = page.getByRole('article').filter({ has: page.getByRole('heading', { name: 'DG-1' }) });
+  await card.getByRole('button', { name: 'Block check' }).tap();
+  await page.getByLabel('The instrument shows').fill('53');
+  await expect(page.getByText('Outside its tolerance.')).toBeVisible();
+  await page.getByRole('button', { name: 'Keep: the check fails' }).tap();
+  await expect(card.getByText('suspect', { exact: true })).toBeVisible();
+
+  await page.getByRole('link', { name: 'Back to P-017' }).tap();
+  await openFace(page, /Boat ramp, upper, Top .*0 of 9/);
+  await expect(pointOnMap(page, label)).toHaveAccessibleName(/not verified/);
+  await context.close();
+});
