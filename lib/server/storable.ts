@@ -13,9 +13,17 @@ export function unstorable(value: unknown, depth = 0): string | null {
   if (typeof value === 'number')
     return Number.isFinite(value) ? null : 'This number is too large to be kept.';
   if (typeof value !== 'object' || value === null) return null;
-  const inner = Array.isArray(value) ? value : Object.entries(value).flat();
-  for (const one of inner) {
-    const problem = unstorable(one, depth + 1);
+  if (Array.isArray(value)) {
+    for (const one of value) {
+      const problem = unstorable(one, depth + 1);
+      if (problem) return problem;
+    }
+    return null;
+  }
+  // Every value of every entry comes by here: no lists are made to be thrown away.
+  for (const key of Object.keys(value)) {
+    const problem =
+      unstorable(key, depth + 1) ?? unstorable((value as Record<string, unknown>)[key], depth + 1);
     if (problem) return problem;
   }
   return null;
