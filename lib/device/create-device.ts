@@ -70,12 +70,13 @@ class FieldDevice {
         this.#pours.forget();
         this.#lane.personChanged();
       },
-      followed: () => this.#refreshPerson(),
+      followed: () => void this.#lane.run(),
     });
     this.#lane = new SyncLane(env, {
       work: () => this.#holder.work,
       changed: () => this.#changed(),
       wentThrough: () => void this.#photoLane.run(),
+      heardSession: (index) => void this.#holder.noteSession(index).catch(() => undefined),
     });
     this.#photoLane = new PhotoLane(env, {
       work: () => this.#holder.work,
@@ -146,7 +147,8 @@ class FieldDevice {
       openPerson: async (personId, pin) => {
         await this.#ready;
         const answer = await this.#holder.openPerson(personId, pin);
-        if (answer.ok) void this.#refreshPerson();
+        // Not asked who is signed in: whoever has given the PIN holds the device, whatever session comes up meanwhile.
+        if (answer.ok) void this.#lane.run();
         return answer;
       },
       setPin: async (pin, current) => {
@@ -211,9 +213,14 @@ class FieldDevice {
       this.#noAnswer = { phase: 'idle', message: null, signedInAs: null };
       const { work } = this.#holder;
       if (work?.person.id === data.person.id) {
-        await work.setIndex(data);
-        await work.setClockOffset(clockOffsetMs);
-        this.#lane.heardWhoIsHere(data.person.id);
+        try {
+          await work.setIndex(data);
+          await work.setClockOffset(clockOffsetMs);
+          this.#lane.heardWhoIsHere(data.person.id);
+        } catch (error) {
+          // The device was handed over in the middle of it: there is nobody left to tell.
+          if (!work.closed) throw error;
+        }
       }
     } else {
       this.#noAnswer = { phase: answer.phase, message: answer.sentence, signedInAs: null };
@@ -222,14 +229,26 @@ class FieldDevice {
     await this.#lane.run();
   }
 
+  /**
+   * The work of the person whose screens are shown. A device that has changed hands since does nothing in the name of
+   * the next one.
+   */
   async #openWork(): Promise<PersonWork> {
+    const shown = this.#snapshot.person?.id;
     await this.#ready.catch(() => {
       throw new DeviceError(
         'store-failed',
         'The store of this device did not open. What was kept is still in it. Load this page again.',
       );
     });
-    return this.#holder.need();
+    const work = this.#holder.need();
+    if (shown !== undefined && work.person.id !== shown) {
+      throw new DeviceError(
+        'signed-out',
+        'This device has changed hands meanwhile. This was not kept; enter it again.',
+      );
+    }
+    return work;
   }
 
   /** Screens are told once for everything that changed in one go. */

@@ -14,7 +14,7 @@ interface HolderHost {
   /** Another person's work was opened, or none is open any more. */
   personChanged(): void;
   /** Another tab opened somebody's work here: the server may know them. */
-  followed(): Promise<void>;
+  followed(): void;
 }
 
 /**
@@ -54,6 +54,11 @@ export class DeviceHolder {
     if (!isNew && people.knows(person.id)) return;
     this.#gavePassword = person.id;
     if (this.work?.person.id !== person.id) await this.#changeHands(person);
+  }
+
+  /** A session that was heard of while somebody holds the device is no new one when the page is loaded again. */
+  async noteSession({ person, signedInAt }: DeviceIndex): Promise<void> {
+    await this.#people?.isNewSession(person.id, signedInAt ?? null);
   }
 
   /** @throws DeviceError `signed-out` while nobody's work is open */
@@ -142,7 +147,7 @@ export class DeviceHolder {
     if (holder === null) return this.#closeWork();
     if (holder.id === this.work?.person.id) return;
     await this.#open(holder);
-    await this.host.followed();
+    this.host.followed();
   }
 
   async #closeWork(): Promise<void> {

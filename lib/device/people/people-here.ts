@@ -19,6 +19,8 @@ export class PeopleHere {
   #pins: Record<string, PinRecord> = {};
   #lastId: string | null = null;
   #locked = false;
+  /** The session that this tab has noted. */
+  #session = '';
 
   constructor(
     private readonly env: PeopleEnvironment,
@@ -110,12 +112,15 @@ export class PeopleHere {
    * @param since when the session began; null where the server does not say
    */
   async isNewSession(personId: string, since: string | null): Promise<boolean> {
+    const heard = `${personId} ${since ?? ''}`;
+    if (this.#session === heard) return false;
     let isNew = false;
     await this.settings.change('session', (before) => {
       const now = { personId, since: since ?? '' };
       isNew = before?.personId !== now.personId || before.since !== now.since;
       return now;
     });
+    this.#session = heard;
     if (isNew && this.#pins[personId]) await this.#noteFailures(personId, () => 0);
     return isNew;
   }

@@ -1,3 +1,4 @@
+import type { DeviceIndex } from '@/lib/inspection/wire';
 import type { DeviceEnvironment } from '../device-environment';
 import type { SyncPhase } from '../device-types';
 import type { PersonWork } from '../person-work';
@@ -26,6 +27,8 @@ interface LaneHost {
   work(): PersonWork | null;
   /** The state changed: tell the screens. */
   changed(): void;
+  /** Whose session the server has. */
+  heardSession(index: DeviceIndex): void;
   /** A round went through: photos may go now. */
   wentThrough(): void;
 }
@@ -204,6 +207,7 @@ export class SyncLane {
     const answer = await askServer(this.env, { method: 'GET', path: '/api/sync/index' }, 'deviceIndex');
     if (!goOn()) return 'stopped';
     if (answer.kind === 'trouble') return answer;
+    this.host.heardSession(answer.data);
     if (answer.data.person.id !== work.person.id) {
       this.#sessionOf = null;
       return otherPerson(work, answer.data.person.name);

@@ -231,10 +231,11 @@ describe('a shared tablet', () => {
     const own = await signIn(place, ada);
     await own.syncNow();
     expect(server.entries.find((one) => one.id === entry.id)?.authorId).toBe(ada.id);
+    expect(server.sentBy.get(entry.id)).toBe(ada.id);
     await phone.kill();
   });
 
-  it('would be told by a server that takes whatever comes (negative control)', async () => {
+  it('keeps everything when the server itself is wrong about whose session it has (SPEC 11)', async () => {
     const { phone, server, tab, straight } = await sharedTablet();
     // A server that says of every session that it is Ada’s: the device offers, and Ben’s session would take it in.
     phone.line = async (address, init) => {
@@ -253,6 +254,52 @@ describe('a shared tablet', () => {
     expect(pushed.length).toBeGreaterThan(0);
     expect(server.entries.some((one) => one.id === entry.id)).toBe(false);
     expect(tab.snapshot().sync).toMatchObject({ waitingEntries: 1, refusedEntries: 0 });
+
+    // Negative control: with a server that takes anybody's entries, it is seen in whose session they came.
+    server.flaws.takesFromAnybody = true;
+    await tab.syncNow();
+    expect(server.sentBy.get(entry.id)).toBe(ben.id);
+    await phone.kill();
+  });
+
+  it('never records in the name of the next person what was entered on the last one’s screen (SPEC 31)', async () => {
+    const { phone, tab } = await sharedTablet();
+    const second = await phone.tab();
+    const outcomes = new Set<string>();
+    for (let steps = 0; steps < 40; steps += 1) {
+      await tab.openPerson(ada.id, '2580');
+      await settle();
+      expect(second.snapshot().person?.id).toBe(ada.id);
+      await tab.openPerson(ben.id, '7391');
+      for (let step = 0; step < steps; step += 1) await new Promise((done) => setImmediate(done));
+      const shown = second.snapshot().person?.id;
+      const by = await second.record(at, 'note', note('on the screen')).then(
+        (entry) => entry.authorId,
+        () => 'nobody',
+      );
+      expect([shown, 'nobody']).toContain(by);
+      outcomes.add(by);
+      await settle();
+    }
+    expect(outcomes.size).toBeGreaterThan(1);
+    await phone.kill();
+  });
+
+  it('leaves the device to who opened it by PIN when somebody’s session comes up, through a reload (SPEC 33)', async () => {
+    const { phone, server, straight, clock } = await sharedTablet();
+    await phone.kill();
+    let noted: string | null = null;
+    const tabNote = { read: () => noted, write: (personId: string) => void (noted = personId) };
+    const tab = await phone.tab({ tabNote });
+    await tab.openPerson(ada.id, '2580');
+    phone.line = straight;
+    server.session = ben;
+    clock.advance(31_000);
+    await tab.syncNow();
+    expect(tab.snapshot()).toMatchObject({ person: { id: ada.id }, sync: { signedInAs: 'Ben' } });
+    await phone.kill();
+    const reloaded = await phone.tab({ tabNote });
+    expect(reloaded.snapshot().person?.id).toBe(ada.id);
     await phone.kill();
   });
 
