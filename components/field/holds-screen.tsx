@@ -57,6 +57,7 @@ const correctable: readonly Hold['kind'][] = [
   'cover-not-met',
   'effective-depth',
   'measurement-out',
+  'bar-departs',
   'check-not-met',
   'nonconformance-open',
 ];
@@ -100,7 +101,6 @@ const wrong: readonly Hold['kind'][] = [
   ...correctable,
   'conflict',
   'superseded-drawing',
-  'bar-departs',
   'manual',
   'update-needed',
 ];

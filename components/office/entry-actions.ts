@@ -101,6 +101,7 @@ export function correctionAction(holds: readonly Hold[], plan: Plan): EntryActio
         'cover-not-met',
         'check-not-met',
         'measurement-out',
+        'bar-departs',
         'nonconformance-open',
         'recheck-awaited',
       ].includes(hold.kind),

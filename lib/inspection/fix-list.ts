@@ -27,6 +27,8 @@ function whatOf(sheet: Sheet, hold: Hold): What | null {
       return depthFix(sheet, hold);
     case 'measurement-out':
       return measurementFix(sheet, first);
+    case 'bar-departs':
+      return hold.subjects[0]?.kind === 'measurement' ? measurementFix(sheet, first) : null;
     case 'check-not-met':
       return checkFix(sheet, first);
     case 'nonconformance-open':

@@ -11,6 +11,7 @@ import { enqueueJob, type MailPayload } from './jobs/enqueue-job';
 const news: ReadonlySet<Hold['kind']> = new Set([
   'cover-not-met',
   'measurement-out',
+  'bar-departs',
   'check-not-met',
   'conflict',
   'nonconformance-open',

@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
+import { correctionAction } from '@/components/office/entry-actions';
 import type { BodyOf } from '@/lib/inspection/entry';
 import { siteBodies } from '@/lib/inspection/entry-bodies';
+import { fixList } from '@/lib/inspection/fix-list';
 import { holds } from '@/lib/inspection/holds';
 import { judgeMeasured } from '@/lib/inspection/judge-measured';
 import { measuredText } from '@/lib/inspection/measured-words';
@@ -355,6 +357,27 @@ describe('every measurement that a plan can ask for', () => {
         expect(measuredText(value)).not.toMatch(/NaN|undefined|null/);
       }
     });
+  });
+});
+
+describe('what is out of limits', () => {
+  it.each(rules)('%s: is on the fix list, and its correction can be reported from the office', (rule) => {
+    const { plan, item } = planMeasuring(cases[rule].rule);
+    const story = new PourStory();
+    story.tells('inspector', 'measurement', {
+      itemId: item.id,
+      place: 'grid 3',
+      stage: 'single',
+      value: cases[rule].bad,
+      measuredAt: story.now,
+    });
+    const sheet = foldSheet(plan, story.recorded);
+    const standing = holds(sheet, story.now);
+    expect(fixList(sheet, standing).map((one) => one.about)).toContainEqual({
+      kind: 'measurement',
+      id: item.id,
+    });
+    expect(correctionAction(standing, plan)).not.toBeNull();
   });
 });
 
