@@ -1,16 +1,22 @@
-import { finite } from '@/lib/concrete/check-input';
+import { ConcreteError } from '@/lib/concrete/concrete-error';
 
 /** 1 psi in MPa: 1 lbf = 4.4482216152605 N and 1 in = 25.4 mm, both exact. */
 export const MPA_PER_PSI = 4.4482216152605 / (25.4 * 25.4);
 
-/** Pounds per square inch to megapascals. */
-export function psiToMPa(psi: number): number {
-  return finite('psi', psi) * MPA_PER_PSI;
+/** A conversion keeps what it is given, however large: whether it can be computed with is for the computation to say. */
+function converted(field: string, value: number): number {
+  if (!Number.isFinite(value)) throw new ConcreteError(field, 'It has to be a number.');
+  return value;
 }
 
-/** Megapascals to pounds per square inch. */
+/** Pounds per square inch to megapascals. @throws ConcreteError where it is no number */
+export function psiToMPa(psi: number): number {
+  return converted('psi', psi * MPA_PER_PSI);
+}
+
+/** Megapascals to pounds per square inch. @throws ConcreteError where it is no number */
 export function mpaToPsi(mpa: number): number {
-  return finite('MPa', mpa) / MPA_PER_PSI;
+  return converted('MPa', mpa / MPA_PER_PSI);
 }
 
 /** Feet to millimetres, exact. */
