@@ -1,5 +1,8 @@
+import type { Metadata } from 'next';
 import { connection } from 'next/server';
 import { notFound } from 'next/navigation';
+
+export const metadata: Metadata = { title: 'Not here' };
 
 /**
  * Whatever no other page answers to. It is drawn for each request, so that the page that says so gets the nonce of its
