@@ -1,15 +1,6 @@
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { FROM_MEMORY } from '@/lib/concrete/trail-source';
-import type { Provenance, TrailStep } from '@/lib/concrete/trail';
-
-const provenanceWords: Record<Provenance, string> = {
-  contract: 'contract documents',
-  seen: 'text seen',
-  'partly-seen': 'text partly seen',
-  memory: 'from memory',
-  computed: 'computed',
-  'common-practice': 'common practice',
-};
+import { provenanceWords, type TrailStep } from '@/lib/concrete/trail';
 
 /** Said wherever a number rests on what nobody could look up. */
 export function EditionMark() {

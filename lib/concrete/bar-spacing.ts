@@ -1,7 +1,7 @@
 import { listOf, notNegative, positive, unknownChoice, whole } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { MM_PER_INCH } from '@/lib/concrete/length';
+import { formatLength, MM_PER_INCH, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
@@ -28,6 +28,7 @@ function greatest(terms: readonly Term[]): Term {
  * - ACI 318-19 25.2.1: bars of a layer max(1 in, db, 4/3 aggregate); 25.2.2: between layers 1 in; 25.2.3: columns
  *   max(1.5 in, 1.5 db, 4/3 aggregate).
  * - EN 1992-1-1 8.2(2): max(k1 φ, dg + k2, 20 mm), with k1 = 1 and k2 = 5 mm unless the national annex says otherwise.
+ * @param query.showIn unit of the trail's lengths
  * @throws ConcreteError where bar or aggregate is no positive number
  */
 export function leastClearDistance(query: {
@@ -37,9 +38,11 @@ export function leastClearDistance(query: {
   aggregateMm: number;
   k1?: number;
   k2Mm?: number;
+  showIn?: LengthUnit;
 }): { leastMm: number; governs: string; trail: TrailStep[] } {
   const bar = positive('bar diameter', query.diameterMm);
   const aggregate = positive('largest aggregate', query.aggregateMm);
+  const showIn = query.showIn ?? 'mm';
   switch (query.basis) {
     case 'aci-318-19': {
       if (query.place === 'between-layers') {
@@ -50,13 +53,18 @@ export function leastClearDistance(query: {
       }
       const column = query.place === 'column';
       const factor = column ? 1.5 : 1;
-      const inches = column ? '1.5 in' : '1 in';
+      const inches = column ? '1 1/2 in' : '1 in';
       const terms = [
         { name: inches, mm: factor * MM_PER_INCH },
         { name: column ? '1.5 db' : 'db', mm: factor * bar },
         { name: '4/3 aggregate', mm: (4 / 3) * aggregate },
       ];
-      return answer(terms, aciClear, column ? 'Columns: greatest of' : 'Bars of a layer: greatest of');
+      return answer(
+        terms,
+        aciClear,
+        column ? 'Columns: greatest of' : 'Bars of a layer: greatest of',
+        showIn,
+      );
     }
     case 'en-1992-1-1': {
       const k1 = positive('k1', query.k1 ?? 1);
@@ -66,21 +74,29 @@ export function leastClearDistance(query: {
         { name: `dg + ${numberText(k2)} mm`, mm: aggregate + k2 },
         { name: '20 mm', mm: 20 },
       ];
-      return answer(terms, enClear, 'Clear distance: greatest of');
+      return answer(terms, enClear, 'Clear distance: greatest of', showIn);
     }
     default:
       throw unknownChoice('basis', query.basis);
   }
 }
 
-function answer(terms: readonly Term[], source: ReturnType<typeof trailSource>, rule: string) {
+function answer(
+  terms: readonly Term[],
+  source: ReturnType<typeof trailSource>,
+  rule: string,
+  showIn: LengthUnit,
+) {
   const governing = greatest(terms);
-  const shown = terms.map((term) => `${term.name} = ${numberText(term.mm, 3)} mm`).join('; ');
+  const shown = terms.map(({ name, mm }) => termText(name, withUnit(mm, showIn))).join('; ');
   const trail = [
     source(`${rule} ${terms.map((term) => term.name).join(', ')}`, `${shown}; ${governing.name} governs`),
   ];
   return { leastMm: governing.mm, governs: governing.name, trail };
 }
+
+/** A term with its value, unless its name is the value already. */
+const termText = (name: string, value: string): string => (name === value ? name : `${name} = ${value}`);
 
 /** Clear distances, each gap by itself: one narrow gap is not mended by a wide one beside it. */
 export function judgeClearDistances(
@@ -97,7 +113,12 @@ export function judgeClearDistances(
  * Bars that a bay needs at a spacing: one more than the whole gaps it takes to cross the bay between the first and the
  * last bar. Lengths in mm.
  */
-export function barsAcrossBay(bay: { widthMm: number; firstBarFromEdgeMm: number; spacingMm: number }): {
+export function barsAcrossBay(bay: {
+  widthMm: number;
+  firstBarFromEdgeMm: number;
+  spacingMm: number;
+  showIn?: LengthUnit;
+}): {
   count: number;
   trail: TrailStep[];
 } {
@@ -108,7 +129,8 @@ export function barsAcrossBay(bay: { widthMm: number; firstBarFromEdgeMm: number
   if (run < 0)
     throw new ConcreteError('first bar from the edge', 'Twice this is more than the width of the bay.');
   const count = Math.ceil(run / spacing - 1e-9) + 1;
-  const value = `(${numberText(width)} − 2 × ${numberText(edge)}) / ${numberText(spacing)}, up, + 1 = ${count}`;
+  const shown = (mm: number) => formatLength(mm, bay.showIn ?? 'mm');
+  const value = `(${shown(width)} − 2 × ${shown(edge)}) / ${shown(spacing)}, up, + 1 = ${count}`;
   return { count, trail: [arithmetic('Bars across the bay = gaps needed, rounded up, + 1', value)] };
 }
 
@@ -123,19 +145,20 @@ export function judgeBarCount(counted: number, specified: number): LimitFinding 
 }
 
 /** The mean spacing over several gaps, from one tape length between the same edges of the first and the last bar. */
-export function spacingOverGaps(run: { overallMm: number; gaps: number }): {
+export function spacingOverGaps(run: { overallMm: number; gaps: number; showIn?: LengthUnit }): {
   spacingMm: number;
   trail: TrailStep[];
 } {
   const overall = positive('length over the gaps', run.overallMm);
   const gaps = whole('number of gaps', run.gaps, 1);
   const spacingMm = overall / gaps;
+  const showIn = run.showIn ?? 'mm';
   return {
     spacingMm,
     trail: [
       arithmetic(
         'Spacing = length between the same edges of first and last bar / gaps',
-        `${numberText(overall, 3)} / ${gaps} = ${numberText(spacingMm, 3)} mm`,
+        `${formatLength(overall, showIn)} / ${gaps} = ${withUnit(spacingMm, showIn)}`,
       ),
     ],
   };
@@ -205,7 +228,12 @@ const MOST_SPACING: Record<
  * Shrinkage and temperature steel takes 5 h, not the 3 h that is often quoted with it.
  * @throws ConcreteError where the basis has no row for that use
  */
-export function greatestSpacing(query: { basis: SpacingBasis; use: SpacingUse; thicknessMm: number }): {
+export function greatestSpacing(query: {
+  basis: SpacingBasis;
+  use: SpacingUse;
+  thicknessMm: number;
+  showIn?: LengthUnit;
+}): {
   mostMm: number;
   trail: TrailStep[];
 } {
@@ -215,10 +243,14 @@ export function greatestSpacing(query: { basis: SpacingBasis; use: SpacingUse; t
   const mostMm = Math.min(row.times * thickness, row.capMm);
   const source = query.basis === 'aci-318-19' ? aciMost : enMost;
   const rule = `Spacing at most the lesser of ${row.times} h and ${row.cap}`;
-  return { mostMm, trail: [source(rule, `h = ${numberText(thickness)} mm: ${numberText(mostMm, 2)} mm`)] };
+  const showIn = query.showIn ?? 'mm';
+  return {
+    mostMm,
+    trail: [source(rule, `h = ${withUnit(thickness, showIn)}: ${withUnit(mostMm, showIn)}`)],
+  };
 }
 
 /** The spacing typed from the drawing, kept as the plan's own step. */
-export function specifiedSpacingStep(spacingMm: number): TrailStep {
-  return fromContract('Specified spacing', `${numberText(positive('specified spacing', spacingMm), 3)} mm`);
+export function specifiedSpacingStep(spacingMm: number, showIn: LengthUnit = 'mm'): TrailStep {
+  return fromContract('Specified spacing', withUnit(positive('specified spacing', spacingMm), showIn));
 }

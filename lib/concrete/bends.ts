@@ -1,7 +1,7 @@
 import { positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { atMost, MM_PER_INCH } from '@/lib/concrete/length';
+import { atMost, formatLength, MM_PER_INCH, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { trailSource } from '@/lib/concrete/trail-source';
@@ -31,7 +31,13 @@ function aciFactor(use: BendUse, number: number): number {
  * - EN 1992-1-1 Table 8.1N: 4 φ to 16 mm, 7 φ above; the concrete inside the bend (8.3) is the designer's check.
  * - BS 8666 Table 2, from memory: radius 2 d to 16 mm and 3.5 d above, cut to whole mm.
  */
-export function leastBendDiameter(query: { basis: BendBasis; use: BendUse; diameterMm: number }): {
+export function leastBendDiameter(query: {
+  basis: BendBasis;
+  use: BendUse;
+  diameterMm: number;
+  /** Unit of the trail where the basis is ACI 318-19; the others are metric. */
+  showIn?: LengthUnit;
+}): {
   leastMm: number;
   factor: number;
   trail: TrailStep[];
@@ -42,7 +48,8 @@ export function leastBendDiameter(query: { basis: BendBasis; use: BendUse; diame
       const factor = aciFactor(query.use, usBarNumber(diameter));
       const leastMm = factor * diameter;
       const source = query.use === 'main' ? aciMainDiameter : aciTieDiameter;
-      const value = `${factor} × ${numberText(diameter, 3)} = ${numberText(leastMm, 2)} mm`;
+      const showIn = query.showIn ?? 'mm';
+      const value = `${factor} × ${formatLength(diameter, showIn)} = ${withUnit(leastMm, showIn)}`;
       return {
         leastMm,
         factor,
@@ -94,7 +101,12 @@ export type HookAngle = 90 | 135 | 180;
  * max(4 db, 2.5 in); ties 90° max(6 db, 3 in) to #5 and 12 db from #6 to #8, 135° max(6 db, 3 in), 180° max(4 db, 2.5 in).
  * @throws ConcreteError for a main bar at 135°, which is no standard hook
  */
-export function hookExtension(query: { use: BendUse; angle: HookAngle; diameterMm: number }): {
+export function hookExtension(query: {
+  use: BendUse;
+  angle: HookAngle;
+  diameterMm: number;
+  showIn?: LengthUnit;
+}): {
   leastMm: number;
   trail: TrailStep[];
 } {
@@ -109,7 +121,9 @@ export function hookExtension(query: { use: BendUse; angle: HookAngle; diameterM
     const rule = inches > 0 ? `greater of ${times} db and ${numberText(inches)} in` : `${times} db`;
     return {
       leastMm,
-      trail: [source(`Extension of a ${query.angle}° hook: ${rule}`, `${numberText(leastMm, 1)} mm`)],
+      trail: [
+        source(`Extension of a ${query.angle}° hook: ${rule}`, withUnit(leastMm, query.showIn ?? 'mm')),
+      ],
     };
   };
   switch (query.angle) {

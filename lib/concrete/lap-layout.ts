@@ -9,7 +9,7 @@ import {
 } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { atMost, type LengthUnit } from '@/lib/concrete/length';
+import { atMost, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { trailSource } from '@/lib/concrete/trail-source';
@@ -107,6 +107,7 @@ export function shareLapped(query: {
   lapCentresMm: readonly number[];
   bars: number;
   lapMm: number;
+  showIn?: LengthUnit;
 }): { share: number; lappedTogether: number; fromMm: number | null; trail: TrailStep[] } {
   const bars = whole('bars', query.bars, 1);
   const lap = positive('lap length', query.lapMm);
@@ -123,14 +124,18 @@ export function shareLapped(query: {
       fromMm = start;
     }
   }
-  const value = `${lappedTogether} of ${bars} bars within ${numberText(windowMm, 1)} mm`;
+  const value = `${lappedTogether} of ${bars} bars within ${withUnit(windowMm, query.showIn ?? 'mm')}`;
   return { share: lappedTogether / bars, lappedTogether, fromMm, trail: [sectionStep(query.rule, value)] };
 }
 
 /** The length within which laps count as one section, mm, for a tape held along the bars. */
-export function lapSection(rule: LapSectionRule, lapMm: number): { lengthMm: number; trail: TrailStep[] } {
+export function lapSection(
+  rule: LapSectionRule,
+  lapMm: number,
+  showIn: LengthUnit = 'mm',
+): { lengthMm: number; trail: TrailStep[] } {
   const lengthMm = sectionLength(rule, positive('lap length', lapMm));
-  return { lengthMm, trail: [sectionStep(rule, `within ${numberText(lengthMm, 1)} mm`)] };
+  return { lengthMm, trail: [sectionStep(rule, `within ${withUnit(lengthMm, showIn)}`)] };
 }
 
 /** Least distance between the ends of adjacent laps along the bars: 0.3 l0 (EN 1992-1-1 8.7.2(3), from memory). */

@@ -2,7 +2,14 @@ import { checkedAlphas, enBasicAnchorage, type EnAlphas, type EnBond } from '@/l
 import { between, finite, given, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import type { DevelopmentLength } from '@/lib/concrete/development';
-import { atLeast, atMost, MM_PER_INCH } from '@/lib/concrete/length';
+import {
+  atLeast,
+  atMost,
+  lengthArithmetic,
+  MM_PER_INCH,
+  withUnit,
+  type LengthUnit,
+} from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import { mpaToPsi } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
@@ -16,11 +23,11 @@ export interface RequiredLap {
 }
 
 /** The lap length typed from the drawing; it governs over every computed one. */
-export function typedLap(lengthMm: number): RequiredLap {
+export function typedLap(lengthMm: number, showIn: LengthUnit = 'mm'): RequiredLap {
   const length = positive('lap length on the drawing', lengthMm);
   return {
     lengthMm: length,
-    trail: [fromContract('Lap length on the drawing', `${numberText(length, 3)} mm`)],
+    trail: [fromContract('Lap length on the drawing', withUnit(length, showIn))],
   };
 }
 
@@ -231,10 +238,11 @@ export type LapToleranceRule = 'none' | 'aci-117-10' | 'en-13670' | { minusMm: n
  */
 export function lapTolerance(
   rule: LapToleranceRule,
-  bar: { diameterMm: number; requiredMm: number },
+  bar: { diameterMm: number; requiredMm: number; showIn?: LengthUnit },
 ): { minusMm: number; leastMm: number; trail: TrailStep[] } {
   const required = positive('lap length', bar.requiredMm);
   const diameter = positive('bar diameter', bar.diameterMm);
+  const showIn = bar.showIn ?? 'mm';
   const answer = (minusMm: number, step: TrailStep) => {
     if (finite('lap tolerance', minusMm) < 0)
       throw new ConcreteError('lap tolerance', 'It may not be below zero.');
@@ -242,12 +250,12 @@ export function lapTolerance(
     const leastMm = required - minusMm;
     const least = arithmetic(
       'Least accepted lap',
-      `${numberText(required, 1)} − ${numberText(minusMm, 1)} mm`,
+      lengthArithmetic([required, minusMm], '−', leastMm, showIn),
     );
     return { minusMm, leastMm, trail: [step, least] };
   };
   if (typeof rule === 'object') {
-    return answer(rule.minusMm, fromContract('Lap tolerance', `−${numberText(rule.minusMm)} mm`));
+    return answer(rule.minusMm, fromContract('Lap tolerance', `−${withUnit(rule.minusMm, showIn)}`));
   }
   switch (rule) {
     case 'none':

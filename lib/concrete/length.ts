@@ -259,6 +259,16 @@ export function withUnit(mm: number, unit: LengthUnit, beside?: number): string 
   return `${formatLength(mm, unit, beside)} ${unit}`;
 }
 
+/** Arithmetic on lengths as a trail shows it, in one unit: `12 − 1 3/4 − 5/8 = 9 5/8 in`. */
+export function lengthArithmetic(
+  terms: readonly number[],
+  sign: '+' | '−',
+  resultMm: number,
+  unit: LengthUnit,
+): string {
+  return `${terms.map((term) => formatLength(term, unit)).join(` ${sign} `)} = ${withUnit(resultMm, unit)}`;
+}
+
 export interface TapeMark {
   mm: number;
   /** Inches as a tape shows them: `1 7/16`. */

@@ -1,6 +1,6 @@
 import { between, finite, notNegative, positive } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
-import { atLeast } from '@/lib/concrete/length';
+import { atLeast, formatLength, lengthArithmetic, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
@@ -33,6 +33,15 @@ function coverInputs(measuredMm: number, specifiedMm: number): EstimateInput[] {
   ];
 }
 
+/** Two lengths over each other; a fraction of an inch stands in brackets, so that one stroke divides and no other. */
+function ratioText(upperMm: number, lowerMm: number, unit: LengthUnit): string {
+  const shown = [upperMm, lowerMm].map((mm) => {
+    const text = formatLength(mm, unit);
+    return text.includes('/') ? `(${text})` : text;
+  });
+  return shown.join(' / ');
+}
+
 /**
  * Time for carbonation to reach the steel, measured against specified cover: (c/c₀)². Depth goes with the square root of
  * time, so the unknown rate drops out. Covers in mm.
@@ -40,10 +49,11 @@ function coverInputs(measuredMm: number, specifiedMm: number): EstimateInput[] {
 export function carbonationTimeRatio(
   measuredMm: number,
   specifiedMm: number,
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { ratio: number } {
   const inputs = coverInputs(measuredMm, specifiedMm);
   const ratio = (measuredMm / specifiedMm) ** 2;
-  const value = `(${numberText(measuredMm, 2)} / ${numberText(specifiedMm, 2)})² = ${numberText(ratio, 3)}`;
+  const value = `(${ratioText(measuredMm, specifiedMm, showIn)})² = ${numberText(ratio, 3)}`;
   return {
     ratio,
     formula: '(c/c₀)²',
@@ -62,6 +72,7 @@ export function chlorideTimeRatio(
   measuredMm: number,
   specifiedMm: number,
   m: number,
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { ratio: number } {
   const exponent = 2 / (1 - ageingExponent(m));
   const inputs = [...coverInputs(measuredMm, specifiedMm), { name: 'Ageing exponent m', value: m, unit: '' }];
@@ -69,8 +80,7 @@ export function chlorideTimeRatio(
   if (!Number.isFinite(ratio)) {
     throw new ConcreteError('ageing exponent m', 'It is so near to 1 that no ratio follows.');
   }
-  const base = `${numberText(measuredMm, 2)} / ${numberText(specifiedMm, 2)}`;
-  const value = `(${base})^${numberText(exponent, 3)} = ${numberText(ratio, 3)}`;
+  const value = `(${ratioText(measuredMm, specifiedMm, showIn)})^${numberText(exponent, 3)} = ${numberText(ratio, 3)}`;
   return {
     ratio,
     formula: '(c/c₀)^(2/(1−m))',
@@ -180,11 +190,13 @@ const bending = trailSource('M ≈ As fy j d with j unchanged, first order', '',
 export function effectiveDepthChange(
   plannedMm: number,
   foundMm: number,
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { changePercent: number; bendingChangePercent: number } {
   const planned = positive('planned effective depth', plannedMm);
   const found = positive('effective depth found', foundMm);
   const changePercent = (100 * (found - planned)) / planned;
-  const value = `(${numberText(found, 2)} − ${numberText(planned, 2)}) / ${numberText(planned, 2)} = ${numberText(changePercent, 2)} %`;
+  const shown = (mm: number) => formatLength(mm, showIn);
+  const value = `(${shown(found)} − ${shown(planned)}) / ${shown(planned)} = ${numberText(changePercent, 2)} %`;
   return {
     changePercent,
     bendingChangePercent: changePercent,
@@ -207,11 +219,12 @@ const enBondCover = trailSource('EN 1992-1-1, Table 4.2 (cmin,b = φ)', '2004', 
 export function coverInDiameters(
   coverMm: number,
   diameterMm: number,
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { diameters: number; enough: boolean } {
   const cover = notNegative('cover', coverMm);
   const diameter = positive('bar diameter', diameterMm);
   const enough = atLeast(cover, diameter);
-  const value = `${numberText(cover, 2)} / ${numberText(diameter, 2)} = ${numberText(cover / diameter, 3)}`;
+  const value = `${ratioText(cover, diameter, showIn)} = ${numberText(cover / diameter, 3)}`;
   return {
     diameters: cover / diameter,
     enough,
@@ -231,6 +244,7 @@ export function fireCover(
   foundMm: number,
   requiredMm: number,
   kind: 'cover' | 'axis-distance',
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { enough: boolean; shortByMm: number } {
   const found = notNegative(kind === 'cover' ? 'cover' : 'axis distance', foundMm);
   const required = positive('required for fire', requiredMm);
@@ -245,7 +259,7 @@ export function fireCover(
       { name: 'Required for fire', value: required, unit: 'mm' },
     ],
     trail: [
-      fromContract(`Required ${name} for fire, as the engineer entered it`, `${numberText(required, 2)} mm`),
+      fromContract(`Required ${name} for fire, as the engineer entered it`, withUnit(required, showIn)),
     ],
     caution: 'Compared as entered. Fire resistance is the engineer’s.',
   };
@@ -258,6 +272,7 @@ export function fireCover(
 export function predictedCover(
   readingMm: number,
   changeMm: number,
+  showIn: LengthUnit = 'mm',
 ): EstimateContext & { predictedMm: number } {
   const reading = between('reading', readingMm, 0, 1_000_000);
   const predictedMm = reading + finite('change', changeMm);
@@ -269,7 +284,7 @@ export function predictedCover(
       { name: 'Reading', value: reading, unit: 'mm' },
       { name: 'Change', value: changeMm, unit: 'mm' },
     ],
-    trail: [arithmetic('Predicted cover', `${numberText(reading, 2)} + ${numberText(changeMm, 2)} mm`)],
+    trail: [arithmetic('Predicted cover', lengthArithmetic([reading, changeMm], '+', predictedMm, showIn))],
     caution: 'A prediction, not a reading. Measure again after the work.',
   };
 }

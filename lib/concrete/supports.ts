@@ -1,6 +1,7 @@
 import { finite, given, listOf, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, worstFinding, type LimitFinding } from '@/lib/concrete/limit-verdict';
+import { formatLength, lengthArithmetic, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import { MM_PER_FOOT } from '@/lib/concrete/stress-units';
 import type { TrailStep } from '@/lib/concrete/trail';
@@ -28,6 +29,8 @@ export function supportHeight(section: {
   carried: readonly { name: string; diameterMm: number }[];
   /** What lies between the underside of the section and the foot of the support, from the bottom up. */
   standsOn: readonly { name: string; sizeMm: number }[];
+  /** Unit of the trail's lengths. */
+  showIn?: LengthUnit;
 }): { heightMm: number; parts: SectionPart[]; trail: TrailStep[] } {
   const thickness = positive('thickness', section.thicknessMm);
   const cover = notNegative('top cover', section.topCoverMm);
@@ -56,10 +59,10 @@ export function supportHeight(section: {
     fromTopMm += part.sizeMm;
   }
   const terms = [
-    numberText(thickness, 3),
-    numberText(cover, 3),
-    ...section.carried.map((bar) => numberText(bar.diameterMm, 3)),
-    ...section.standsOn.map((part) => numberText(part.sizeMm, 3)),
+    thickness,
+    cover,
+    ...section.carried.map((bar) => bar.diameterMm),
+    ...section.standsOn.map((part) => part.sizeMm),
   ];
   return {
     heightMm,
@@ -67,7 +70,7 @@ export function supportHeight(section: {
     trail: [
       arithmetic(
         'Support height = thickness − top cover − layers carried − what it stands on',
-        `${terms.join(' − ')} = ${numberText(heightMm, 3)} mm`,
+        lengthArithmetic(terms, '−', heightMm, section.showIn ?? 'mm'),
       ),
     ],
   };
@@ -81,6 +84,7 @@ export function supportHeight(section: {
 export function supportHeightLimits(
   heightMm: number,
   tolerance: { coverMinusMm: number; depthMinusMm: number },
+  showIn: LengthUnit = 'mm',
 ): { leastMm: number; mostMm: number; trail: TrailStep[] } {
   positive('support height', heightMm);
   const mostMm = heightMm + notNegative('cover tolerance', tolerance.coverMinusMm);
@@ -92,7 +96,7 @@ export function supportHeightLimits(
     trail: [
       arithmetic(
         'Least = height − what the effective depth may lose; most = height + what the cover may lose',
-        `${numberText(leastMm)} to ${numberText(mostMm)} mm`,
+        `${formatLength(leastMm, showIn)} to ${withUnit(mostMm, showIn)}`,
       ),
     ],
   };
@@ -117,6 +121,7 @@ export function supportSpacingLimit(query: {
   rule: SupportSpacingRule;
   diameterMm: number;
   planLimitMm?: number;
+  showIn?: LengthUnit;
 }): { mostMm: number; trail: TrailStep[] } {
   const diameter = positive('bar diameter', query.diameterMm);
   switch (query.rule) {
@@ -125,7 +130,10 @@ export function supportSpacingLimit(query: {
         'support spacing in the plan',
         given('support spacing in the plan', query.planLimitMm),
       );
-      return { mostMm, trail: [fromContract('Greatest support spacing', `${numberText(mostMm)} mm`)] };
+      return {
+        mostMm,
+        trail: [fromContract('Greatest support spacing', withUnit(mostMm, query.showIn ?? 'mm'))],
+      };
     }
     case 'common-practice': {
       const number = usBarNumber(diameter);

@@ -1,7 +1,7 @@
 import { between, finite, notNegative, positive, unknownChoice } from '@/lib/concrete/check-input';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { againstLimits, type LimitFinding } from '@/lib/concrete/limit-verdict';
-import { MM_PER_INCH, type LengthUnit } from '@/lib/concrete/length';
+import { formatLength, MM_PER_INCH, withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import type { TrailStep } from '@/lib/concrete/trail';
 import { arithmetic, fromContract, trailSource } from '@/lib/concrete/trail-source';
@@ -24,12 +24,13 @@ const as3600 = trailSource('AS 3600, 17.5.3(b)', '2009/2018', 'memory');
 export function tendonBand(
   rule: TendonBandRule,
   memberDepthMm: number,
+  showIn: LengthUnit = 'mm',
 ): { minusMm: number; plusMm: number; trail: TrailStep[] } {
   const depth = positive('member depth', memberDepthMm);
   if (typeof rule === 'object') {
     const minusMm = notNegative('minus tolerance', rule.minusMm);
     const plusMm = notNegative('plus tolerance', rule.plusMm);
-    const value = `−${numberText(minusMm)} / +${numberText(plusMm)} mm`;
+    const value = `−${formatLength(minusMm, showIn)} / +${withUnit(plusMm, showIn)}`;
     return { minusMm, plusMm, trail: [fromContract('Tendon height band', value)] };
   }
   switch (rule) {
@@ -64,11 +65,8 @@ export function judgeTendonHeight(
   const least = specified - notNegative('minus tolerance', planned.minusMm);
   const most = specified + notNegative('plus tolerance', planned.plusMm);
   const trail = [
-    fromContract(
-      `Height from ${planned.from} to ${planned.to} of the tendon`,
-      `${numberText(specified, 2)} mm`,
-    ),
-    arithmetic('Band', `${numberText(least, 2)} to ${numberText(most, 2)} mm`),
+    fromContract(`Height from ${planned.from} to ${planned.to} of the tendon`, withUnit(specified, unit)),
+    arithmetic('Band', `${formatLength(least, unit)} to ${withUnit(most, unit)}`),
   ];
   if (measured.from !== planned.from || measured.to !== planned.to) {
     const reason =

@@ -5,7 +5,7 @@ import {
   specifiedSpacingStep,
 } from '@/lib/concrete/bar-spacing';
 import { ConcreteError } from '@/lib/concrete/concrete-error';
-import { numberText } from '@/lib/concrete/number-text';
+import { formatLength, withUnit } from '@/lib/concrete/length';
 import { spacingTolerance } from '@/lib/concrete/spacing-tolerance';
 import { arithmetic, fromContract } from '@/lib/concrete/trail-source';
 import {
@@ -45,14 +45,14 @@ export function issueBarCount(rule: RuleOf<'bar-count'>, context: MeasurementCon
   const { widthMm, edgeMm } = rule.bay;
   const spacingMm = spacingOf(layer);
   const { count, trail } = atFields({ 'bay width': 'bayWidth', 'first bar from the edge': 'edge' }, () =>
-    barsAcrossBay({ widthMm, firstBarFromEdgeMm: edgeMm, spacingMm }),
+    barsAcrossBay({ widthMm, firstBarFromEdgeMm: edgeMm, spacingMm, showIn: context.units }),
   );
   const steps = trail.map((step) => ({ ...step, note }));
   return limits({
     kind: 'bar-count',
     quantity: 'count',
     least: count,
-    trail: [specifiedSpacingStep(spacingMm), ...steps],
+    trail: [specifiedSpacingStep(spacingMm, context.units), ...steps],
   });
 }
 
@@ -69,10 +69,10 @@ export function issueBarSpacing(rule: RuleOf<'bar-spacing'>, context: Measuremen
   const byCode = rule.use === null ? null : codeMost(rule.use, layer, context);
   const least = run - deviation.minusMm;
   const most = Math.min(run + deviation.plusMm, byCode ? rule.gaps * byCode.mostMm : Infinity);
-  const shown = (mm: number) => numberText(mm, 3);
+  const shown = (mm: number) => formatLength(mm, context.units);
   const runStep = arithmetic(
     `Over ${rule.gaps} gaps, the deviation once`,
-    `${rule.gaps} × ${shown(spacingMm)} = ${shown(run)}: ${least > 0 ? `${shown(least)} to ` : 'at most '}${shown(most)} mm`,
+    `${rule.gaps} × ${shown(spacingMm)} = ${shown(run)}: ${least > 0 ? `${shown(least)} to ` : 'at most '}${withUnit(most, context.units)}`,
   );
   if (least > most) {
     throw new ConcreteError('layerId', 'The specified spacing is more than the code lets bars be apart.');
@@ -82,18 +82,23 @@ export function issueBarSpacing(rule: RuleOf<'bar-spacing'>, context: Measuremen
     quantity: 'length',
     least: least > 0 ? least : null,
     most,
-    trail: [specifiedSpacingStep(spacingMm), ...deviation.trail, ...(byCode?.trail ?? []), runStep],
+    trail: [
+      specifiedSpacingStep(spacingMm, context.units),
+      ...deviation.trail,
+      ...(byCode?.trail ?? []),
+      runStep,
+    ],
   });
 }
 
 function spacingDeviation(
   rule: RuleOf<'bar-spacing'>,
-  { basis, element }: MeasurementContext,
+  { basis, element, units }: MeasurementContext,
   specifiedMm: number,
 ): { minusMm: number; plusMm: number; trail: TrailStep[] } {
   if (rule.ownMm) {
     const { minus, plus } = rule.ownMm;
-    const value = `−${numberText(minus, 3)} / +${numberText(plus, 3)} mm`;
+    const value = `−${formatLength(minus, units)} / +${withUnit(plus, units)}`;
     return { minusMm: minus, plusMm: plus, trail: [fromContract('Permitted deviation of spacing', value)] };
   }
   return atFields({ 'spacing deviation': 'ownPlus' }, () =>
@@ -104,10 +109,10 @@ function spacingDeviation(
 function codeMost(
   use: RuleOf<'greatest-spacing'>['use'],
   layer: Layer,
-  { element }: MeasurementContext,
+  { element, units }: MeasurementContext,
 ): { mostMm: number; trail: TrailStep[] } {
   const code = use.startsWith('slab-') ? 'en-1992-1-1' : 'aci-318-19';
-  return greatestSpacing({ basis: code, use, thicknessMm: element.thicknessMm });
+  return greatestSpacing({ basis: code, use, thicknessMm: element.thicknessMm, showIn: units });
 }
 
 /** The greatest gap between the bars of a layer, each gap by itself, by the code's own limit. */
@@ -125,7 +130,7 @@ export function issueClearDistance(
   context: MeasurementContext,
 ): IssuedLimits {
   const layer = layerOf(context, rule.layerId);
-  const { mix } = context;
+  const { mix, units } = context;
   if (!mix)
     throw new ConcreteError(
       'aggregateMm',
@@ -137,15 +142,16 @@ export function issueClearDistance(
     place: rule.place,
     diameterMm: layer.barDiameterMm,
     aggregateMm: mix.aggregateMm,
+    showIn: units,
   });
   const gap = layer.spacingMm === null ? null : layer.spacingMm - layer.barDiameterMm;
   if (gap !== null && rule.place !== 'between-layers' && gap < leastMm - 1e-6) {
     throw new ConcreteError(
       'layerId',
-      `Bars ${layer.barDesignation} at ${numberText(layer.spacingMm ?? 0, 1)} mm leave ${numberText(gap, 1)} mm between them, and ${numberText(leastMm, 1)} mm are needed: they do not fit.`,
+      `Bars ${layer.barDesignation} at ${withUnit(layer.spacingMm ?? 0, units)} leave ${withUnit(gap, units, leastMm)} between them, and ${withUnit(leastMm, units, gap)} are needed: they do not fit.`,
     );
   }
-  const aggregate = fromContract(`Largest aggregate of ${mix.name}`, `${numberText(mix.aggregateMm, 2)} mm`);
+  const aggregate = fromContract(`Largest aggregate of ${mix.name}`, withUnit(mix.aggregateMm, units));
   return limits({
     kind: 'clear-distance',
     quantity: 'length',

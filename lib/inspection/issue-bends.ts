@@ -8,7 +8,7 @@ const fields = { 'bar diameter': 'layerId', 'hook angle': 'angle' };
 export function issueBend(rule: RuleOf<'bend-diameter'>, context: MeasurementContext): IssuedLimits {
   const { barDiameterMm } = layerOf(context, rule.layerId);
   const { leastMm, trail } = atFields(fields, () =>
-    leastBendDiameter({ basis: rule.code, use: rule.use, diameterMm: barDiameterMm }),
+    leastBendDiameter({ basis: rule.code, use: rule.use, diameterMm: barDiameterMm, showIn: context.units }),
   );
   return limits({ kind: 'bend-diameter', quantity: 'length', least: leastMm, trail });
 }
@@ -17,7 +17,7 @@ export function issueBend(rule: RuleOf<'bend-diameter'>, context: MeasurementCon
 export function issueHook(rule: RuleOf<'hook-extension'>, context: MeasurementContext): IssuedLimits {
   const { barDiameterMm } = layerOf(context, rule.layerId);
   const { leastMm, trail } = atFields(fields, () =>
-    hookExtension({ use: rule.use, angle: rule.angle, diameterMm: barDiameterMm }),
+    hookExtension({ use: rule.use, angle: rule.angle, diameterMm: barDiameterMm, showIn: context.units }),
   );
   return limits({ kind: 'hook-extension', quantity: 'length', least: leastMm, trail });
 }

@@ -17,6 +17,7 @@ import {
   typedLap,
   type RequiredLap,
 } from '@/lib/concrete/laps';
+import { lengthArithmetic, withUnit } from '@/lib/concrete/length';
 import { numberText } from '@/lib/concrete/number-text';
 import { arithmetic, fromContract } from '@/lib/concrete/trail-source';
 import {
@@ -66,7 +67,7 @@ function requiredLap(length: LapBy, layer: Layer, context: MeasurementContext): 
     throw new ConcreteError('lengthBy', 'Laps of FRP bars are not computed here: enter the drawing’s.');
   switch (length.by) {
     case 'typed':
-      return typedLap(length.lengthMm);
+      return typedLap(length.lengthMm, context.units);
     case 'aci-tension':
       return aciTension(length, layer, context);
     case 'aci-compression':
@@ -121,7 +122,7 @@ function aciTension(
   };
   const between = arithmetic(
     'Clear spacing = spacing − bar',
-    `${numberText(spacingOf(layer), 3)} − ${numberText(diameterMm, 3)} = ${numberText(clearSpacingMm, 3)} mm`,
+    lengthArithmetic([spacingOf(layer), diameterMm], '−', clearSpacingMm, context.units),
   );
   const development =
     length.equation === 'simple'
@@ -144,8 +145,7 @@ function coverToLayer(layer: Layer, context: MeasurementContext) {
   const mm = outside.reduce((sum, other) => sum + other.barDiameterMm, requirement.specifiedMm);
   const terms = [requirement.specifiedMm, ...outside.map((other) => other.barDiameterMm)];
   const rule = `Clear cover of ${layer.name} = specified cover of ${faceName}${outside.length > 0 ? ' + layers outside it' : ''}`;
-  const value = `${terms.map((term) => numberText(term, 3)).join(' + ')} = ${numberText(mm, 3)} mm`;
-  return { mm, trail: [arithmetic(rule, value)] };
+  return { mm, trail: [arithmetic(rule, lengthArithmetic(terms, '+', mm, context.units))] };
 }
 
 const byBasis: Partial<Record<MeasurementContext['basis'], 'aci-117-10' | 'en-13670'>> = {
@@ -159,7 +159,7 @@ function toleranceOf(
   layer: Layer,
   requiredMm: number,
 ) {
-  const bar = { diameterMm: layer.barDiameterMm, requiredMm };
+  const bar = { diameterMm: layer.barDiameterMm, requiredMm, showIn: context.units };
   if (rule.tolerance === 'own') {
     if (rule.ownMinusMm === null)
       throw new ConcreteError('ownMinus', 'Enter how much shorter the contract lets it be.', 'absent');
@@ -177,14 +177,14 @@ export function issueStagger(rule: RuleOf<'lap-stagger'>, context: MeasurementCo
       ? enLeastStagger(rule.lapMm)
       : {
           leastMm: rule.leastMm,
-          trail: [fromContract('Least stagger of neighbouring laps', `${numberText(rule.leastMm, 3)} mm`)],
+          trail: [fromContract('Least stagger of neighbouring laps', withUnit(rule.leastMm, context.units))],
         };
   return limits({ kind: 'lap-stagger', quantity: 'length', least: leastMm, trail });
 }
 
 /** Share of the bars lapped in one section. */
-export function issueShareLapped(rule: RuleOf<'share-lapped'>): IssuedLimits {
-  const { trail } = lapSection(rule.code, rule.lapMm);
+export function issueShareLapped(rule: RuleOf<'share-lapped'>, { units }: MeasurementContext): IssuedLimits {
+  const { trail } = lapSection(rule.code, rule.lapMm, units);
   const most = fromContract('Bars lapped in one section, at most', `${numberText(rule.mostPercent, 2)} %`);
   return limits({ kind: 'share-lapped', quantity: 'part', most: rule.mostPercent, trail: [...trail, most] });
 }
@@ -209,7 +209,7 @@ export function issueCoupler(rule: RuleOf<'coupler'>): IssuedLimits {
 export function issueEmbedment(rule: RuleOf<'embedment'>, context: MeasurementContext): IssuedLimits {
   const layer = layerOf(context, rule.layerId);
   const tolerance = atFields(fields, () => toleranceOf(rule, context, layer, rule.lengthMm));
-  const length = fromContract('Embedded length on the drawing', `${numberText(rule.lengthMm, 3)} mm`);
+  const length = fromContract('Embedded length on the drawing', withUnit(rule.lengthMm, context.units));
   return limits({
     kind: 'embedment',
     quantity: rule.starter ? 'starter' : 'length',

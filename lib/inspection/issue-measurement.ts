@@ -1,4 +1,5 @@
 import { ConcreteError } from '@/lib/concrete/concrete-error';
+import { formatLength, type LengthUnit } from '@/lib/concrete/length';
 import { fromContract } from '@/lib/concrete/trail-source';
 import {
   issueBarSize,
@@ -36,7 +37,7 @@ export function issueMeasurement(item: MeasurementInput, context: MeasurementCon
 function limitsOf({ rule }: MeasurementInput, context: MeasurementContext): IssuedLimits {
   switch (rule.rule) {
     case 'typed':
-      return issueTyped(rule);
+      return issueTyped(rule, context.units);
     case 'bar-size':
       return issueBarSize(rule, context);
     case 'bar-count':
@@ -58,7 +59,7 @@ function limitsOf({ rule }: MeasurementInput, context: MeasurementContext): Issu
     case 'lap-stagger':
       return issueStagger(rule, context);
     case 'share-lapped':
-      return issueShareLapped(rule);
+      return issueShareLapped(rule, context);
     case 'coupler':
       return issueCoupler(rule);
     case 'embedment':
@@ -80,7 +81,7 @@ function limitsOf({ rule }: MeasurementInput, context: MeasurementContext): Issu
   }
 }
 
-function issueTyped(rule: RuleOf<'typed'>): IssuedLimits {
+function issueTyped(rule: RuleOf<'typed'>, units: LengthUnit): IssuedLimits {
   const { kind, quantity, least, most, expected } = rule;
   if (quantity === 'designation') {
     if (!expected) throw new ConcreteError('expected', 'Write the bar that is planned.', 'absent');
@@ -93,13 +94,15 @@ function issueTyped(rule: RuleOf<'typed'>): IssuedLimits {
   }
   if (least !== null && most !== null && least > most)
     throw new ConcreteError('most', 'The most accepted is less than the least accepted.');
-  const trail = [fromContract('Limits typed for this plan', typedWords(rule))];
+  const trail = [fromContract('Limits typed for this plan', typedWords(rule, units))];
   return { kind, quantity, least, most, expected, trail };
 }
 
-function typedWords({ quantity, least, most, expected }: RuleOf<'typed'>): string {
+function typedWords({ quantity, least, most, expected }: RuleOf<'typed'>, units: LengthUnit): string {
   if (expected) return expected;
-  const unit = quantity === 'length' ? ' mm' : quantity === 'share' ? ' %' : '';
-  if (least !== null && most !== null) return `${least} to ${most}${unit}`;
-  return least === null ? `at most ${most}${unit}` : `at least ${least}${unit}`;
+  const unit = quantity === 'length' ? ` ${units}` : quantity === 'share' ? ' %' : '';
+  const shown = (limit: number) => (quantity === 'length' ? formatLength(limit, units) : String(limit));
+  if (least !== null && most !== null) return `${shown(least)} to ${shown(most)}${unit}`;
+  if (least !== null) return `at least ${shown(least)}${unit}`;
+  return most === null ? '' : `at most ${shown(most)}${unit}`;
 }

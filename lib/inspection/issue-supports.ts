@@ -1,6 +1,6 @@
 import { ConcreteError } from '@/lib/concrete/concrete-error';
 import { supportHeight, supportHeightLimits, supportSpacingLimit } from '@/lib/concrete/supports';
-import { numberText } from '@/lib/concrete/number-text';
+import { formatLength, lengthArithmetic, withUnit } from '@/lib/concrete/length';
 import { tendonBand } from '@/lib/concrete/tendons';
 import {
   intersectionsPerSquareMetre,
@@ -47,17 +47,19 @@ export function issueSupportHeight(
         ? [{ name: 'What else it stands on', sizeMm: rule.standsOn.otherMm }]
         : []),
     ],
+    showIn: context.units,
   });
   const depth = depthMinus(rule, context, top.requirement.depth);
   const found = atFields({ 'effective depth tolerance': 'ownMinus' }, () =>
-    supportHeightLimits(height.heightMm, {
-      coverMinusMm: specifiedMm - leastAcceptedMm,
-      depthMinusMm: depth.minusMm,
-    }),
+    supportHeightLimits(
+      height.heightMm,
+      { coverMinusMm: specifiedMm - leastAcceptedMm, depthMinusMm: depth.minusMm },
+      context.units,
+    ),
   );
   const cover = arithmetic(
     `What the cover of ${top.faceName} may lose: specified less least accepted`,
-    `${numberText(specifiedMm, 3)} − ${numberText(leastAcceptedMm, 3)} = ${numberText(specifiedMm - leastAcceptedMm, 3)} mm`,
+    lengthArithmetic([specifiedMm, leastAcceptedMm], '−', specifiedMm - leastAcceptedMm, context.units),
   );
   return limits({
     kind: 'support-height',
@@ -74,7 +76,7 @@ function depthMinus(
   judged: { minusMm: number; trail: TrailStep[] } | undefined,
 ): { minusMm: number; trail: TrailStep[] } {
   if (rule.ownMinusMm !== null) {
-    const step = fromContract('What the effective depth may lose', `${numberText(rule.ownMinusMm, 3)} mm`);
+    const step = fromContract('What the effective depth may lose', withUnit(rule.ownMinusMm, units));
     return { minusMm: rule.ownMinusMm, trail: [step] };
   }
   if (judged) return judged;
@@ -104,6 +106,7 @@ export function issueSupportSpacing(
       rule: rule.by,
       diameterMm: barDiameterMm,
       ...(rule.planMm === null ? {} : { planLimitMm: rule.planMm }),
+      showIn: context.units,
     }),
   );
   const note = `Under layer ${name}. Over it fails even where the cover is met.`;
@@ -149,12 +152,13 @@ function patternOf(rule: RuleOf<'tie-share'>): TiePattern {
 /** Height of a tendon at a high or a low point, from a named surface to a named part of it, with its band. */
 export function issueTendonHeight(rule: RuleOf<'tendon-height'>, context: MeasurementContext): IssuedLimits {
   const { from, to, heightMm } = rule;
+  const { units } = context;
   if (heightMm >= context.element.thicknessMm)
     throw new ConcreteError('heightMm', 'The tendon would lie outside the member.');
   if (rule.band === 'own' && !rule.ownMm)
     throw new ConcreteError('ownPlus', 'Enter the minus and the plus of the band.', 'absent');
   const own = { minusMm: rule.ownMm?.minus ?? 0, plusMm: rule.ownMm?.plus ?? 0 };
-  const band = tendonBand(rule.band === 'own' ? own : rule.band, context.element.thicknessMm);
+  const band = tendonBand(rule.band === 'own' ? own : rule.band, context.element.thicknessMm, units);
   const words = `Height from ${from} to ${to} of the tendon`;
   return limits({
     kind: 'tendon-height',
@@ -163,11 +167,11 @@ export function issueTendonHeight(rule: RuleOf<'tendon-height'>, context: Measur
     most: heightMm + band.plusMm,
     against: { by: 'datum', from, to },
     trail: [
-      fromContract(words, `${numberText(heightMm, 2)} mm`),
+      fromContract(words, withUnit(heightMm, units)),
       ...band.trail,
       arithmetic(
         'Band',
-        `${numberText(heightMm - band.minusMm, 2)} to ${numberText(heightMm + band.plusMm, 2)} mm`,
+        `${formatLength(heightMm - band.minusMm, units)} to ${withUnit(heightMm + band.plusMm, units)}`,
       ),
     ],
   });

@@ -64,6 +64,7 @@ export const clearDistanceCalculation = defineCalculation({
       aggregateMm,
       k1: values.k1,
       k2Mm: values.k2,
+      showIn: units,
     });
     const figures: Figure[] = [
       {

@@ -37,7 +37,7 @@ function governing(values: Values, computed: ComputedLap) {
   };
   if (values.drawn === undefined)
     return { lap: computed, main, rest: [] as Figure[], warnings: [] as string[] };
-  const drawn = typedLap(values.drawn);
+  const drawn = typedLap(values.drawn, units);
   const short = !atLeast(drawn.lengthMm, computed.lengthMm);
   return {
     lap: { ...drawn, trail: [...computed.trail, ...drawn.trail] },
@@ -91,8 +91,12 @@ export const lapCalculation = defineCalculation({
     const computed = values.basis === 'en-1992' ? lapByEn(values) : lapByAci(values);
     const { lap, main, rest, warnings } = governing(values, computed);
     const bar = given('bar', values.bar);
-    const least = lapTolerance(toleranceOf(values), { diameterMm: bar.diameterMm, requiredMm: lap.lengthMm });
     const { units } = values;
+    const least = lapTolerance(toleranceOf(values), {
+      diameterMm: bar.diameterMm,
+      requiredMm: lap.lengthMm,
+      showIn: units,
+    });
     return {
       figures: [
         main,

@@ -71,7 +71,7 @@ const short = (value: number) => (value >= 100 ? numberText(value, 0) : String(N
 
 /** Time to carbonation, as a ratio and in years where a depth was seen. */
 export function carbonationEstimates(values: LowCoverValues, covers: Covers): Estimate[] {
-  const ratio = carbonationTimeRatio(covers.measuredMm, covers.specifiedMm);
+  const ratio = carbonationTimeRatio(covers.measuredMm, covers.specifiedMm, values.units);
   const first = estimateOf(
     [
       {
@@ -116,7 +116,7 @@ export function ageingOf(values: LowCoverValues): { m: number; steps: TrailStep[
 /** Time to critical chloride, as a ratio and by the error function where the engineer entered what it takes. */
 export function chlorideEstimates(values: LowCoverValues, covers: Covers): Estimate[] {
   const { m, steps } = ageingOf(values);
-  const ratio = chlorideTimeRatio(covers.measuredMm, covers.specifiedMm, m);
+  const ratio = chlorideTimeRatio(covers.measuredMm, covers.specifiedMm, m, values.units);
   const first = estimateOf(
     [
       {
@@ -186,6 +186,7 @@ export function depthEstimates(values: LowCoverValues): Estimate[] {
   const change = effectiveDepthChange(
     given('planned effective depth', values.planned),
     given('effective depth found', values.found),
+    values.units,
   );
   const signed = (percent: number) =>
     `${percent > 0 ? '+' : percent < 0 ? '−' : ''}${numberText(Math.abs(percent), 2)} %`;
@@ -213,7 +214,7 @@ export function depthEstimates(values: LowCoverValues): Estimate[] {
 /** Bond, and fire where the engineer entered what it asks for. */
 export function bondAndFire(values: LowCoverValues, covers: Covers): Estimate[] {
   const { diameterMm } = given('bar', values.bar);
-  const bond = coverInDiameters(covers.measuredMm, diameterMm);
+  const bond = coverInDiameters(covers.measuredMm, diameterMm, values.units);
   const first = estimateOf(
     [
       {
@@ -229,7 +230,7 @@ export function bondAndFire(values: LowCoverValues, covers: Covers): Estimate[] 
   if (values.fire === 'none') return [first];
   const foundMm = covers.measuredMm + (values.fire === 'cover' ? 0 : diameterMm / 2);
   const required = given('required for fire', values.fireRequired);
-  const fire = fireCover(foundMm, required, values.fire);
+  const fire = fireCover(foundMm, required, values.fire, values.units);
   const found = estimateOf(
     [
       {

@@ -125,7 +125,7 @@ export const supportHeightCalculation = defineCalculation({
   compute: (values) => {
     const section = sectionOf(values);
     const { units } = values;
-    const found = supportHeight(section);
+    const found = supportHeight({ ...section, showIn: units });
     const trail = [...found.trail];
     const figures: Figure[] = [
       {
@@ -137,10 +137,14 @@ export const supportHeightCalculation = defineCalculation({
       },
     ];
     if (values.limits === 'typed') {
-      const limits = supportHeightLimits(found.heightMm, {
-        coverMinusMm: given('cover tolerance', values.coverMinus),
-        depthMinusMm: given('effective depth tolerance', values.depthMinus),
-      });
+      const limits = supportHeightLimits(
+        found.heightMm,
+        {
+          coverMinusMm: given('cover tolerance', values.coverMinus),
+          depthMinusMm: given('effective depth tolerance', values.depthMinus),
+        },
+        units,
+      );
       trail.push(...limits.trail);
       figures.push(
         { id: 'least', label: 'Least accepted height', ...lengthTexts(limits.leastMm, units) },
@@ -153,6 +157,7 @@ export const supportHeightCalculation = defineCalculation({
         // The supports carry the lower bars; where there are none, the upper ones.
         diameterMm: given('bar diameter', values.lower ?? values.upper).diameterMm,
         planLimitMm: values.planSpacing,
+        showIn: units,
       });
       trail.push(...spacing.trail);
       figures.push({

@@ -232,6 +232,7 @@ const calls: Record<string, Arguments[]> = {
   ],
   formatLength: [[34.925, 'in', 35]],
   withUnit: [[34.925, 'in', 35]],
+  lengthArithmetic: [[[304.8, 44.45, 15.875], '−', 244.475, 'in']],
   tapeNeighbours: [[17]],
   againstLimits: [['What', 30, { least: 20, most: 40 }, '%']],
   carbonationTimeRatio: [[30, 40]],

@@ -90,13 +90,66 @@ describe('bars', () => {
     expect(refusal(rule, { mix: null }).field).toBe('measurements.item.aggregateMm');
     const tight = refusal(rule, withLayer('b1', { spacingMm: 40 }));
     expect(tight.field).toBe('measurements.item.layerId');
-    expect(tight.reason).toContain('leave 24 mm between them, and 26.7 mm are needed: they do not fit');
+    expect(tight.reason).toContain('leave 24 mm between them, and 26.67 mm are needed: they do not fit');
   });
 
   it('greatest spacing follows the thickness and says that it is from memory', () => {
     const item = issue({ rule: 'greatest-spacing', layerId: 'b1', use: 'slab-principal-high-moment' });
     expect(item.most).toBe(250);
     expect(needsEditionCheck(item.trail)).toBe(true);
+  });
+});
+
+describe('a plan kept in inches', () => {
+  const shown = (rule: MeasurementRule, input: Partial<PlanInput> = {}) =>
+    issue(rule, { units: 'in', ...input }).trail.map((step) => step.value);
+
+  it('explains its limits in inches, and judges by the same millimetres', () => {
+    const bay = { rule: 'bar-count', layerId: 'b1', bay: { widthMm: 160 * IN, edgeMm: 3 * IN } } as const;
+    const six = withLayer('b1', { spacingMm: 6 * IN });
+    expect(shown(bay, six)).toEqual(['6 in', '(160 − 2 × 3) / 6, up, + 1 = 27']);
+    expect(issue(bay, { units: 'in', ...six }).least).toBe(issue(bay, six).least);
+    const clear = { rule: 'clear-distance', layerId: 'b1', place: 'column', code: 'aci-318-19' } as const;
+    const mix = { name: 'M', aggregateMm: 0.75 * IN };
+    expect(shown(clear, { mix } as Partial<PlanInput>)).toEqual([
+      '3/4 in',
+      '1 1/2 in; 1.5 db = 0.945 in; 4/3 aggregate = 1 in; 1 1/2 in governs',
+    ]);
+  });
+
+  it('a rule typed in inches is told in inches', () => {
+    const typed = {
+      rule: 'typed',
+      kind: 'lap-length',
+      quantity: 'length',
+      least: 24 * IN,
+      most: 30.5 * IN,
+      expected: null,
+    } as const;
+    expect(shown(typed as MeasurementRule)).toEqual(['24 to 30 1/2 in']);
+  });
+
+  it('no step of a rule that is not of a metric standard is left in millimetres', () => {
+    const rules: MeasurementRule[] = [
+      { rule: 'hook-extension', layerId: 'b1', use: 'main', angle: 180 },
+      { rule: 'bend-diameter', layerId: 'b1', use: 'main', code: 'aci-318-19' },
+      { rule: 'greatest-spacing', layerId: 'b1', use: 'one-way-slab' },
+      { rule: 'share-lapped', lapMm: 600, mostPercent: 50, code: 'aci-318-19' },
+      {
+        rule: 'support-height',
+        faceId: 'top',
+        carriedLayerIds: ['t1', 't2'],
+        standsOn: { faceId: 'soffit', layerIds: ['b1', 'b2'], otherMm: 0 },
+        ownMinusMm: 8,
+      },
+    ];
+    for (const rule of rules) expect(shown(rule).join('; '), rule.rule).not.toMatch(/ mm|^\d{3,}/);
+    // The control: the same plan in millimetres says so.
+    expect(
+      issue(rules[4] as MeasurementRule)
+        .trail.map((step) => step.value)
+        .join('; '),
+    ).toMatch(/ mm/);
   });
 });
 
