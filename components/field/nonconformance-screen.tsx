@@ -4,11 +4,14 @@ import { buttonClasses } from '@/components/ui/button-classes';
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { toneText } from '@/components/ui/tone';
 import { mayRecord } from '@/lib/inspection/entry-access';
+import { judgedNonconformance } from '@/lib/inspection/judged-nonconformance';
 import { ConditionCheck } from './condition-check';
+import { Disclosure } from './disclosure';
 import { EntryNotHere } from './entry-not-here';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
+import { JudgedBody } from './judged-body';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { PhotoForm } from './photo-form';
 import { PhotoTile } from './photo-tile';
@@ -61,6 +64,9 @@ export function NonconformanceScreen({ open, id }: { open: OpenSheet; id: string
               text={`${nameOf(open, state.entry.authorId)}, ${when(state.entry.recordedAt)}${state.entry.seq === null ? ', not sent yet' : ''}`}
             />
           </dl>
+          <Disclosure summary="How was this judged?" className="border-t border-rule">
+            <JudgedBody judged={judgedNonconformance(state)} />
+          </Disclosure>
           <FieldLink href={fieldPaths.entry(sheet.pourId, id)} className={buttonClasses('quiet')}>
             Ask about it, amend or withdraw it
           </FieldLink>

@@ -1,7 +1,9 @@
 import Link from 'next/link';
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { toneText } from '@/components/ui/tone';
+import { judgedNonconformance } from '@/lib/inspection/judged-nonconformance';
 import type { NonconformanceState, NonconformanceStatus } from '@/lib/inspection/sheet-types';
+import { JudgedDetails } from './judged-details';
 import { decisionWords, nonconformanceWords } from './state-words';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime, timeAway } from './project-time';
@@ -50,6 +52,7 @@ export function NonconformanceRows({
                   {decisionWords[state.disposition.body.decision]}: {state.disposition.body.reason}
                 </p>
               )}
+              <JudgedDetails about={body.title} judged={judgedNonconformance(state)} />
             </div>
             {state.withdrawn ? (
               <span className="font-label font-semibold text-pencil">withdrawn</span>

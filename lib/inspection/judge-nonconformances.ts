@@ -47,19 +47,28 @@ function conditionsOf(facts: Facts, disposition: EntryOf<'disposition'>): Condit
   }));
 }
 
+/**
+ * The correction and the recheck that carry a nonconformance on: a correction reported in sight of the decision in
+ * force, and an inspector's recheck in sight of that correction.
+ */
+export function countingWork(state: Pick<NonconformanceState, 'disposition' | 'corrections' | 'rechecks'>): {
+  correction: EntryOf<'correction'> | null;
+  recheck: EntryOf<'recheck'> | null;
+} {
+  const { disposition } = state;
+  // Work done before the decision was known does not carry out the decision.
+  const correction =
+    state.corrections.findLast((one) => disposition === null || saw(one, disposition)) ?? null;
+  const recheck =
+    correction === null
+      ? null
+      : (state.rechecks.findLast((one) => one.authorRole === 'inspector' && saw(one, correction)) ?? null);
+  return { correction, recheck };
+}
+
 function statusOf(state: Omit<NonconformanceState, 'status'>): NonconformanceStatus {
   if (state.withdrawn) return 'closed';
-  // Work done before the decision was known does not carry out the decision.
-  const corrections = state.disposition
-    ? state.corrections.filter(
-        (correction) => state.disposition !== null && saw(correction, state.disposition),
-      )
-    : state.corrections;
-  const lastCorrection = corrections.at(-1);
-  const lastRecheck = state.rechecks.findLast(
-    (recheck) =>
-      recheck.authorRole === 'inspector' && lastCorrection !== undefined && saw(recheck, lastCorrection),
-  );
+  const { correction: lastCorrection, recheck: lastRecheck } = countingWork(state);
   const closed = lastRecheck?.body.outcome === 'met';
   switch (state.disposition?.body.decision) {
     case 'use-as-is':

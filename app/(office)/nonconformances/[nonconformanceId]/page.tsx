@@ -10,6 +10,7 @@ import { personName } from '@/components/office/entry-words';
 import { namedSources } from '@/components/office/judged-by-name';
 import { JudgedSources } from '@/components/office/judged-sources';
 import { LivePour } from '@/components/office/live-pour';
+import { JudgedDetails } from '@/components/office/judged-details';
 import { NonconformanceStand } from '@/components/office/nonconformance-rows';
 import type { OfficeViewer } from '@/components/office/office-viewer';
 import { PageMain } from '@/components/office/page-main';
@@ -25,6 +26,7 @@ import { SheetFrame } from '@/components/ui/sheet-frame';
 import { TitleBlock } from '@/components/ui/title-block';
 import { findNonconformance, readNonconformanceList } from '@/db/read/nonconformance-list';
 import { AppError } from '@/lib/inspection/app-error';
+import { judgedNonconformance } from '@/lib/inspection/judged-nonconformance';
 import { revisionLetter } from '@/lib/inspection/revision-letter';
 import { recordId } from '@/lib/inspection/primitives';
 import { allowed } from '@/lib/server/access';
@@ -100,6 +102,7 @@ export default async function DecisionPage({ params }: { params: Promise<{ nonco
               <PrintButton />
             </div>
           </div>
+          <JudgedDetails about={body.title} judged={judgedNonconformance(state)} />
           <p>
             Raised by {personName(state.entry.authorId, viewer.people)},{' '}
             {fullTime(state.entry.recordedAt, timeZone)}
