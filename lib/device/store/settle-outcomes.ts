@@ -1,6 +1,7 @@
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { PushOutcome } from '@/lib/inspection/wire';
 import { allOrNothing } from './all-or-nothing';
+import { deleteMany, getMany } from './many-keys';
 import type { OutboxRecord, PersonDatabase, PhotoRecord, RefusedRecord } from './person-database';
 
 /** What the server's answers changed here. */
@@ -35,7 +36,10 @@ export async function settleOutcomes(
     const entries = tx.objectStore('entries');
     const photos = tx.objectStore('photos');
     const [kept, photosOf] = await Promise.all([
-      Promise.all(outcomes.map(({ id }) => entries.get(id))),
+      getMany(
+        entries,
+        outcomes.map(({ id }) => id),
+      ),
       Promise.all(
         outcomes.map(({ id }) => {
           const photoId = photoIdOf(bySent.get(id));
@@ -44,6 +48,7 @@ export async function settleOutcomes(
       ),
     ]);
     const writes: Promise<unknown>[] = [];
+    const settledIds: string[] = [];
     outcomes.forEach((outcome, index) => {
       const record = bySent.get(outcome.id);
       if (!record) return;
@@ -52,7 +57,7 @@ export async function settleOutcomes(
         return;
       }
       bySent.delete(outcome.id);
-      writes.push(tx.objectStore('outbox').delete(record.id));
+      settledIds.push(record.id);
       if (outcome.outcome === 'refused') {
         const refused: RefusedRecord = {
           id: record.id,
@@ -74,7 +79,7 @@ export async function settleOutcomes(
         return;
       }
       settled.confirmedIds.push(record.id);
-      const here = kept[index];
+      const here = kept.get(record.id);
       if (here) {
         const entry = { ...here.entry, ...outcome.receipt };
         settled.confirmed.push(entry);
@@ -86,7 +91,7 @@ export async function settleOutcomes(
         tx.objectStore('acked').put({ id: record.id, stream: record.stream, seq: outcome.receipt.seq }),
       );
     });
-    await Promise.all(writes);
+    await Promise.all([deleteMany(tx.objectStore('outbox'), settledIds), ...writes]);
   });
   return settled;
 }

@@ -4,6 +4,7 @@ import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { StoredEntry } from '@/lib/inspection/wire';
 import { allOrNothing } from './all-or-nothing';
 import { envelopeOf } from './envelope';
+import { deleteMany } from './many-keys';
 import type { CursorRecord, OutboxRecord, PersonDatabase, PhotoRecord } from './person-database';
 
 /** One page of one stream, as pulled. */
@@ -39,9 +40,10 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
     'readwrite',
   );
   return allOrNothing(tx, async () => {
-    const [before, acked, photosNamed] = await Promise.all([
+    const [before, acked, strays, photosNamed] = await Promise.all([
       tx.objectStore('cursors').get(page.stream),
-      tx.objectStore('acked').index('stream').getAll(page.stream),
+      tx.objectStore('acked').index('stream').getAllKeys(page.stream),
+      tx.objectStore('strays').getAllKeys(),
       Promise.all(
         page.entries.map((entry) => {
           const photoId = photoNamedBy(entry);
@@ -56,22 +58,20 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
       planRevision: page.plan?.revision ?? page.crewList?.planRevision ?? before?.planRevision ?? 0,
     };
     const pulled = new Set(page.entries.map((entry) => entry.id));
-    const missing = page.complete ? acked.filter((one) => !pulled.has(one.id)) : [];
-    const keptMissing = await Promise.all(missing.map((one) => tx.objectStore('entries').get(one.id)));
+    const missing = page.complete ? acked.filter((id) => !pulled.has(id)) : [];
+    const keptMissing = await Promise.all(missing.map((id) => tx.objectStore('entries').get(id)));
 
     const writes: Promise<unknown>[] = [tx.objectStore('cursors').put(cursor)];
     if (page.plan) writes.push(tx.objectStore('plans').put(page.plan));
     if (page.crewList)
       writes.push(tx.objectStore('crewLists').put({ pourId: page.stream, list: page.crewList }));
     for (const entry of page.entries) {
-      writes.push(
-        tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }),
-        tx.objectStore('strays').delete(entry.id),
-      );
+      writes.push(tx.objectStore('entries').put({ id: entry.id, stream: page.stream, entry }));
     }
-    for (const one of acked) {
-      if (pulled.has(one.id) || page.complete) writes.push(tx.objectStore('acked').delete(one.id));
-    }
+    // Set aside after a restore, and here again.
+    for (const id of strays) if (pulled.has(id)) writes.push(tx.objectStore('strays').delete(id));
+    const seen = page.complete ? acked : acked.filter((id) => pulled.has(id));
+    writes.push(deleteMany(tx.objectStore('acked'), seen));
     const offeredAgain: OutboxRecord[] = [];
     for (const kept of keptMissing) {
       if (!kept) continue;

@@ -188,6 +188,34 @@ describe('batches', () => {
     await phone.kill();
   });
 
+  it('an answer is written while the next batch is on its way, and a batch that is lost takes nothing with it', async () => {
+    const { phone, server, straight } = site();
+    const tab = await phone.tab();
+    phone.line = () => Promise.reject(new TypeError('down'));
+    for (let index = 0; index < 620; index += 1) await tab.record(at, 'note', note(`n${index}`));
+    let lose: (error: Error) => void = () => undefined;
+    let pushes = 0;
+    phone.line = (address, init) => {
+      if (!address.endsWith('/push')) return straight(address, init);
+      pushes += 1;
+      if (pushes === 1) return straight(address, init);
+      return new Promise((_answer, fail) => (lose = fail));
+    };
+    const synced = tab.syncNow();
+    await until(() => pushes === 2, 'the second batch is on its way');
+    await until(() => tab.snapshot().sync.waitingEntries === 120, 'the first answer is written');
+    lose(new TypeError('lost'));
+    await synced;
+    expect(tab.snapshot().sync).toMatchObject({ waitingEntries: 120, phase: 'offline' });
+    phone.line = straight;
+    await tab.syncNow();
+    const kept = server.entries.filter((one) => one.type === 'note');
+    expect(new Set(kept.map((one) => one.id)).size).toBe(620);
+    expect(kept).toHaveLength(620);
+    expect(tab.snapshot().sync.waitingEntries).toBe(0);
+    await phone.kill();
+  });
+
   it('one poison entry leaves the others kept, and lies in the tray with its reason (SPEC 9)', async () => {
     const { phone, server } = site();
     const tab = await phone.tab();
