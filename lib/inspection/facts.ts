@@ -73,10 +73,12 @@ function push<K, V>(map: Map<K, V[]>, key: K, value: V) {
   else map.set(key, [value]);
 }
 
-/** Typing an entry is the costly part; it depends on nothing but the entry, so each object is typed once. */
 const typed = new WeakMap<RecordedEntry, ReturnType<typeof readEntry>>();
 
-function typedOnce(recorded: RecordedEntry): ReturnType<typeof readEntry> {
+/**
+ * `readEntry`, once for each object: typing an entry is the costly part of a fold, and depends on nothing but the entry.
+ */
+export function readOnce(recorded: RecordedEntry): ReturnType<typeof readEntry> {
   const known = typed.get(recorded);
   if (known) return known;
   const read = readEntry(recorded);
@@ -87,7 +89,7 @@ function typedOnce(recorded: RecordedEntry): ReturnType<typeof readEntry> {
 /** Adds one entry to the facts. The caller adds them in the order of the record. */
 export function addFact(facts: Facts, recorded: RecordedEntry): void {
   facts.recorded.push(recorded);
-  const read = typedOnce(recorded);
+  const read = readOnce(recorded);
   if (read.kind !== 'known') {
     // What cannot be read is never dropped in silence: it becomes an "update needed" hold.
     facts.unknown.push({

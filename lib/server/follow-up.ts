@@ -1,4 +1,5 @@
-import { readEntry, type Entry } from '@/lib/inspection/entry';
+import type { Entry } from '@/lib/inspection/entry';
+import { readOnce } from '@/lib/inspection/facts';
 import type { Hold } from '@/lib/inspection/sheet-types';
 import type { SealedEntry } from '@/db/stores/entry-store';
 import { insertPhotos } from '@/db/stores/photo-store';
@@ -29,7 +30,7 @@ export async function followUp(
   newHolds: ReadonlyMap<string, readonly Hold[]>,
 ): Promise<void> {
   const entries = sealed.flatMap((one) => {
-    const read = readEntry(one);
+    const read = readOnce(one);
     return read.kind === 'known' ? [read.entry] : [];
   });
   await insertPhotos(tx, projectId, entries.flatMap(photoOf));
