@@ -1,12 +1,15 @@
 import { judgeClearDistances, leastClearDistance } from '@/lib/concrete/bar-spacing';
+import { barsInWidth } from '@/lib/concrete/bars-in-width';
 import { given } from '@/lib/concrete/check-input';
-import type { LengthUnit } from '@/lib/concrete/length';
+import { withUnit, type LengthUnit } from '@/lib/concrete/length';
 import { defineCalculation, type Figure } from '../calculation';
+import type { ValuesOf } from '../field-spec';
 import { bar, choice, length, number, unitsField } from '../fields';
 import { lengthTexts, setOutText } from '../length-text';
 
 const aci = { basis: ['aci-318-19'] };
 const en = { basis: ['en-1992'] };
+const inWidth = { layout: ['width'] };
 
 const fields = {
   units: unitsField,
@@ -34,7 +37,60 @@ const fields = {
     mostMm: 10_000,
     refusedAs: ['clear distance', 'clear distances'],
   }),
+  layout: choice(
+    'Bars in a width',
+    { none: 'not asked', width: 'of a beam or a wall end, between its ties' },
+    'none',
+  ),
+  width: length('Width', ['300', '12'], { hint: 'Of the concrete', when: inWidth }),
+  sideCover: length('Side cover', ['40', '1 1/2'], {
+    hint: 'To the ties',
+    when: inWidth,
+    refusedAs: ['side cover'],
+  }),
+  ties: bar('Ties', ['8 mm', '#3'], {
+    hint: 'Left empty: none',
+    optional: true,
+    when: inWidth,
+    refusedAs: ['tie'],
+  }),
+  bars: number('Bars in the layer', '4', [1, 200], { whole: true, when: inWidth }),
 } as const;
+
+type Values = ValuesOf<typeof fields>;
+
+/** What fits between the ties, and what the number of bars asked for leaves between them. */
+function widthFigures(values: Values, diameterMm: number, leastClearMm: number) {
+  const { units } = values;
+  const bars = given('bars', values.bars);
+  const found = barsInWidth({
+    widthMm: given('width', values.width),
+    sideCoverMm: given('side cover', values.sideCover),
+    tieDiameterMm: values.ties?.diameterMm ?? 0,
+    diameterMm,
+    leastClearMm,
+    bars,
+    showIn: units,
+  });
+  const fits = bars <= found.mostBars;
+  const figures: Figure[] = [
+    {
+      id: 'most-bars',
+      label: 'Most bars that fit in one layer',
+      text: String(found.mostBars),
+      value: found.mostBars,
+    },
+    {
+      id: 'clear-as-drawn',
+      label: `Clear distance with ${bars} ${bars === 1 ? 'bar' : 'bars'}`,
+      text: found.clearMm === null ? 'one bar, no gap' : withUnit(found.clearMm, units, leastClearMm),
+      also: fits ? 'they fit' : 'they do not fit: too narrow',
+      value: found.clearMm,
+      mark: fits ? 'met' : 'not-met-low',
+    },
+  ];
+  return { figures, trail: found.trail };
+}
 
 export interface ClearDistanceScene {
   units: LengthUnit;
@@ -51,6 +107,7 @@ export const clearDistanceCalculation = defineCalculation({
   groups: [
     { legend: 'Rule', names: ['basis', 'place'] },
     { legend: 'Bars and mix', names: ['bar', 'aggregate', 'k1', 'k2'] },
+    { legend: 'In a width', names: ['layout', 'width', 'sideCover', 'ties', 'bars'] },
     { legend: 'Measured', names: ['found'] },
   ],
   compute: (values) => {
@@ -84,6 +141,18 @@ export const clearDistanceCalculation = defineCalculation({
         formula: 'clear distance + bar',
       },
     ];
+    const trail = [...least.trail];
+    const cautions = [
+      'Each gap is judged by itself and has no minus tolerance: concrete has to pass. A wide gap does not mend a narrow one beside it.',
+    ];
+    if (values.layout === 'width') {
+      const layer = widthFigures(values, diameterMm, least.leastMm);
+      figures.push(...layer.figures);
+      trail.push(...layer.trail);
+      cautions.push(
+        'Bars in a width: plain arithmetic between straight ties. A bar that lies in the bend of a tie, a lap or a vibrator needs more room.',
+      );
+    }
     if (values.found !== undefined) {
       const judged = judgeClearDistances([values.found], least.leastMm);
       figures.push({
@@ -99,10 +168,8 @@ export const clearDistanceCalculation = defineCalculation({
     return {
       figures,
       warnings: [],
-      trail: least.trail,
-      cautions: [
-        'Each gap is judged by itself and has no minus tolerance: concrete has to pass. A wide gap does not mend a narrow one beside it.',
-      ],
+      trail,
+      cautions,
       scene: {
         units,
         leastMm: least.leastMm,

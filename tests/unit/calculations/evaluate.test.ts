@@ -49,6 +49,9 @@ const wrong: [CalculationSlug, Draft, field: string, says: string][] = [
   ['support-height', { upper: '5/8' }, 'upper', 'no bar size'],
   ['clear-distance', { aggregate: '0' }, 'aggregate', 'more than zero'],
   ['clear-distance', { found: 'wide' }, 'found', 'not a length'],
+  ['clear-distance', { layout: 'width', width: '90' }, 'width', 'no room for one'],
+  ['clear-distance', { layout: 'width', bars: '30' }, 'bars', 'wider than the room'],
+  ['clear-distance', { layout: 'width', bars: '2.5' }, 'bars', 'whole number'],
   ['readings', { mostBelow: '0' }, 'mostBelow', 'It has to lie from'],
   ['readings', { confidence: '100' }, 'confidence', 'It has to lie from'],
   ['readings', { taken: '5', below: '6' }, 'below', 'more than readings'],
@@ -130,6 +133,12 @@ describe('what a result says', () => {
   it('shows the steps of the larger bar that a lap rests on', () => {
     const { answer } = changed('lap', 'in', { bar: '#8', largerBar: '#11' });
     expect(answer?.trail.some(({ rule }) => rule.startsWith('Larger bar: '))).toBe(true);
+  });
+
+  it('counts the bars that fit between the ties of a width, in the unit chosen', () => {
+    expect(figure(changed('clear-distance', 'mm', { bar: '20 mm', layout: 'width' }), 'most-bars')).toBe(5);
+    const { answer } = changed('clear-distance', 'in', { layout: 'width' });
+    expect(answer?.trail.map((step) => step.value).join('; ')).not.toContain(' mm');
   });
 
   it('takes a bare bar number only where the basis has sizes of its own', () => {

@@ -9,6 +9,7 @@ import {
   judgeSpacing,
   spacingOverGaps,
 } from '@/lib/concrete/bar-spacing';
+import { barsInWidth } from '@/lib/concrete/bars-in-width';
 import { hookExtension, judgeBend, judgeFieldBend } from '@/lib/concrete/bends';
 import { aciDevelopmentCompression, aciDevelopmentSimple } from '@/lib/concrete/development';
 import { judgeCoupler, judgeEmbedment, judgeLap, judgeStagger, shareLapped } from '@/lib/concrete/lap-layout';
@@ -163,6 +164,20 @@ describe('spacing and count', () => {
     expect(barsAcrossBay({ widthMm: 300.00000000000006, firstBarFromEdgeMm: 0, spacingMm: 100 }).count).toBe(
       4,
     );
+  });
+
+  test('bars between the ties of a width: as many as fit, and not one more', () => {
+    // Arithmetic: 300 − 2 × (40 + 8) = 204; (204 + 25) / (20 + 25) = 5.09.
+    const layer = { widthMm: 300, sideCoverMm: 40, tieDiameterMm: 8, diameterMm: 20, leastClearMm: 25 };
+    expect(barsInWidth(layer)).toMatchObject({ mostBars: 5, clearMm: null });
+    expect(barsInWidth({ ...layer, bars: 5 }).clearMm).toBeCloseTo(26, 9);
+    expect(barsInWidth({ ...layer, bars: 6 }).clearMm).toBeCloseTo(16.8, 9);
+    // Exactly what five need: 5 × 20 + 4 × 25 = 200.
+    expect(barsInWidth({ ...layer, widthMm: 296 }).mostBars).toBe(5);
+    expect(barsInWidth({ ...layer, widthMm: 295.9 }).mostBars).toBe(4);
+    expect(() => barsInWidth({ ...layer, bars: 11 })).toThrow(/wider than the room/);
+    expect(() => barsInWidth({ ...layer, widthMm: 115 })).toThrow(/no room for one/);
+    expect(barsInWidth({ ...layer, widthMm: 12 * 25.4, showIn: 'in' }).trail[0]?.value).toMatch(/^12 − 2 × /);
   });
 
   test('the mean over gaps against tolerance, and against the code without one', () => {

@@ -84,6 +84,9 @@ const calls: Record<string, Arguments[]> = {
     [{ basis: 'en-1992-1-1', place: 'layer', diameterMm: 16, aggregateMm: 20, k1: 1, k2Mm: 5 }],
   ],
   judgeClearDistances: [[[30, 25], 25]],
+  barsInWidth: [
+    [{ widthMm: 300, sideCoverMm: 40, tieDiameterMm: 8, diameterMm: 20, leastClearMm: 25, bars: 4 }],
+  ],
   barsAcrossBay: [[{ widthMm: 4000, firstBarFromEdgeMm: 75, spacingMm: 150 }]],
   judgeBarCount: [[27, 27]],
   spacingOverGaps: [[{ overallMm: 1500, gaps: 10 }]],

@@ -15,6 +15,7 @@ import {
   leastClearDistance,
   spacingOverGaps,
 } from '@/lib/concrete/bar-spacing';
+import { barsInWidth } from '@/lib/concrete/bars-in-width';
 import {
   hookExtension,
   judgeBend,
@@ -139,6 +140,10 @@ const calls: Record<string, { input: object; run: (input: never) => unknown }> =
   judgeClearDistances: {
     input: { gaps: [30, 40], least: 25 },
     run: (i: { gaps: number[]; least: number }) => judgeClearDistances(i.gaps, i.least),
+  },
+  barsInWidth: {
+    input: { widthMm: 300, sideCoverMm: 40, tieDiameterMm: 8, diameterMm: 20, leastClearMm: 25, bars: 4 },
+    run: barsInWidth,
   },
   barsAcrossBay: { input: { widthMm: 4000, firstBarFromEdgeMm: 50, spacingMm: 150 }, run: barsAcrossBay },
   judgeBarCount: {
