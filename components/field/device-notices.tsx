@@ -8,7 +8,7 @@ import { fieldPaths } from './field-routes';
 import { clockWords } from './sync-words';
 import { SignInLink } from './sign-in-link';
 import { useDevice, useSnapshot } from './use-device';
-import { entriesWords } from './waiting-words';
+import { entriesWords, waitingWords } from './waiting-words';
 
 /**
  * What the device has to tell whatever the screen: a new version, a session that ended, a wrong clock, lost entries.
@@ -18,7 +18,9 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
   const device = useDevice();
   const { sync, updateReady, person, people, pin } = useSnapshot();
   const clock = clockWords(sync.clockOffsetMs);
-  const lost = sync.lostEntries ?? 0;
+  const lostEntries = sync.lostEntries ?? 0;
+  const lostPhotos = sync.lostPhotos ?? 0;
+  const lost = lostEntries + lostPhotos;
   const signIn = person !== null && sync.phase === 'sign-in-needed';
   const inTray = useFieldRoute().screen === 'not-sent';
   const refused = inTray ? 0 : sync.refusedEntries;
@@ -30,7 +32,7 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
       {lost > 0 && (
         <Notice
           tone="hold"
-          title={`${lost} ${lost === 1 ? 'entry is' : 'entries are'} gone from this device`}
+          title={`${waitingWords({ entries: lostEntries, photos: lostPhotos })} ${lost === 1 ? 'is' : 'are'} gone from this device`}
           actions={
             <>
               <FieldLink href={fieldPaths.notSent} className={buttonClasses('secondary')}>
@@ -46,7 +48,7 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
         >
           <p>
             The device made room by itself before they were sent. They are not on the server. What was sent is
-            safe. Record again what is missing.
+            safe. Record again what is missing{lostPhotos > 0 && ', and take the photos again'}.
           </p>
         </Notice>
       )}

@@ -3,7 +3,7 @@
 import { useState } from 'react';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { Dialog } from '@/components/ui/dialog';
-import type { QueuedPhoto } from '@/lib/device/device-types';
+import type { DeviceSnapshot, QueuedPhoto } from '@/lib/device/device-types';
 import type { PhotoState } from '@/lib/inspection/sheet-types';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
@@ -22,28 +22,33 @@ const progressWords: Record<QueuedPhoto['progress'], string> = {
   refused: 'refused',
 };
 
-/** How far a photo has come, in words. */
+/** How far a photo has come, in words, to who holds this device. */
 export function photoStanding(
   photo: PhotoState,
   queued: QueuedPhoto | undefined,
+  { deviceId, person }: Pick<DeviceSnapshot, 'deviceId' | 'person'>,
 ): { words: string; bad: boolean } {
   if (photo.stored) return { words: 'stored', bad: false };
   if (photo.refused) return { words: `refused: ${photo.refused.body.problem}`, bad: true };
   if (queued?.progress === 'refused')
     return { words: `refused: ${queued.problem ?? 'no reason given'}`, bad: true };
   if (queued) return { words: progressWords[queued.progress], bad: false };
+  // Nothing that waits is ever dropped: where its own device does not have it, the browser has cleared the store.
+  if (photo.entry.deviceId === deviceId && photo.entry.authorId === person?.id)
+    return { words: 'gone from this device before it was sent', bad: true };
   return { words: 'on its way from another device', bad: false };
 }
 
 /** One photo: small, with what it shows and how far it has come; tapped, it opens large. */
 export function PhotoTile({ open, photo }: { open: OpenSheet; photo: PhotoState }) {
-  const { photos } = useSnapshot();
+  const snapshot = useSnapshot();
   const { body } = photo.entry;
   const address = usePhotoAddress(body.photoId);
   const [shown, setShown] = useState(false);
   const standing = photoStanding(
     photo,
-    photos.find((one) => one.photoId === body.photoId),
+    snapshot.photos.find((one) => one.photoId === body.photoId),
+    snapshot,
   );
   const words = subjectWords(open.sheet, body.about);
   const text = [body.caption, words].filter(Boolean).join('; ');

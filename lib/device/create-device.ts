@@ -2,7 +2,13 @@ import type { Entry } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { browserEnvironment } from './browser-environment';
 import type { DeviceEnvironment } from './device-environment';
-import { DeviceError, type Device, type DeviceSnapshot, type StoreState } from './device-types';
+import {
+  DeviceError,
+  type Device,
+  type DeviceSnapshot,
+  type StoreState,
+  type SyncState,
+} from './device-types';
 import { loadSchemas } from './load-schemas';
 import { OpenedPours } from './opened-pours';
 import { DeviceHolder } from './people/device-holder';
@@ -46,7 +52,7 @@ class FieldDevice {
   #listeners = new Set<() => void>();
   #storage: DeviceSnapshot['storage'] = emptySnapshot.storage;
   #updateReady = false;
-  #lostBefore: number | null = null;
+  #lostBefore: Pick<SyncState, 'lostEntries' | 'lostPhotos'> | null = null;
   #telling = false;
   #askedToKeep = false;
   #closed = false;
@@ -170,8 +176,9 @@ class FieldDevice {
     const deviceId = known ?? marks.find((mark) => mark)?.deviceId ?? this.env.newId();
     if (!known) {
       await settings.write('deviceId', deviceId);
-      const lost = marks.reduce((sum, mark) => sum + (mark?.unsent ?? 0), 0);
-      this.#lostBefore = lost > 0 ? lost : null;
+      const entries = marks.reduce((sum, mark) => sum + (mark?.unsent ?? 0), 0);
+      const photos = marks.reduce((sum, mark) => sum + (mark?.unsentPhotos ?? 0), 0);
+      this.#lostBefore = { lostEntries: entries || null, lostPhotos: photos || null };
     }
     await this.#holder.start(settings, deviceId);
     if (!this.#holder.work) this.env.after(ASK_AFTER_MS, () => this.#ask());
@@ -271,6 +278,7 @@ class FieldDevice {
     const common = {
       ...shown,
       store: this.#store,
+      deviceId: this.#holder.deviceId,
       storage: this.#storage,
       updateReady: this.#updateReady,
       asks: !work && this.#asks && shown.people.length > 0,
@@ -279,7 +287,7 @@ class FieldDevice {
       return {
         ...emptySnapshot,
         ...common,
-        sync: { ...emptySnapshot.sync, ...this.#noAnswer, lostEntries: this.#lostBefore },
+        sync: { ...emptySnapshot.sync, ...this.#noAnswer, ...this.#lostBefore },
       };
     }
     return { ...snapshotOf(work, this.#lane.state, this.env.now()), ...common };

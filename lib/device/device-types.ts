@@ -77,6 +77,8 @@ export interface SyncState {
   clockOffsetMs: number | null;
   /** Entries made here that the store no longer holds and the server never confirmed (evicted); null: none known. */
   lostEntries: number | null;
+  /** Photos made here that were evicted before they were sent, though the server has their entries; null: none known. */
+  lostPhotos: number | null;
   /** Whose session the server has, where it is another person's: then nothing of this person's is sent. */
   signedInAs: string | null;
 }
@@ -128,6 +130,8 @@ export type StoreState = 'reading' | 'open' | 'failed';
 export interface DeviceSnapshot {
   /** Until it is `open`, nothing below says that something is not there. */
   store: StoreState;
+  /** Names this device in the entries that are made on it; empty until the store is open. */
+  deviceId: string;
   person: DevicePerson | null;
   projects: DeviceProject[];
   pours: DevicePour[];

@@ -13,6 +13,8 @@ export class LossWatch {
   #storeId = '';
   #lost = new Set<number>();
   #lostUncounted = 0;
+  /** Photos whose bytes went with an emptied store; their entries did not. */
+  lostPhotos = 0;
 
   constructor(
     private readonly env: Pick<DeviceEnvironment, 'marks' | 'newId'>,
@@ -28,6 +30,7 @@ export class LossWatch {
   async read(): Promise<void> {
     this.#lost = new Set((await readMeta(this.db, 'lost')) ?? []);
     this.#lostUncounted = (await readMeta(this.db, 'lostUncounted')) ?? 0;
+    this.lostPhotos = (await readMeta(this.db, 'lostPhotos')) ?? 0;
     this.made = Math.max(this.made, (await readMeta(this.db, 'deviceSeq')) ?? 0);
   }
 
@@ -39,14 +42,15 @@ export class LossWatch {
     this.#storeId = storeId ?? this.env.newId().slice(-12);
     if (storeId) return;
     await writeMeta(this.db, 'storeId', this.#storeId);
-    if (!mark || mark.unsent === 0) return;
+    if (!mark || mark.unsent + mark.unsentPhotos === 0) return;
     this.#lost = new Set(mark.unsentSeqs);
     this.#lostUncounted = Math.max(0, mark.unsent - mark.unsentSeqs.length);
+    this.lostPhotos = mark.unsentPhotos;
     await this.#write();
   }
 
-  /** Writes the mark: the highest number made, and which entries the server has not confirmed. */
-  mark(unsentSeqs: number[]): void {
+  /** Writes the mark: the highest number made, which entries the server has not confirmed, how many photos wait. */
+  mark(unsentSeqs: number[], unsentPhotos: number): void {
     this.env.marks.write(
       markName(this.own.personId),
       writeMark({
@@ -55,6 +59,7 @@ export class LossWatch {
         made: this.made,
         unsent: unsentSeqs.length,
         unsentSeqs,
+        unsentPhotos,
       }),
     );
   }
@@ -74,11 +79,13 @@ export class LossWatch {
   async acknowledge(): Promise<void> {
     this.#lost.clear();
     this.#lostUncounted = 0;
+    this.lostPhotos = 0;
     await this.#write();
   }
 
   async #write(): Promise<void> {
     await writeMeta(this.db, 'lost', [...this.#lost]);
     await writeMeta(this.db, 'lostUncounted', this.#lostUncounted);
+    await writeMeta(this.db, 'lostPhotos', this.lostPhotos);
   }
 }

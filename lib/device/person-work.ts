@@ -25,7 +25,7 @@ import {
 } from './store/person-database';
 import type { WaitingHere } from './store/settings-store';
 import { settleOutcomes, type Settled } from './store/settle-outcomes';
-import { restartStream, storePage, type StreamPage } from './store/store-page';
+import { restartStream, storePage, type StoredPage, type StreamPage } from './store/store-page';
 import { setRoomAside, writeEntry, type PhotoToStore } from './store/write-entry';
 
 /** What is kept in memory of an outbox record: enough to count and to say how old it is. */
@@ -175,7 +175,14 @@ export class PersonWork {
   }
 
   #mark(): void {
-    this.loss.mark([...this.outbox.values(), ...this.refused.values()].map((one) => one.deviceSeq));
+    const unsent = [...this.outbox.values(), ...this.refused.values()].map((one) => one.deviceSeq);
+    const photos = [...this.photos.values()].filter(
+      ({ entryId, progress }) =>
+        (progress === 'waiting' || progress === 'sending') &&
+        !this.outbox.has(entryId) &&
+        !this.refused.has(entryId),
+    );
+    this.loss.mark(unsent, photos.length);
   }
 
   #tell(message: TabMessage): void {
@@ -352,6 +359,7 @@ export class PersonWork {
   async takePage(page: StreamPage): Promise<void> {
     const stored = await storePage(this.db, page);
     await this.loss.found(page.entries);
+    const missed = await this.#takeMissed(page.stream, stored);
     // From here on without a pause: what is being read from the store meanwhile is read again (see #loadStream).
     this.memory.merge(page.stream, page.entries, page.head);
     if (page.plan) this.memory.setPlan(page.plan);
@@ -359,13 +367,26 @@ export class PersonWork {
     this.planRevisions.set(page.stream, stored.cursor.planRevision);
     for (const photo of stored.photos) this.photos.set(photo.photoId, photo);
     for (const record of stored.offeredAgain) this.#waits(record);
-    if (stored.offeredAgain.length > 0) this.#mark();
+    if (stored.offeredAgain.length + stored.photos.length > 0) this.#mark();
     const news =
+      missed ||
       page.entries.length > 0 ||
       page.plan !== null ||
       Boolean(page.crewList) ||
       stored.offeredAgain.length > 0;
     if (news) this.#tell({ streams: [page.stream] });
+  }
+
+  /** Takes into memory what another tab wrote before this page and was closed before it could tell. (SPEC 38) */
+  async #takeMissed(stream: string, { afterBefore, cursor }: StoredPage): Promise<boolean> {
+    const behind = this.memory.has(stream) && this.memory.headOf(stream) !== afterBefore;
+    if (behind) await this.#loadStream(stream);
+    const plan =
+      this.memory.isOpen(stream) && this.memory.planOf(stream)?.revision !== cursor.planRevision
+        ? await this.db.get('plans', stream)
+        : undefined;
+    if (plan) this.memory.setPlan(plan);
+    return behind || plan !== undefined;
   }
 
   async restart(stream: string): Promise<void> {
@@ -438,6 +459,7 @@ export class PersonWork {
   async setPhoto(photo: PhotoRecord): Promise<void> {
     await this.db.put('photos', photo);
     this.photos.set(photo.photoId, photo);
+    this.#mark();
     this.#tell({ streams: [] });
   }
 
@@ -449,6 +471,7 @@ export class PersonWork {
       tx.done,
     ]);
     this.photos.delete(photoId);
+    this.#mark();
     this.#tell({ streams: [] });
   }
 

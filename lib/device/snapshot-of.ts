@@ -10,6 +10,7 @@ type IndexProject = DeviceIndex['projects'][number];
 /** What is shown before anything is known, and while nobody is signed in. */
 export const emptySnapshot: DeviceSnapshot = {
   store: 'reading',
+  deviceId: '',
   person: null,
   projects: [],
   pours: [],
@@ -23,6 +24,7 @@ export const emptySnapshot: DeviceSnapshot = {
     oldestWaitingAt: null,
     clockOffsetMs: null,
     lostEntries: null,
+    lostPhotos: null,
     signedInAs: null,
   },
   refused: [],
@@ -93,7 +95,7 @@ export function snapshotOf(
   work: PersonWork,
   lane: LaneState,
   now: number,
-): Omit<DeviceSnapshot, 'store' | 'storage' | 'updateReady' | 'people' | 'asks' | 'pin'> {
+): Omit<DeviceSnapshot, 'store' | 'deviceId' | 'storage' | 'updateReady' | 'people' | 'asks' | 'pin'> {
   const notSent = new Map<string, number>();
   let oldest: string | null = null;
   for (const one of work.outbox.values()) {
@@ -122,6 +124,7 @@ export function snapshotOf(
       oldestWaitingAt: oldest,
       clockOffsetMs: work.clockOffsetMs,
       lostEntries: work.loss.lost || null,
+      lostPhotos: work.loss.lostPhotos || null,
       signedInAs: lane.signedInAs,
     },
     refused: [...work.refused.values()]

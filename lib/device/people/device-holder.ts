@@ -24,7 +24,7 @@ interface HolderHost {
 export class DeviceHolder {
   work: PersonWork | null = null;
   #people: PeopleHere | null = null;
-  #deviceId = '';
+  deviceId = '';
   /** Who has given their password since this page was loaded: they may choose a new PIN without the old one. */
   #gavePassword: string | null = null;
   #closed = false;
@@ -39,7 +39,7 @@ export class DeviceHolder {
 
   /** Opens the work of whoever holds the device, where that needs no asking. */
   async start(settings: SettingsStore, deviceId: string): Promise<void> {
-    this.#deviceId = deviceId;
+    this.deviceId = deviceId;
     this.#people = new PeopleHere(this.env, settings);
     await this.#people.read();
     const person = this.#people.opensByItself;
@@ -117,7 +117,7 @@ export class DeviceHolder {
 
   async #open(person: DevicePerson): Promise<void> {
     let opened: PersonWork | null = null;
-    const work = await PersonWork.open(this.env, person, this.#deviceId, (wantsSending) => {
+    const work = await PersonWork.open(this.env, person, this.deviceId, (wantsSending) => {
       if (opened === null || this.work !== opened) return;
       if (wantsSending) this.host.wantsSending();
       this.host.changed();

@@ -10,6 +10,8 @@ export interface HighWaterMark {
   /** How many entries had not been confirmed by the server, and which (as far as they fit). */
   unsent: number;
   unsentSeqs: number[];
+  /** Photos whose entry the server has confirmed and whose bytes had not been sent. */
+  unsentPhotos: number;
 }
 
 const MOST_CHARACTERS = 900;
@@ -49,12 +51,13 @@ function seqsOf(text: string): number[] {
 
 /** The mark as cookie text: digits, letters and `. , -` only. */
 export function writeMark(mark: HighWaterMark): string {
-  return [mark.storeId, mark.deviceId, mark.made, mark.unsent, rangesText(mark.unsentSeqs)].join('.');
+  const { storeId, deviceId, made, unsent, unsentSeqs, unsentPhotos } = mark;
+  return [storeId, deviceId, made, unsent, rangesText(unsentSeqs), unsentPhotos].join('.');
 }
 
 /** The mark of a cookie's text; null when it is none. */
 export function readMark(text: string | null): HighWaterMark | null {
-  const [storeId, deviceId, made, unsent, ranges] = (text ?? '').split('.');
+  const [storeId, deviceId, made, unsent, ranges, photos] = (text ?? '').split('.');
   if (!storeId || !deviceId || !/^\d+$/.test(made ?? '') || !/^\d+$/.test(unsent ?? '')) return null;
   return {
     storeId,
@@ -62,6 +65,8 @@ export function readMark(text: string | null): HighWaterMark | null {
     made: Number(made),
     unsent: Number(unsent),
     unsentSeqs: seqsOf(ranges ?? ''),
+    // Earlier versions did not count them.
+    unsentPhotos: /^\d+$/.test(photos ?? '') ? Number(photos) : 0,
   };
 }
 

@@ -90,6 +90,8 @@ export interface MetaValues {
   lost: number[];
   /** How many more were lost than could be told one by one. */
   lostUncounted: number;
+  /** Photos that were lost with an emptied store before their bytes were sent, though their entries were. */
+  lostPhotos: number;
   /** Room that is given up when the device is full, so that a reading can still be saved. */
   ballast: Uint8Array;
 }

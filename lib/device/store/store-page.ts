@@ -22,6 +22,8 @@ export interface StreamPage {
 
 export interface StoredPage {
   cursor: CursorRecord;
+  /** How far the store was before. */
+  afterBefore: number;
   photos: PhotoRecord[];
   /** Sent and acknowledged before, but not in the complete stream: put back into the outbox. */
   offeredAgain: OutboxRecord[];
@@ -87,7 +89,7 @@ export async function storePage(db: PersonDatabase, page: StreamPage): Promise<S
     });
     for (const photo of photos.values()) writes.push(tx.objectStore('photos').put(photo));
     await Promise.all(writes);
-    return { cursor, photos: [...photos.values()], offeredAgain };
+    return { cursor, afterBefore: before?.after ?? 0, photos: [...photos.values()], offeredAgain };
   });
 }
 

@@ -141,8 +141,8 @@ export class SyncLane {
       const ended = await this.env.ifFree('cagewright-sync', () => this.#round(work)).catch(storeTrouble);
       if (this.#stopped || this.host.work() !== work) continue;
       if (ended === 'taken') {
-        if (work.outbox.size > 0) this.#in(OTHER_TAB_SENDS_MS * (1 + this.env.random()));
-        else this.#poll(work);
+        // It tells us what it sends and fetches, unless it is closed in the middle of it.
+        this.#in(OTHER_TAB_SENDS_MS * (1 + this.env.random()));
         return;
       }
       if (ended === 'stopped') continue;

@@ -51,6 +51,54 @@ describe('fetching', () => {
     await phone.kill();
   });
 
+  it('takes up what another tab fetched and was closed before it could tell (SPEC 38)', async () => {
+    const { phone, server, straight } = site();
+    const all = () => server.entries.filter((one) => one.pourId === pourId).map((one) => one.id);
+    server.writes(pourId, 'note', note('first'));
+    phone.line = (address, init) =>
+      address.endsWith('/pull') ? Promise.reject(new TypeError('down')) : straight(address, init);
+    const silent = { channel: () => ({ post: () => undefined, close: () => undefined }) };
+    const closing = await phone.tab(silent);
+    const staying = await phone.tab();
+    expect(await shown(staying)).toEqual([]);
+    phone.line = straight;
+    await closing.syncNow();
+    await staying.syncNow();
+    expect(await shown(staying)).toEqual(all());
+
+    server.writes(pourId, 'note', note('second'));
+    await closing.syncNow();
+    server.writes(pourId, 'note', note('third'));
+    await staying.syncNow();
+    expect(await shown(staying)).toEqual(all());
+    const { seenSeq } = await staying.record(at, 'note', note('in sight of all of them'));
+    expect(seenSeq).toBe(server.entries.findLast((one) => one.pourId === pourId)?.seq);
+    await phone.kill();
+  });
+
+  it('tries again soon where another tab had its turn and may have been closed in the middle of it (SPEC 19)', async () => {
+    const { phone, clock, straight } = site();
+    let answer: () => void = () => undefined;
+    let held = false;
+    phone.line = async (address, init) => {
+      if (!address.endsWith('/pull') || held) return straight(address, init);
+      held = true;
+      await new Promise<void>((done) => (answer = done));
+      throw new TypeError('closed');
+    };
+    const closing = phone.tab();
+    await settle();
+    const staying = await phone.tab();
+    await opened(staying);
+    expect(staying.pour(pourId)?.sheet).toBeNull();
+    answer();
+    await (await closing).close();
+    clock.advance(7_000);
+    await settle();
+    expect(staying.pour(pourId)?.sheet).not.toBeNull();
+    await phone.kill();
+  });
+
   it('keeps what it had when the line breaks between two pages, and goes on from there (SPEC 20)', async () => {
     const { phone, server, straight, requests } = site();
     server.pageSize = 4;

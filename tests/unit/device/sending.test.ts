@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { settle, until, Phone, type Line } from '@/tests/faults/world/phone';
+import { jpeg, settle, until, Phone, type Line } from '@/tests/faults/world/phone';
 import { at, opened, note, pourId, reading, site } from '@/tests/faults/world/site';
 import { bodyOf } from '@/tests/faults/world/model-server';
 
@@ -409,6 +409,39 @@ describe('a cleared store', () => {
     const fresh = await phone.tab();
     await fresh.syncNow();
     expect(fresh.snapshot().sync.lostEntries).toBeNull();
+    await phone.kill();
+  });
+
+  it('tells of a photo too that was lost before its bytes were sent, until that was read (SPEC 5)', async () => {
+    const { phone, straight } = site();
+    const tab = await phone.tab();
+    phone.line = (address, init) =>
+      address.startsWith('/api/photos/') ? Promise.reject(new TypeError('down')) : straight(address, init);
+    const about = { kind: 'pour' as const, id: pourId };
+    await tab.addPhoto(at, jpeg(), { about, shot: 'wide', caption: '' });
+    await tab.syncNow();
+    await until(() => tab.snapshot().sync.waitingEntries === 0, 'its entry is sent');
+    await phone.emptyStore();
+    const fresh = await phone.tab();
+    expect(fresh.snapshot().sync).toMatchObject({ lostEntries: null, lostPhotos: 1 });
+    await fresh.syncNow();
+    expect(fresh.snapshot().sync.lostPhotos).toBe(1);
+    await fresh.acknowledgeLost?.();
+    await settle();
+    expect(fresh.snapshot().sync.lostPhotos).toBeNull();
+    await phone.kill();
+  });
+
+  it('does not tell of a photo that had been sent', async () => {
+    const { phone } = site();
+    const tab = await phone.tab();
+    const about = { kind: 'pour' as const, id: pourId };
+    await tab.addPhoto(at, jpeg(), { about, shot: 'wide', caption: '' });
+    await tab.syncNow();
+    expect(tab.snapshot().photos[0]?.progress).toBe('sent');
+    await phone.emptyStore();
+    const fresh = await phone.tab();
+    expect(fresh.snapshot().sync).toMatchObject({ lostEntries: null, lostPhotos: null });
     await phone.kill();
   });
 

@@ -45,6 +45,7 @@ export class MemoryDevice implements Device {
     this.current = this.fold();
     this.shown = {
       store: 'open',
+      deviceId: 'd-1',
       person: { id: people[who], name: names[who], email: `${who.toLowerCase()}@example.test` },
       projects: [this.current.project],
       pours: [this.current.pour],
@@ -58,6 +59,7 @@ export class MemoryDevice implements Device {
         oldestWaitingAt: null,
         clockOffsetMs: 0,
         lostEntries: null,
+        lostPhotos: null,
         signedInAs: null,
       },
       refused: [],
