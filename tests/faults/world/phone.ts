@@ -159,7 +159,7 @@ export const jpeg = (filler = 7): Blob =>
 
 /** Waits for something that real threads (compression, say) take part in. */
 export async function until(holds: () => boolean, what: string): Promise<void> {
-  const give = Date.now() + 5_000;
+  const give = Date.now() + 20_000;
   while (!holds()) {
     if (Date.now() > give) throw new Error(`This did not come about: ${what}`);
     await new Promise((done) => setTimeout(done, 2));
