@@ -32,6 +32,8 @@ export class FaultyProxy {
   decide: (method: string, path: string) => Fault = () => 'delivered';
   /** Bytes per second in each direction, and a delay of each request, ms. */
   speed: { bytesPerSecond: number; delayMs: number } | null = null;
+  /** Changes what a page or a script of the application says, as a new deploy does. */
+  rewrite: (path: string, text: string) => string = (_path, text) => text;
   readonly log: string[] = [];
   /** Most pushes that were under way at once. */
   mostPushes = 0;
@@ -74,7 +76,7 @@ export class FaultyProxy {
     for await (const chunk of request) chunks.push(chunk as Buffer);
     const asked: Asked = { method, url, headers: request.headers, body: Buffer.concat(chunks) };
     const work = /^\/api\/(sync|photos)\//.test(url.pathname) || method === 'PUT';
-    if (!work) return reply(response, await forward(asked));
+    if (!work) return reply(response, await this.#file(asked));
 
     const push = url.pathname === '/api/sync/push';
     if (push) this.mostPushes = Math.max(this.mostPushes, (this.#pushes += 1));
@@ -86,6 +88,24 @@ export class FaultyProxy {
     } finally {
       if (push) this.#pushes -= 1;
     }
+  }
+
+  /** A page or a script, which may be given out changed. */
+  async #file(asked: Asked): Promise<Answered> {
+    // Whole, unpacked and whatever the browser has of it already: otherwise there would be nothing to change.
+    const {
+      'accept-encoding': _packed,
+      'if-none-match': _tag,
+      'if-modified-since': _since,
+      ...headers
+    } = asked.headers;
+    const answer = await forward({ ...asked, headers });
+    if (!/javascript|html/.test(answer.headers['content-type'] ?? '')) return answer;
+    const before = answer.body.toString('utf8');
+    const after = this.rewrite(asked.url.pathname, before);
+    if (after === before) return answer;
+    const { etag: _etag, 'last-modified': _modified, 'content-length': _length, ...rest } = answer.headers;
+    return { ...answer, headers: rest, body: Buffer.from(after) };
   }
 
   /** One line for all: what comes later waits until what came before has passed. */

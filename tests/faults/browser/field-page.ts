@@ -1,6 +1,15 @@
 import { expect, type Page } from '@playwright/test';
 import type { EntryEnvelope } from '@/lib/inspection/entry';
-import type { BuildingSite } from './building-site';
+import { SITE_PASSWORD, type BuildingSite, type SitePerson } from './building-site';
+
+/** Signs in with the password, and waits for the list of pours on the phone's side. */
+export async function signIn(page: Page, site: BuildingSite, person: SitePerson): Promise<void> {
+  await page.goto(`${site.app}/sign-in?next=/field`);
+  await page.getByLabel('E-mail').fill(person.email);
+  await page.getByLabel('Password').fill(SITE_PASSWORD);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await expect(page.getByRole('link', { name: new RegExp(site.pourNumber) })).toBeVisible();
+}
 
 /** Opens the phone's side and waits until the pour is on the device with its plan, and the worker keeps the shell. */
 export async function openField(page: Page, site: BuildingSite): Promise<void> {
@@ -55,6 +64,8 @@ export function stored<T>(page: Page, personId: string, store: string): Promise<
       new Promise<unknown[]>((read, failed) => {
         const request = indexedDB.open(name);
         request.onerror = () => failed(new Error(String(request.error)));
+        // Where there is no such database, none must come into being by being asked for.
+        request.onupgradeneeded = () => request.transaction?.abort();
         request.onsuccess = () => {
           const all = request.result.transaction(from).objectStore(from).getAll();
           all.onsuccess = () => {
