@@ -101,6 +101,7 @@ const wrong: readonly Hold['kind'][] = [
   ...correctable,
   'conflict',
   'superseded-drawing',
+  'mix-changed',
   'manual',
   'update-needed',
 ];

@@ -299,7 +299,10 @@ const wording: Wording = {
     title: `Drawing ${body.number} rev ${body.revision} received`,
     lines: [`At ${fullTime(body.at, context.timeZone)}`],
   }),
-  'mix-changed': (body) => ({ title: `Mix changed to ${body.name}`, lines: given(body.text) }),
+  'mix-changed': (body) => ({
+    title: `Mix changed to ${body.name}${body.replaces ? `, in place of ${body.replaces}` : ''}`,
+    lines: given(body.text),
+  }),
   'rules-changed': (body) => ({ title: 'Rules changed', lines: [body.text] }),
   'plan-issued': (body) => ({
     title: `Plan rev ${revisionLetter(body.revision)} issued`,

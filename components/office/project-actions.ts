@@ -39,17 +39,31 @@ export const drawingReceivedAction = (now: string, timeZone: string): EntryActio
   }),
 });
 
-export const mixChangedAction = (): EntryAction => ({
+export const mixChangedAction = (mixes: readonly string[]): EntryAction => ({
   type: 'mix-changed',
   label: 'Change the mix',
   title: 'Change the mix',
-  says: 'A release that rests on another mix becomes void.',
+  says: 'A release that rests on the mix that it replaces becomes void, and pours planned with that mix are held until their plans are revised.',
   submit: 'Record it',
   fields: [
-    { kind: 'text', name: 'name', label: 'Mix' },
+    { kind: 'text', name: 'name', label: 'Mix', hint: 'As the plans will name it' },
+    {
+      kind: 'select',
+      name: 'replaces',
+      label: 'In place of',
+      options: [
+        { value: '', label: 'whatever is planned, in every pour' },
+        ...mixes.map((name) => ({ value: name, label: name })),
+      ],
+    },
     { kind: 'long', name: 'text', label: 'Note', optional: true },
   ],
-  toBody: (values) => ({ pourId: null, name: textIn(values, 'name'), text: textIn(values, 'text') }),
+  toBody: (values) => ({
+    pourId: null,
+    name: textIn(values, 'name'),
+    replaces: textIn(values, 'replaces'),
+    text: textIn(values, 'text'),
+  }),
 });
 
 /** An instrument as the register knows it. */

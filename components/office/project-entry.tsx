@@ -27,11 +27,14 @@ export interface ProjectPlace {
 export function ProjectEntry({
   kind,
   instrument = null,
+  mixes = [],
   at,
   variant,
 }: {
   kind: 'drawing' | 'mix' | 'instrument' | 'block-check';
   instrument?: ListedInstrument | null;
+  /** Names of the mixes known so far, of which a new one may replace one. */
+  mixes?: readonly string[];
   at: ProjectPlace;
   variant?: ButtonVariant;
 }) {
@@ -40,7 +43,7 @@ export function ProjectEntry({
     kind === 'drawing'
       ? drawingReceivedAction(at.now, at.timeZone)
       : kind === 'mix'
-        ? mixChangedAction()
+        ? mixChangedAction(mixes)
         : kind === 'block-check' && instrument
           ? blockCheckAction(instrument, at.now, at.timeZone)
           : instrumentAction(instrument, newId, at.timeZone);

@@ -17,10 +17,13 @@ export interface InstrumentRow {
 export interface MixRow {
   name: string;
   note: string;
-  changedAt: string;
+  /** When a change to it was recorded; null where only plans name it. */
+  changedAt: string | null;
+  /** Numbers of the pours whose plans in force name it. */
+  pours: string[];
 }
 
-/** The registers of a project: drawings by number with their revisions, instruments, mixes. */
+/** The registers of a project: drawings by number with their revisions, instruments, mixes (recorded ones, and those that plans name). */
 export async function readProjectRegisters(
   tx: Tx,
   projectId: string,
@@ -41,9 +44,28 @@ export async function readProjectRegisters(
       'uncertainty_mm as uncertaintyMm',
       'in_service as inService',
     );
-  const mixes = await tx('mixes')
-    .where({ project_id: projectId })
+  const recorded = tx('mixes').where({ project_id: projectId }).select('name', 'note', 'changed_at');
+  const planned = tx('pours as p')
+    .join('plans as l', (on) =>
+      on.on('l.project_id', 'p.project_id').andOn('l.pour_id', 'p.id').andOn('l.revision', 'p.plan_revision'),
+    )
+    .where({ 'p.project_id': projectId })
+    .whereRaw("l.document -> 'mix' ->> 'name' is not null")
+    .groupByRaw("l.document -> 'mix' ->> 'name'")
+    .select(
+      tx.raw("l.document -> 'mix' ->> 'name' as name"),
+      tx.raw('array_agg(p.number order by p.number) as pours'),
+    );
+  const mixes = await tx
+    .with('recorded', recorded)
+    .with('planned', planned)
+    .from(tx.raw('recorded full join planned using (name)'))
     .orderBy('name')
-    .select<MixRow[]>('name', 'note', 'changed_at as changedAt');
+    .select<MixRow[]>(
+      'name',
+      tx.raw("coalesce(note, '') as note"),
+      'changed_at as changedAt',
+      tx.raw("coalesce(pours, '{}') as pours"),
+    );
   return { drawings, instruments, mixes };
 }

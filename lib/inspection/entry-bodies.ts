@@ -236,7 +236,13 @@ export const projectBodies = {
     inService: z.boolean(),
   }),
   'drawing-received': z.object({ number: requiredText(40), revision: requiredText(20), at: instant }),
-  'mix-changed': z.object({ pourId: recordId.nullable(), name: requiredText(80), text: optionalText(300) }),
+  'mix-changed': z.object({
+    pourId: recordId.nullable(),
+    name: requiredText(80),
+    /** The mix that it takes the place of; empty where it is meant for every pour. */
+    replaces: optionalText(80).default(''),
+    text: optionalText(300),
+  }),
   'rules-changed': z.object({ text: requiredText(500) }),
 } as const;
 

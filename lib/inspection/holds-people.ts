@@ -108,8 +108,23 @@ function planHolds(sheet: Sheet): Hold[] {
         subjects: [{ kind: 'element', id: one.elementId }],
       }),
     ),
+    ...(sheet.mixChange ? [mixHold(sheet, sheet.mixChange)] : []),
   ];
 }
+
+const mixHold = (sheet: Sheet, change: NonNullable<Sheet['mixChange']>): Hold =>
+  hold({
+    id: `mix-changed:${change.id}`,
+    kind: 'mix-changed',
+    title: `Mix changed to ${change.body.name}; the plan names ${sheet.plan.mix?.name ?? 'none'}`,
+    detail: change.body.text,
+    elementId: null,
+    where: 'Whole pour',
+    since: change.recordedAt,
+    clearedBy: 'engineer',
+    need: 'Look at what its aggregate and strength change, and issue a plan revision that names the mix to be placed.',
+    subjects: [{ kind: 'pour', id: sheet.pourId }],
+  });
 
 function nonconformanceHold(sheet: Sheet, state: NonconformanceState): Hold[] {
   const { body } = state.entry;

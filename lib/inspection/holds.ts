@@ -11,6 +11,7 @@ const order: Hold['kind'][] = [
   'update-needed',
   'plan-incomplete',
   'superseded-drawing',
+  'mix-changed',
   'cover-not-met',
   'effective-depth',
   'bar-departs',

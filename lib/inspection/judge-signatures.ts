@@ -1,6 +1,7 @@
 import { saw } from './causality';
 import type { Entry } from './entry';
 import { listOf, type Facts } from './facts';
+import { namesAnotherMix } from './mix-change';
 import type { Plan } from './plan';
 import { elementsOf } from './scope';
 import type { SignatureState } from './sheet-types';
@@ -22,7 +23,7 @@ export function isMaterial(entry: Entry, plan: Plan): boolean {
         ({ drawing }) => drawing.number === entry.body.number && drawing.revision !== entry.body.revision,
       );
     case 'mix-changed':
-      return entry.body.pourId === null || entry.body.pourId === plan.pourId;
+      return namesAnotherMix(entry, plan);
     case 'site-event':
       return (
         entry.body.kind !== 'rain' || entry.body.amountMm === null || entry.body.amountMm >= plan.rainLimitMm

@@ -186,6 +186,8 @@ export interface Sheet {
     planned: string;
     received: EntryOf<'drawing-received'>;
   }[];
+  /** A change of mix that no revision of the plan has answered. */
+  mixChange: EntryOf<'mix-changed'> | null;
   releases: ReleaseState[];
   refusals: EntryOf<'release-refused'>[];
   inspectionAsked: EntryOf<'inspection-asked'> | null;
@@ -200,6 +202,7 @@ export const holdKinds = [
   'plan-incomplete',
   'plan-revised',
   'superseded-drawing',
+  'mix-changed',
   'attendance',
   'check-open',
   'check-not-met',

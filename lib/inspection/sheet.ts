@@ -11,13 +11,14 @@ import { judgeMeasurements } from './judge-measurements';
 import { judgeNonconformances, withdrawnNonconformances } from './judge-nonconformances';
 import type { JudgingContext } from './judge-point';
 import { isMaterial, judgeSignatures } from './judge-signatures';
+import { unansweredMixChange } from './mix-change';
 import type { Plan } from './plan';
 import type { Sheet } from './sheet-types';
 
 export type { RecordedEntry } from './facts';
 
 /** Raised whenever the same plan and entries would fold into another sheet: cached sheets of another version are thrown away. */
-export const FOLD_VERSION = 2;
+export const FOLD_VERSION = 3;
 
 /** What one fold leaves for the next of the same pour: facts already collected and places already judged. */
 export interface FoldMemo {
@@ -124,6 +125,7 @@ export function foldSheet(
     siteEvents: listOf(facts, 'site-event'),
     conflicts: conflictsOf(faces, checks, measurements),
     supersededDrawings: supersededDrawings(facts, plan),
+    mixChange: unansweredMixChange(facts, plan),
     releases: listOf(facts, 'release').map((entry) => ({
       entry,
       voided: listOf(facts, 'release-void').find((one) => one.body.releaseId === entry.id) ?? null,

@@ -158,20 +158,33 @@ export default async function ProjectPage() {
           empty="No drawing has been received."
         />
       </SheetFrame>
-      <SheetFrame heading="Mixes" aside={may('mix-changed') && <ProjectEntry kind="mix" at={at} />}>
+      <SheetFrame
+        heading="Mixes"
+        aside={
+          may('mix-changed') && (
+            <ProjectEntry kind="mix" mixes={registers.mixes.map((one) => one.name)} at={at} />
+          )
+        }
+      >
         <RuledTable
           caption="Mixes"
           captionHidden
           columns={[
             { key: 'name', head: 'Mix' },
+            { key: 'pours', head: 'Planned for' },
             { key: 'note', head: 'Note', className: 'min-w-48' },
-            { key: 'changed', head: 'Since', className: 'whitespace-nowrap' },
+            { key: 'changed', head: 'Changed to', className: 'whitespace-nowrap' },
           ]}
           rows={registers.mixes.map((one) => ({
             key: one.name,
-            cells: { name: one.name, note: one.note || '–', changed: time(one.changedAt) },
+            cells: {
+              name: one.name,
+              pours: one.pours.join(', ') || '–',
+              note: one.note || '–',
+              changed: one.changedAt ? time(one.changedAt) : '–',
+            },
           }))}
-          empty="No mix is registered."
+          empty="No plan names a mix, and no change of one was recorded."
         />
       </SheetFrame>
     </PageMain>
