@@ -28,7 +28,7 @@ export function AmendForm({
 }) {
   const again = useRefusedAgain('amendment', (body) => body.rootId === entry.id);
   const [draft, setDraft] = useState<AmendmentDraft | null>(() =>
-    amendmentDraft(entry, again?.body.replacement ?? current),
+    amendmentDraft(entry, again?.body.replacement ?? current, open.person.id),
   );
   const [reason, setReason] = useState(again?.body.reason ?? '');
   const [photoId, setPhotoId] = useState<string | null>(null);

@@ -1,10 +1,11 @@
-import { parseLength } from '@/lib/concrete/length';
+import { parseLength, type Length } from '@/lib/concrete/length';
 import { judgeReading } from '@/lib/concrete/judge-reading';
 import type { BodyOf, Entry } from '@/lib/inspection/entry';
 import { siteBodies } from '@/lib/inspection/entry-bodies';
 import { limitsFor } from '@/lib/inspection/judge-point';
 import { judgeMeasured } from '@/lib/inspection/judge-measured';
 import { asEntered } from '@/lib/inspection/length-as-entered';
+import { saidBy } from '@/lib/inspection/measurers';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { faceOfPlan } from './open-sheet';
 
@@ -22,7 +23,7 @@ export type AmendmentDraft = {
 );
 
 /** A body as it travels; the device checks it once more by the schema of its type. */
-const asJson = (body: object): Json => JSON.parse(JSON.stringify(body)) as Json;
+export const asJson = (body: object): Json => JSON.parse(JSON.stringify(body)) as Json;
 
 function textDraft(
   label: string,
@@ -56,22 +57,26 @@ function choiceDraft(
   };
 }
 
-function lengthChange(text: string, make: (length: object) => object): Replacement {
+function lengthChange(text: string, make: (length: Length) => object): Replacement {
   const parsed = parseLength(text);
   if (!parsed.ok) return parsed;
   if (parsed.length.unit === null) return { ok: false, problem: 'State the unit: 38 mm, or 1 3/8 in.' };
   return { ok: true, body: asJson(make(parsed.length)) };
 }
 
-/** The draft for an entry as it counts now; null where it can be withdrawn and not amended. */
-export function amendmentDraft(entry: Entry, current: Record<string, unknown>): AmendmentDraft | null {
+/** The draft for an entry as it counts now, as this person may amend it; null where it can be withdrawn and not amended. */
+export function amendmentDraft(
+  entry: Entry,
+  current: Record<string, unknown>,
+  personId: string,
+): AmendmentDraft | null {
   switch (entry.type) {
     case 'reading': {
       const body = siteBodies.reading.safeParse(current);
       if (!body.success || !body.data.value) return null;
       const shown = asEntered(body.data.value).replace(' (unit not given)', '');
       return textDraft('What the instrument showed', shown, false, (text) =>
-        lengthChange(text, (value) => ({ ...body.data, value })),
+        lengthChange(text, (value) => saidBy({ ...body.data, value }, personId)),
       );
     }
     case 'measurement': {

@@ -2,8 +2,9 @@
 
 import { classNames } from '@/components/ui/class-names';
 import { isAmendable } from '@/lib/inspection/amendments';
+import { mayAmend, measurerOf } from '@/lib/inspection/measurers';
 import { mayRecord } from '@/lib/inspection/entry-access';
-import type { Entry } from '@/lib/inspection/entry';
+import type { Entry, EntryOf } from '@/lib/inspection/entry';
 import { judgedCheck, judgedMeasurement, type JudgedWords } from '@/lib/inspection/judged-words';
 import { roleWords } from '@/lib/inspection/roles';
 import { AmendForm } from './amend-form';
@@ -15,6 +16,7 @@ import { dayAndTime } from './field-time';
 import { JudgedBody } from './judged-body';
 import { JudgedPanel } from './judged-panel';
 import { LiftHold } from './lift-hold';
+import { readByWords, waitsWordsOf } from './measurer-words';
 import { nameOf, type OpenSheet } from './open-sheet';
 import { QueryParts } from './query-parts';
 import { Screen } from './screen';
@@ -38,6 +40,9 @@ function backOf(open: OpenSheet, entry: Entry) {
       return { href: fieldPaths.pour(pourId), words: open.pour.number };
   }
 }
+
+const whoAmends = (open: OpenSheet, entry: EntryOf<'reading'>): string =>
+  [...new Set([measurerOf(entry), entry.authorId])].map((id) => nameOf(open, id)).join(' and ');
 
 /** How a measured place or a check was judged, where this entry is one. */
 function judgedOf({ sheet }: OpenSheet, entry: Entry): JudgedWords | null {
@@ -69,7 +74,8 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
   const withdrawn = current === null;
   const found = entry.type === 'reading' ? findReading(open, entry.id) : null;
   const judged = judgedOf(open, entry);
-  const own = entry.authorId === person.id;
+  const own = mayAmend(entry, person.id, project.role);
+  const waits = found && waitsWordsOf(open, found.reading);
   const clock = clockOff(entry.clockOffsetMs);
   return (
     <Screen title="Entry" aside={open.pour.number} back={backOf(open, entry)} form>
@@ -83,6 +89,12 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
             {dayAndTime(entry.recordedAt, project.timeZone)}
             {entry.seq === null ? ' · not sent yet' : ` · entry ${entry.seq}`}
           </p>
+          {entry.type === 'reading' && entry.body.measurer && (
+            <p className="font-label text-label font-semibold">
+              Read by {readByWords(open, entry)}
+              {waits && <span className="text-watch"> · {waits}</span>}
+            </p>
+          )}
           {clock && (
             <p className="font-label text-label font-semibold text-watch">
               Recorded while the device&apos;s clock was {clock}: its times are doubtful, its order is not.
@@ -129,8 +141,8 @@ export function EntryScreen({ open, entryId }: { open: OpenSheet; entryId: strin
         )}
         {isAmendable(entry.type) && !own && (
           <p className="px-1 text-label text-pencil">
-            Only {nameOf(open, entry.authorId)} can amend this. You can ask about it; it then holds until
-            answered.
+            Only {entry.type === 'reading' ? whoAmends(open, entry) : nameOf(open, entry.authorId)} can amend
+            this. You can ask about it; it then holds until answered.
           </p>
         )}
       </div>

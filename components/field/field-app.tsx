@@ -1,6 +1,6 @@
 'use client';
 
-import { lazy, Suspense, useSyncExternalStore } from 'react';
+import { Suspense, useSyncExternalStore } from 'react';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { EmptyState } from '@/components/ui/empty-state';
 import { Spinner } from '@/components/ui/spinner';
@@ -10,15 +10,16 @@ import { DeviceProvider } from './device-context';
 import { FieldLink, useFieldRoute } from './field-router';
 import { fieldPaths } from './field-routes';
 import { PeopleScreen } from './people-screen';
+import { piece } from './piece';
 import { PoursScreen } from './pours-screen';
 import { Screen } from './screen';
 import { StoreFailed } from './store-failed';
 import { useSnapshot } from './use-device';
 
 // The list of pours is what opens first; a pour's screens arrive in pieces of their own, which the worker keeps.
-const PourScreen = lazy(async () => ({ default: (await import('./pour-screen')).PourScreen }));
-const PinScreen = lazy(async () => ({ default: (await import('./pin-screen')).PinScreen }));
-const NotSentScreen = lazy(async () => ({ default: (await import('./not-sent-screen')).NotSentScreen }));
+const PourScreen = piece(async () => (await import('./pour-screen')).PourScreen);
+const PinScreen = piece(async () => (await import('./pin-screen')).PinScreen);
+const NotSentScreen = piece(async () => (await import('./not-sent-screen')).NotSentScreen);
 
 let opened: Device | null = null;
 const neverChanges = () => () => undefined;

@@ -14,6 +14,7 @@ export type PourRoute =
   | { part: 'correction'; about: SubjectRef | null }
   | { part: 'entry'; entryId: string }
   | { part: 'events' }
+  | { part: 'confirm' }
   | { part: 'last-walk' }
   | { part: 'instruments' }
   | { part: 'sign' };
@@ -72,6 +73,7 @@ function readPourRoute(parts: string[]): PourRoute | null {
       return first ? { part: 'entry', entryId: first } : null;
     case 'holds':
     case 'fix-list':
+    case 'confirm':
     case 'events':
     case 'last-walk':
     case 'instruments':
@@ -122,6 +124,8 @@ export const fieldPaths = {
   entry: (pourId: string, entryId: string) => join('field', 'pours', pourId, 'entries', entryId),
   holds: (pourId: string) => join('field', 'pours', pourId, 'holds'),
   fixList: (pourId: string) => join('field', 'pours', pourId, 'fix-list'),
+  /** Readings typed by others in this person's name. */
+  confirm: (pourId: string) => join('field', 'pours', pourId, 'confirm'),
   events: (pourId: string) => join('field', 'pours', pourId, 'events'),
   lastWalk: (pourId: string) => join('field', 'pours', pourId, 'last-walk'),
   instruments: (pourId: string) => join('field', 'pours', pourId, 'instruments'),

@@ -10,7 +10,8 @@ import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime } from './field-time';
-import { nameOf, type OpenSheet } from './open-sheet';
+import { readByWords, waitsWordsOf } from './measurer-words';
+import type { OpenSheet } from './open-sheet';
 import { verdictWords } from './verdict-words';
 
 /** Every reading at a point, newest first, withdrawn ones struck through; each opens to correct it or ask about it. */
@@ -32,13 +33,13 @@ export function PointReadings({ open, point }: { open: OpenSheet; point: PointSt
                 <span className={classNames('font-label font-semibold', withdrawn && 'line-through')}>
                   {readingText(bodyShown(reading))}
                 </span>{' '}
-                {withdrawn ? 'withdrawn' : verdictWords(reading.judged)}
+                {withdrawn ? 'withdrawn' : (waitsWordsOf(open, reading) ?? verdictWords(reading.judged))}
                 {governing.has(reading.entry.id) && ' · governs'}
                 {reading.acceptedBy && ' · accepted by the engineer'}
                 <span className="block text-label text-pencil">
                   to {bodyShown(reading).steel} ·{' '}
                   {dayAndTime(reading.entry.body.measuredAt, open.project.timeZone)} ·{' '}
-                  {nameOf(open, reading.entry.authorId)}
+                  {readByWords(open, reading.entry)}
                   {reading.round > 1 && ` · round ${reading.round}`}
                   {reading.pending && ' · not sent yet'}
                   {reading.amendments.length > 0 && ` · amended ${reading.amendments.length} times`}

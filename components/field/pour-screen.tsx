@@ -1,41 +1,38 @@
 'use client';
 
-import { lazy, Suspense, type ReactNode } from 'react';
+import { Suspense, type ReactNode } from 'react';
 import { Spinner } from '@/components/ui/spinner';
 import { buttonClasses } from '@/components/ui/button-classes';
 import { EmptyState } from '@/components/ui/empty-state';
 import { FieldLink } from './field-router';
 import { fieldPaths, type PourRoute } from './field-routes';
 import type { OpenSheet } from './open-sheet';
+import { piece } from './piece';
+import { PieceMissing } from './piece-missing';
 import { PourSheet } from './pour-sheet';
 import { ReadingScreen } from './reading-screen';
 import { Screen } from './screen';
 import { SignInLink } from './sign-in-link';
-import { useOpenPour, useSnapshot } from './use-device';
+import { useOpenPour, usePourFailed, useSnapshot } from './use-device';
 
 // What is not needed at once arrives in its own pieces; the worker keeps them all, so that they open without a network.
-const ChecksScreen = lazy(async () => ({ default: (await import('./checks-screen')).ChecksScreen }));
-const MeasurementsScreen = lazy(async () => ({
-  default: (await import('./measurements-screen')).MeasurementsScreen,
-}));
-const CrewPour = lazy(async () => ({ default: (await import('./crew-pour')).CrewPour }));
-const FixListScreen = lazy(async () => ({ default: (await import('./fix-list-screen')).FixListScreen }));
-const HoldsScreen = lazy(async () => ({ default: (await import('./holds-screen')).HoldsScreen }));
-const PhotosScreen = lazy(async () => ({ default: (await import('./photos-screen')).PhotosScreen }));
-const NonconformanceForm = lazy(async () => ({
-  default: (await import('./nonconformance-form')).NonconformanceForm,
-}));
-const NonconformanceScreen = lazy(async () => ({
-  default: (await import('./nonconformance-screen')).NonconformanceScreen,
-}));
-const CorrectionForm = lazy(async () => ({ default: (await import('./correction-form')).CorrectionForm }));
-const EntryScreen = lazy(async () => ({ default: (await import('./entry-screen')).EntryScreen }));
-const EventsScreen = lazy(async () => ({ default: (await import('./events-screen')).EventsScreen }));
-const LastWalkScreen = lazy(async () => ({ default: (await import('./last-walk-screen')).LastWalkScreen }));
-const InstrumentsScreen = lazy(async () => ({
-  default: (await import('./instruments-screen')).InstrumentsScreen,
-}));
-const SignScreen = lazy(async () => ({ default: (await import('./sign-screen')).SignScreen }));
+const ChecksScreen = piece(async () => (await import('./checks-screen')).ChecksScreen);
+const MeasurementsScreen = piece(async () => (await import('./measurements-screen')).MeasurementsScreen);
+const CrewPour = piece(async () => (await import('./crew-pour')).CrewPour);
+const FixListScreen = piece(async () => (await import('./fix-list-screen')).FixListScreen);
+const HoldsScreen = piece(async () => (await import('./holds-screen')).HoldsScreen);
+const PhotosScreen = piece(async () => (await import('./photos-screen')).PhotosScreen);
+const NonconformanceForm = piece(async () => (await import('./nonconformance-form')).NonconformanceForm);
+const NonconformanceScreen = piece(
+  async () => (await import('./nonconformance-screen')).NonconformanceScreen,
+);
+const CorrectionForm = piece(async () => (await import('./correction-form')).CorrectionForm);
+const EntryScreen = piece(async () => (await import('./entry-screen')).EntryScreen);
+const EventsScreen = piece(async () => (await import('./events-screen')).EventsScreen);
+const LastWalkScreen = piece(async () => (await import('./last-walk-screen')).LastWalkScreen);
+const InstrumentsScreen = piece(async () => (await import('./instruments-screen')).InstrumentsScreen);
+const ConfirmScreen = piece(async () => (await import('./confirm-screen')).ConfirmScreen);
+const SignScreen = piece(async () => (await import('./sign-screen')).SignScreen);
 
 const toPours = { href: fieldPaths.pours, words: 'pours' };
 
@@ -43,6 +40,7 @@ const toPours = { href: fieldPaths.pours, words: 'pours' };
 export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute }) {
   const { person, pours, projects, sync, asks } = useSnapshot();
   const open = useOpenPour(pourId);
+  const failed = usePourFailed(pourId);
   if (!person && sync.phase === 'idle' && !asks) return <Opening title="Pour" />;
   if (!person) {
     return (
@@ -71,6 +69,7 @@ export function PourScreen({ pourId, route }: { pourId: string; route: PourRoute
         />
       );
     }
+    if (failed) return <PieceMissing title={known?.number ?? 'Pour'} />;
     return (
       <Screen title={known?.number ?? 'Pour'} back={toPours}>
         <p className="p-4">
@@ -145,6 +144,8 @@ function PourPart({ open, route }: { open: OpenSheet; route: PourRoute }) {
       return <LastWalkScreen open={open} />;
     case 'instruments':
       return <InstrumentsScreen open={open} />;
+    case 'confirm':
+      return <ConfirmScreen open={open} />;
     case 'sign':
       return <SignScreen open={open} />;
   }

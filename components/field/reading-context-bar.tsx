@@ -2,15 +2,16 @@
 
 import { classNames } from '@/components/ui/class-names';
 
-export type Picker = 'instrument' | 'steel' | 'unit';
+export type Picker = 'instrument' | 'steel' | 'measurer' | 'unit';
 
-/** Instrument, steel touched and unit: always in view, changed by a tap, and no tap per reading. */
+/** Instrument, steel touched, who reads and unit: always in view, changed by a tap, and no tap per reading. */
 export function ReadingContextBar({
   instrument,
   instrumentNote,
   instrumentGood,
   steel,
   unit,
+  readBy,
   onPick,
 }: {
   instrument: string;
@@ -18,6 +19,8 @@ export function ReadingContextBar({
   instrumentGood: boolean;
   steel: string;
   unit: string;
+  /** Who reads the gauge while this person types; null: this person. */
+  readBy: string | null;
   onPick: (which: Picker) => void;
 }) {
   const cells: {
@@ -26,6 +29,7 @@ export function ReadingContextBar({
     value: string;
     note?: string;
     bad?: boolean;
+    lines?: string;
     share: string;
   }[] = [
     {
@@ -34,9 +38,16 @@ export function ReadingContextBar({
       value: instrument,
       note: instrumentNote,
       bad: !instrumentGood,
-      share: 'flex-[5]',
+      share: 'flex-[4]',
     },
-    { which: 'steel', label: 'To', value: steel, share: 'flex-[5]' },
+    { which: 'steel', label: 'To', value: steel, lines: 'line-clamp-2', share: 'flex-[4]' },
+    {
+      which: 'measurer',
+      label: 'Read by',
+      value: readBy?.split(' ')[0] ?? 'you',
+      ...(readBy ? { note: 'to confirm' } : {}),
+      share: 'flex-[3]',
+    },
     { which: 'unit', label: 'Unit', value: unit, share: 'flex-[2]' },
   ];
   return (
@@ -55,7 +66,7 @@ export function ReadingContextBar({
           <span className={classNames('block text-xs font-medium', !cell.bad && 'text-pencil')}>
             {cell.label}
           </span>
-          <span className="line-clamp-1">{cell.value}</span>
+          <span className={cell.lines ?? 'line-clamp-1'}>{cell.value}</span>
           {cell.note && <span className="line-clamp-1 text-xs font-medium">{cell.note}</span>}
         </button>
       ))}

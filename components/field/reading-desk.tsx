@@ -108,7 +108,7 @@ export function ReadingDesk({
       // What is sent again unchanged was measured when it was measured.
       measuredAt: again && typed === refilled ? again.body.measuredAt : new Date().toISOString(),
       asFoundBar: asFoundBar.trim() || null,
-      measurer: null,
+      measurer: setup.measurer && { personId: setup.measurer.id, confirmed: false },
     });
     if (!done) {
       setPresses((before) => (before.length === 0 ? typed : before));
@@ -157,7 +157,7 @@ export function ReadingDesk({
   };
 
   return (
-    <div className="grid h-full min-h-0 grid-cols-[minmax(0,1fr)] grid-rows-[minmax(3.5rem,1fr)_auto] overflow-y-auto bg-sheet md:grid-cols-[minmax(0,1fr)_26rem] md:grid-rows-1 md:overflow-hidden">
+    <div className="grid h-full min-h-0 grid-cols-[minmax(0,1fr)] grid-rows-[minmax(3.5rem,1fr)_auto] overflow-y-auto bg-sheet md:overflow-hidden md:landscape:grid-cols-[minmax(0,1fr)_26rem] md:landscape:grid-rows-1">
       <div ref={drawings} className="min-h-0 overflow-y-auto">
         <WorkingMap
           place={place}
@@ -179,70 +179,75 @@ export function ReadingDesk({
         )}
         <FaceTable place={place} state={state} unit={unit} />
       </div>
-      <div className="flex min-h-0 flex-col border-ink bg-sheet md:overflow-y-auto md:border-l">
-        <div className="flex-1" />
-        <ReadingReadout
-          target={target}
-          presses={presses}
-          unit={unit}
-          limits={requirement}
-          problem={problem}
-          block={setup.isBlock ? withUnit(setup.blockMm, unit) : null}
-          onShowReadings={() => setPanel('point')}
-        />
-        {kept && !last && <RefusedStrip entryId={kept.entryId} />}
-        {last && kept && (
-          <VerdictStrip
-            open={open}
-            reading={last.reading}
-            label={last.point.label}
-            pointKey={last.point.key}
-            governs={governingBeside(last.point, last.reading)}
+      {/* A tablet held upright has the map over both hands: what is read on the left, the keys on the right. */}
+      <div className="flex min-h-0 flex-col justify-end border-ink bg-sheet md:overflow-y-auto md:portrait:grid md:portrait:grid-cols-2 md:portrait:border-t md:landscape:border-l">
+        <div className="flex flex-col justify-end">
+          <ReadingReadout
+            target={target}
+            presses={presses}
             unit={unit}
-            onUndo={
-              kept.undoable
-                ? () => void undo().then((point) => point && setChosen({ kind: 'point', key: point.key }))
-                : null
-            }
-            onAgain={() => setChosen({ kind: 'point', key: last.point.key })}
-            onHow={() => setPanel('how')}
+            limits={requirement}
+            problem={problem}
+            block={setup.isBlock ? withUnit(setup.blockMm, unit) : null}
+            onShowReadings={() => setPanel('point')}
           />
-        )}
-        <ReadingContextBar
-          instrument={instrument?.name ?? 'choose'}
-          instrumentNote={standing?.words ?? ''}
-          instrumentGood={standing?.good ?? false}
-          steel={asFoundBar.trim() ? `${setup.steel} (found ${asFoundBar.trim()})` : setup.steel}
-          unit={unit}
-          onPick={setPicker}
-        />
-        {setup.isBlock ? (
-          <BlockKeys block={withUnit(setup.blockMm, unit)} busy={busy} onKeep={keepBlock} />
-        ) : (
-          <>
-            <Keypad
+          {kept && !last && <RefusedStrip entryId={kept.entryId} />}
+          {last && kept && (
+            <VerdictStrip
+              open={open}
+              reading={last.reading}
+              label={last.point.label}
+              pointKey={last.point.key}
+              governs={governingBeside(last.point, last.reading)}
               unit={unit}
-              onPress={press}
-              onDelete={() => setPresses((before) => before.slice(0, -1))}
+              onUndo={
+                kept.undoable
+                  ? () => void undo().then((point) => point && setChosen({ kind: 'point', key: point.key }))
+                  : null
+              }
+              onAgain={() => setChosen({ kind: 'point', key: last.point.key })}
+              onHow={() => setPanel('how')}
             />
-            {onward && presses.length === 0 ? (
-              <FieldLink href={onward.href} className={buttonClasses('primary', true, 'h-15 text-lead')}>
-                {onward.words}
-              </FieldLink>
-            ) : (
-              <Button
-                variant="primary"
-                wide
-                className="h-15 text-lead"
-                aria-disabled={presses.length === 0 || undefined}
-                onClick={keepTyped}
-              >
-                {next ? `Keep, next ${next.label}` : 'Keep'}
-              </Button>
-            )}
-          </>
-        )}
-        <div className="pb-[env(safe-area-inset-bottom)]" />
+          )}
+          <ReadingContextBar
+            instrument={instrument?.name ?? 'choose'}
+            instrumentNote={standing?.words ?? ''}
+            instrumentGood={standing?.good ?? false}
+            steel={asFoundBar.trim() ? `${setup.steel} (found ${asFoundBar.trim()})` : setup.steel}
+            unit={unit}
+            readBy={setup.measurer?.name ?? null}
+            onPick={setPicker}
+          />
+        </div>
+        <div className="flex flex-col justify-end border-ink md:portrait:border-l">
+          {setup.isBlock ? (
+            <BlockKeys block={withUnit(setup.blockMm, unit)} busy={busy} onKeep={keepBlock} />
+          ) : (
+            <>
+              <Keypad
+                unit={unit}
+                onPress={press}
+                onDelete={() => setPresses((before) => before.slice(0, -1))}
+              />
+              {onward && presses.length === 0 ? (
+                <FieldLink href={onward.href} className={buttonClasses('primary', true, 'h-15 text-lead')}>
+                  {onward.words}
+                </FieldLink>
+              ) : (
+                <Button
+                  variant="primary"
+                  wide
+                  className="h-15 text-lead"
+                  aria-disabled={presses.length === 0 || undefined}
+                  onClick={keepTyped}
+                >
+                  {next ? `Keep, next ${next.label}` : 'Keep'}
+                </Button>
+              )}
+            </>
+          )}
+          <div className="pb-[env(safe-area-inset-bottom)]" />
+        </div>
       </div>
       <ReadingPicker
         which={picker}

@@ -41,6 +41,7 @@ export function ReadingPicker({
     instrument: 'Read with',
     steel: 'Steel touched',
     unit: 'Unit and sound',
+    measurer: 'Who reads the gauge',
   };
   return (
     <Dialog
@@ -57,6 +58,7 @@ export function ReadingPicker({
       {which === 'instrument' && <InstrumentChoice {...{ open, setup, standingAt }} />}
       {which === 'steel' && <SteelChoice {...{ face, setup, asFoundBar, onAsFoundBar }} />}
       {which === 'unit' && <UnitChoice setup={setup} />}
+      {which === 'measurer' && <MeasurerChoice open={open} setup={setup} />}
     </Dialog>
   );
 }
@@ -184,6 +186,33 @@ function UnitChoice({ setup }: { setup: ReadingSetup }) {
         checked={setup.settings.sound}
         onChange={(event) => setup.change({ sound: event.target.checked })}
       />
+    </div>
+  );
+}
+
+function MeasurerChoice({ open, setup }: { open: OpenSheet; setup: ReadingSetup }) {
+  const { person } = open;
+  return (
+    <div className="grid gap-4">
+      <ChoiceList
+        legend="Readings are"
+        value={setup.measurer?.id ?? person.id}
+        onChoose={(id) =>
+          setup.change({ readBy: id === person.id ? null : { typistId: person.id, personId: id } })
+        }
+        choices={[
+          { value: person.id, label: `read and typed by ${person.name}`, detail: 'You hold the gauge' },
+          ...setup.measurers.map(({ id, name }) => ({
+            value: id,
+            label: `read by ${name}, typed by you`,
+            detail: `Not verified until ${name} confirms them`,
+          })),
+        ]}
+      />
+      <p className="text-label text-pencil">
+        Inspectors of this project can be named. If somebody else holds the gauge for you, read it yourself:
+        the reading is yours.
+      </p>
     </div>
   );
 }

@@ -7,6 +7,8 @@ export interface ReadingSettings {
   /** Size of the go/no-go block in mm. */
   blockMm: number | null;
   sound: boolean;
+  /** Who reads while another types; null: who types. It holds for that typist only, whoever takes the device next. */
+  readBy: { typistId: string; personId: string } | null;
 }
 
 export const noSettings: ReadingSettings = {
@@ -15,6 +17,7 @@ export const noSettings: ReadingSettings = {
   steel: {},
   blockMm: null,
   sound: false,
+  readBy: null,
 };
 
 const keyOf = (projectId: string) => `cagewright.reading.${projectId}`;

@@ -11,6 +11,7 @@ import { fieldPaths } from './field-routes';
 import type { OpenSheet } from './open-sheet';
 import { SheetLine, SheetLines } from './sheet-line';
 import { nonconformanceWords } from './state-tone';
+import { readingsToConfirm } from './to-confirm';
 import { walkProgress } from './walk-order';
 
 /** Checks by group, with what is open and what is not met. */
@@ -72,8 +73,18 @@ function faceStanding(state: FaceState): { mark: MarkKind; words: string } {
 /** Faces element by element, with points read and what is not met. */
 export function FaceLines({ open }: { open: OpenSheet }) {
   const { plan, faces, pourId } = open.sheet;
+  const toConfirm = readingsToConfirm(open).reduce((count, face) => count + face.readings.length, 0);
   return (
     <SheetLines heading="Cover" aside="points read">
+      {toConfirm > 0 && (
+        <SheetLine
+          href={fieldPaths.confirm(pourId)}
+          tone="watch"
+          title="Read by you, typed by others"
+          detail="They count once you confirm them"
+          count={`${toConfirm} to confirm`}
+        />
+      )}
       {plan.elements.flatMap((element) =>
         element.faces.map((face) => {
           const state = faces.find((one) => one.faceId === face.id);

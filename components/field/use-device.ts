@@ -26,3 +26,11 @@ export function useOpenPour(pourId: string): OpenPour | undefined {
   const read = useCallback(() => device.pour(pourId), [device, pourId]);
   return useSyncExternalStore(subscribe, read, read);
 }
+
+/** Did this pour turn out not to open on this device? */
+export function usePourFailed(pourId: string): boolean {
+  const device = useDevice();
+  const subscribe = useCallback((listener: () => void) => device.subscribe(listener), [device]);
+  const read = useCallback(() => device.pourFailed(pourId), [device, pourId]);
+  return useSyncExternalStore(subscribe, read, read);
+}

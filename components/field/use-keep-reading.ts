@@ -65,7 +65,8 @@ export function useKeepReading(open: OpenSheet, sound: boolean, again: Entry | n
       const found = sheet ? findReading({ sheet }, entry.id) : null;
       if (found) {
         const depthLow = found.reading.depth?.verdict === 'not-met';
-        signalVerdict(depthLow ? 'not-met' : found.reading.judged.verdict, sound);
+        const { judged, onceConfirmed } = found.reading;
+        signalVerdict(depthLow ? 'not-met' : (onceConfirmed ?? judged).verdict, sound);
       }
       return true;
     } catch (error) {

@@ -11,6 +11,7 @@ import type { ReadingState } from '@/lib/inspection/sheet-types';
 import { bodyShown, readingText } from '@/lib/inspection/reading-text';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
+import { waitsWordsOf } from './measurer-words';
 import type { OpenSheet } from './open-sheet';
 import { markTone } from './state-tone';
 import { marginWords, verdictWords } from './verdict-words';
@@ -42,13 +43,18 @@ export function VerdictStrip({
   onHow: () => void;
 }) {
   const { judged } = reading;
+  const waits = waitsWordsOf(open, reading);
   const kind = markOfReading(judged);
+  // What was typed for another is told at once, though it counts only once they confirm it.
+  const typed = reading.onceConfirmed ?? judged;
+  const typedKind = markOfReading(typed);
   const about = { kind: 'point', id: pointKey } as const;
   const pourId = open.sheet.pourId;
   return (
     <div className="border-t border-ink bg-sheet">
       <p role="status" className="sr-only">
-        {label}: {readingText(bodyShown(reading))}, {verdictWords(judged)}
+        {label}: {readingText(bodyShown(reading))}, {verdictWords(typed)}
+        {waits && `, ${waits}`}
       </p>
       <div className="flex min-h-target items-stretch">
         <button
@@ -60,10 +66,10 @@ export function VerdictStrip({
           <span className="min-w-0">
             <span className="block font-label font-semibold">
               {label}: {readingText(bodyShown(reading))}{' '}
-              <span className={toneText[markTone[kind]]}>{verdictWords(judged)}</span>
+              <span className={toneText[markTone[typedKind]]}>{verdictWords(typed)}</span>
             </span>
             <span className="line-clamp-2 text-label text-pencil">
-              {judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit)}
+              {waits ?? (judged.verdict === 'not-verified' ? judged.reason : marginWords(judged, unit))}
               <span className="ml-2 text-chalk underline underline-offset-4">How judged?</span>
             </span>
           </span>
@@ -87,7 +93,7 @@ export function VerdictStrip({
           {reading.depth.verdict !== 'met' && reading.depth.reason}
         </p>
       )}
-      {(judged.verdict === 'not-met' || reading.depth?.verdict === 'not-met') && (
+      {(typed.verdict === 'not-met' || reading.depth?.verdict === 'not-met') && (
         <div className="border-t border-rule">
           <div className="grid grid-cols-3">
             <FieldLink

@@ -1,5 +1,6 @@
 import { MarkIcon } from '@/components/drawings/mark';
 import { markWords } from '@/components/drawings/mark-words';
+import { measurerOf } from '@/lib/inspection/measurers';
 import type { LengthUnit } from '@/lib/concrete/length';
 import { judgedReading } from '@/lib/inspection/judged-words';
 import type {
@@ -154,7 +155,8 @@ function readingCells(
           {entry.body.instrumentId
             ? (context.instruments.get(entry.body.instrumentId)?.name ?? 'instrument not in the register')
             : 'instrument not named'}
-          , {personName(entry.authorId, context.people)}
+          , {personName(measurerOf(entry), context.people)}
+          {measurerOf(entry) !== entry.authorId && `, typed by ${personName(entry.authorId, context.people)}`}
         </span>
       </>
     ),

@@ -113,6 +113,7 @@ class FieldDevice {
               read: () => this.#changed(),
             })
           : undefined,
+      pourFailed: (pourId) => this.#pours.failed(pourId),
       keepPour: (pourId) => this.#choose(pourId, true),
       dropPour: (pourId) => this.#choose(pourId, false),
       record: async (at, type, body) => {

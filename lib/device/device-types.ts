@@ -155,6 +155,8 @@ export interface Device {
   subscribe(listener: () => void): () => void;
   /** The opened pour as last folded; undefined while it is being read from the store. */
   pour(pourId: string): OpenPour | undefined;
+  /** The pour did not open: a piece of the program is missing, or its store cannot be read. Loading the page tries again. */
+  pourFailed(pourId: string): boolean;
   keepPour(pourId: string): Promise<void>;
   dropPour(pourId: string): Promise<void>;
   /**

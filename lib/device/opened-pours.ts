@@ -27,6 +27,13 @@ function crewPourOf(work: PersonWork, pourId: string): CrewPour {
 /** The pours that screens look at: the same object as long as nothing in it changed. */
 export class OpenedPours {
   #opened = new Map<string, { version: number; open: OpenPour }>();
+  /** Pours that could not be read: not tried again before the page is loaded anew, which brings what is missing. */
+  readonly #failed = new Set<string>();
+
+  /** Did this pour turn out not to open on this device as it is now? */
+  failed(pourId: string): boolean {
+    return this.#failed.has(pourId);
+  }
 
   forget(pourId?: string): void {
     if (pourId === undefined) this.#opened = new Map();
@@ -47,7 +54,13 @@ export class OpenedPours {
     if (!project) return undefined;
     const folded = work.memory.folded(pourId, now);
     if (!folded) {
-      void work.openPour(pourId, project.id).then(read, () => undefined);
+      if (this.#failed.has(pourId)) return undefined;
+      void work.openPour(pourId, project.id).then(read, () => {
+        // A store that was closed under it, since the device changed hands, says nothing of the pour.
+        if (work.closed) return;
+        this.#failed.add(pourId);
+        read();
+      });
       return undefined;
     }
     const known = this.#opened.get(pourId);

@@ -2,6 +2,7 @@ import { isAmendable } from './amendments';
 import { mayRecord } from './entry-access';
 import { siteBodies, type SubjectRef } from './entry-bodies';
 import type { Entry } from './entry';
+import { mayAmend, measurerChange, measurerProblem } from './measurers';
 import { roleWords, type Role } from './roles';
 import type { Sheet } from './sheet-types';
 
@@ -54,7 +55,8 @@ export function admitEntry(entry: Entry, sheet: Sheet): Refusal | null {
         return absent('This requirement', 'requirementId');
       if (pointId !== null && !pointExists(sheet, pointId) && !earlier)
         return absent('This reading point', 'pointId');
-      return null;
+      const unsaid = measurerProblem(entry.body, entry.authorId);
+      return unsaid ? { code: 'not-allowed', sentence: unsaid, field: 'measurer' } : null;
     }
     case 'measurement':
       return sheet.plan.measurements.some((item) => item.id === entry.body.itemId) || earlier
@@ -161,7 +163,7 @@ function dispositionRefusal(nonconformanceId: string, accepts: string[], sheet: 
 function amendmentRefusal(entry: Extract<Entry, { type: 'amendment' }>, sheet: Sheet): Refusal | null {
   const root = sheet.entries.find((one) => one.id === entry.body.rootId);
   if (!root) return absent('The entry to amend', 'rootId');
-  if (root.authorId !== entry.authorId) {
+  if (!mayAmend(root, entry.authorId, entry.authorRole)) {
     return {
       code: 'not-allowed',
       sentence: 'Only the person who recorded it can amend it. You can raise a query.',
@@ -176,7 +178,10 @@ function amendmentRefusal(entry: Extract<Entry, { type: 'amendment' }>, sheet: S
     };
   if (entry.body.replacement === null) return null;
   const parsed = siteBodies[root.type].safeParse(entry.body.replacement);
-  if (parsed.success) return null;
+  if (parsed.success) {
+    const unsaid = measurerChange(root, parsed.data, entry.authorId);
+    return unsaid ? { code: 'not-allowed', sentence: unsaid, field: 'replacement.measurer' } : null;
+  }
   const issue = parsed.error.issues[0];
   return {
     code: 'invalid',

@@ -2,6 +2,7 @@ import { headsOf } from './causality';
 import type { EntryOf } from './entry';
 import { siteBodies } from './entry-bodies';
 import type { Facts } from './facts';
+import { mayAmend, measurerChange } from './measurers';
 import type { AppliedAmendment } from './sheet-types';
 
 /** Types whose recorder may correct or withdraw them. Everything else is answered by a further entry. */
@@ -68,12 +69,14 @@ function bodyAfter<T extends AmendableType>(
   before: EntryOf<T>['body'] | null,
   needsPhoto: (before: EntryOf<T>['body'], after: EntryOf<T>['body']) => boolean,
 ): Outcome<T> {
-  if (amendment.authorId !== root.authorId)
+  if (!mayAmend(root, amendment.authorId, amendment.authorRole))
     return { body: before, problem: 'Only the person who recorded it can amend it.' };
   if (amendment.body.replacement === null) return { body: null, problem: null };
   const parsed = siteBodies[root.type].safeParse(amendment.body.replacement);
   if (!parsed.success) return { body: before, problem: 'The amended values cannot be read.' };
   const after = parsed.data as EntryOf<T>['body'];
+  const unsaid = measurerChange(root, parsed.data, amendment.authorId);
+  if (unsaid) return { body: before, problem: unsaid };
   const shown = amendment.body.photoId !== null && facts.photoIds.has(amendment.body.photoId);
   if (before !== null && needsPhoto(before, after) && !shown) {
     return {

@@ -213,7 +213,9 @@ function notVerified(place: Place, points: PointState[]): Hold[] {
       where: `${place.where}, ${listed(open.map((one) => one.label))}`,
       since: earliest(open.flatMap((point) => point.readings.map((one) => one.entry.recordedAt))),
       clearedBy: 'inspector',
-      need: 'Read these points again with an instrument in order, or give what is missing.',
+      need: open.some((point) => point.readings.some((one) => one.onceConfirmed))
+        ? 'The person named as having read confirms the readings, or these points are read again.'
+        : 'Read these points again with an instrument in order, or give what is missing.',
       subjects: open.map((one) => ({ kind: 'point', id: one.key })),
     },
   ];

@@ -8,6 +8,7 @@ import type { CorrectionsByKey } from './corrections';
 import type { EntryOf } from './entry';
 import { subjectKey, type Facts } from './facts';
 import { standingAt } from './instruments';
+import { waitsForMeasurer } from './measurers';
 import type { Element, Face, Plan, ReadingPoint, Requirement } from './plan';
 import type { DepthState, InstrumentState, MarkKind, PointState, ReadingState } from './sheet-types';
 
@@ -38,6 +39,7 @@ function judgeBody(
   place: PointPlace,
   entry: ReadingEntry,
   body: ReadingBody,
+  confirmed = !waitsForMeasurer(body),
 ): JudgedReading {
   const planned = place.face.requirements.find((candidate) => candidate.id === body.requirementId) ?? null;
   const requirement = planned && limitsFor(planned, body.asFoundBar);
@@ -47,7 +49,7 @@ function judgeBody(
       mm: body.value?.mm ?? null,
       ...(body.goNoGo ? { goNoGo: body.goNoGo } : {}),
       sectionMm: place.element.thicknessMm,
-      confirmed: body.measurer === null || body.measurer.confirmed,
+      confirmed,
     },
     requirement,
     {
@@ -139,6 +141,8 @@ function judgeRecorded(
     requirement,
     depth: counts && depthOf(place, requirement, counts, context.plan.units),
     judged: counts?.judged ?? judgeBody(context, place, entry, entry.body),
+    onceConfirmed:
+      counts && waitsForMeasurer(counts.body) ? judgeBody(context, place, entry, counts.body, true) : null,
     round: 1,
     acceptedBy: acceptedAsSeen(context.facts, entry, context.accepted),
     pending: entry.seq === null,

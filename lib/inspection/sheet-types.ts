@@ -26,6 +26,8 @@ export interface ReadingState {
   amendments: AppliedAmendment[];
   requirement: Requirement | null;
   judged: JudgedReading;
+  /** What it will be judged once the person named as its measurer confirms it; null where it does not wait for that. */
+  onceConfirmed: JudgedReading | null;
   /** Effective depth, judged apart from cover, where the steel touched is the main bar; null otherwise. */
   depth: DepthState | null;
   /** 1 is the first round; each correction of its point that it had seen opens the next. */

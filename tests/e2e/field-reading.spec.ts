@@ -1,5 +1,7 @@
 import { expect, test, type Page, type Locator } from '@playwright/test';
+import { noViolations, smallTargets } from './field-checks';
 import { keepScreenshot } from './keep-screenshot';
+import { planPour } from './office-pour';
 import { litPoint, openPour, pointOnMap, readWith } from './on-site';
 import { outboxOf } from './outbox';
 import { phone, signedIn } from './sign-in';
@@ -26,6 +28,15 @@ async function countTaps(page: Page): Promise<() => Promise<number>> {
       counted.taps = 0;
       return taps;
     });
+}
+
+/** Keeps a pour on the device that was not planned for it, and opens it. */
+async function keepOnDevice(page: Page, number: string): Promise<void> {
+  const row = page.getByRole('listitem').filter({ hasText: number });
+  await expect(row).toBeVisible();
+  const keep = row.getByRole('button', { name: 'Keep on this device' });
+  if (await keep.isVisible()) await keep.tap();
+  await openPour(page, number);
 }
 
 async function tapReading(page: Page, value: string): Promise<void> {
@@ -162,6 +173,60 @@ test('a tap beside the points reads a spot, and a low one asks what next without
   expect(second).toMatchObject({ type: 'reading', body: { pointId: `spot:${first?.id}` } });
   await keepScreenshot(page, 'field-reading-spot');
   await context.close();
+});
+
+test('one reads the gauge and another types: three taps each, and it counts once who read confirms it', async ({
+  browser,
+}) => {
+  const boss = await signedIn(browser, 'superintendent', phone, '/field');
+  await planPour(boss.page, 'P-921', 'Waiting room slab, measured by two');
+  await boss.context.close();
+
+  const tomasz = await signedIn(browser, 'secondInspector', phone, '/field');
+  await keepOnDevice(tomasz.page, 'P-921');
+  await openFace(tomasz.page, /Waiting room slab, Top .*0 of 5/);
+  await readWith(tomasz.page, 'DG-1');
+  await tomasz.page.getByRole('button', { name: 'Read by you' }).tap();
+  const dialog = tomasz.page.getByRole('dialog', { name: 'Who reads the gauge' });
+  await expect(dialog.getByRole('radio')).toHaveCount(2);
+  await dialog.getByText('read by Noor Valdés').tap();
+  await dialog.getByRole('button', { name: 'Done' }).tap();
+  const taps = await countTaps(tomasz.page);
+  const met = await litPoint(tomasz.page);
+  await tapReading(tomasz.page, '46');
+  expect(await taps()).toBeLessThanOrEqual(3);
+  await expect(
+    verdict(tomasz.page, new RegExp(`^${met}: 46 mm, met, not verified until Noor Valdés confirms it`)),
+  ).toHaveCount(1);
+  await expect(pointOnMap(tomasz.page, met)).toHaveAccessibleName(/not verified/);
+  await expect(tomasz.page.getByRole('button', { name: /^Read by Noor/ })).toBeVisible();
+  await keepScreenshot(tomasz.page, 'field-reading-typed-for-another');
+  const second = await litPoint(tomasz.page);
+  await tapReading(tomasz.page, '31');
+  await expect(verdict(tomasz.page, new RegExp(`^${second}: 31 mm, not met, low`))).toHaveCount(1);
+  await expect(tomasz.page.getByRole('link', { name: 'Photo', exact: true })).toBeVisible();
+  await expect(tomasz.page.getByRole('banner').getByRole('link').last()).toContainText('all sent');
+  await tomasz.context.close();
+
+  const noor = await signedIn(browser, 'inspector', phone, '/field');
+  await keepOnDevice(noor.page, 'P-921');
+  await noor.page.getByRole('link', { name: /Read by you, typed by others/ }).tap();
+  const typed = noor.page.getByRole('listitem');
+  await expect(typed).toHaveCount(2);
+  await expect(typed.filter({ hasText: `${second}: 31 mm` })).toContainText('typed by Tomasz Brük');
+  await noViolations(noor.page, 'readings to confirm');
+  expect(await smallTargets(noor.page)).toEqual([]);
+  await keepScreenshot(noor.page, 'field-readings-to-confirm');
+  await noor.page.getByRole('button', { name: 'Confirm: I read these 2' }).tap();
+  await expect(noor.page.getByText('Nothing waits for your word')).toBeVisible();
+  await noor.page.getByRole('link', { name: 'Back to P-921' }).tap();
+  await openFace(noor.page, /Waiting room slab, Top .*2 of 5/);
+  await expect(pointOnMap(noor.page, met)).toHaveAccessibleName(/, met/);
+  await expect(pointOnMap(noor.page, second)).toHaveAccessibleName(/not met, low/);
+  await pointOnMap(noor.page, second).tap();
+  await noor.page.getByRole('button', { name: /1 reading/ }).tap();
+  await expect(noor.page.getByRole('dialog')).toContainText('Noor Valdés, typed by Tomasz Brük');
+  await noor.context.close();
 });
 
 test('a block that passes or not has two keys, and proves no number', async ({ browser }) => {

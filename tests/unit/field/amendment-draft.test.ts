@@ -10,7 +10,7 @@ function readingAt(mm: number) {
   const id = story.reads('A1', mm);
   const sheet = foldSheet(smallPlan(), story.recorded);
   const entry = sheet.entries.find((one) => one.id === id) as Entry;
-  const draft = amendmentDraft(entry, currentBody(sheet, entry) ?? {});
+  const draft = amendmentDraft(entry, currentBody(sheet, entry) ?? {}, entry.authorId);
   if (draft?.kind !== 'text') throw new Error('A reading is amended by its length.');
   return { sheet, entry, draft };
 }

@@ -132,6 +132,7 @@ export class MemoryDevice implements Device {
     return () => this.listeners.delete(listener);
   };
   pour = (id: string) => (id === pourId ? this.current : undefined);
+  pourFailed = () => false;
   keepPour = async () => undefined;
   dropPour = async () => undefined;
 
