@@ -1,3 +1,4 @@
+import type { LabelSide } from './face-map-labels';
 import { Mark } from './mark';
 import type { MarkKind } from './mark-words';
 
@@ -24,19 +25,16 @@ export function FaceMapMark({
   r,
   selected,
   labelled,
-  nearRight,
-  nearTop,
+  side,
 }: {
   point: FaceMapPoint;
   r: number;
   selected: boolean;
   labelled: boolean;
-  /** Close to an edge: the label goes to the other side. */
-  nearRight: boolean;
-  nearTop: boolean;
+  /** Where the label hides least. */
+  side: LabelSide;
 }) {
   const away = selected ? r + 11 : r + 4;
-  const side = nearRight ? -1 : 1;
   return (
     <>
       {selected && (
@@ -56,9 +54,9 @@ export function FaceMapMark({
       <Mark kind={point.mark} r={r} />
       {labelled && (
         <text
-          x={side * away}
-          y={nearTop ? away + 8 : -away + 3}
-          textAnchor={nearRight ? 'end' : 'start'}
+          x={side.x * away}
+          y={side.y === 1 ? away + 8 : -away + 3}
+          textAnchor={side.x === -1 ? 'end' : 'start'}
           className="font-label"
           fontStyle={point.spot ? 'italic' : undefined}
           fontSize={selected ? 15 : 12}

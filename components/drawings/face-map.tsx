@@ -1,6 +1,7 @@
 import { useId, type ReactNode } from 'react';
 import { DimensionLine } from './dimension-line';
 import { faceProportion, gridSteps, type FaceRectangle } from './face-map-geometry';
+import { labelSides } from './face-map-labels';
 import { FaceMapMark, type FaceMapPoint } from './face-map-mark';
 import { markWords, type MarkKind } from './mark-words';
 
@@ -46,8 +47,8 @@ export function FaceMap(props: FaceMapProps) {
   const summary = [...counts].map(([kind, count]) => `${count} ${markWords[kind]}`).join(', ');
   return (
     <figure
-      className="grid grid-cols-[minmax(0,1fr)_auto] content-start gap-1.5 p-2"
-      style={{ maxWidth: `calc(${(aspect * maxHeightRem).toFixed(2)}rem + 2.5rem)` }}
+      className="grid grid-cols-[minmax(0,1fr)_auto] content-start gap-1.5 p-4"
+      style={{ maxWidth: `calc(${(aspect * maxHeightRem).toFixed(2)}rem + 3.5rem)` }}
     >
       <div className="relative w-full self-start" style={{ aspectRatio: String(aspect) }}>
         <svg
@@ -86,6 +87,11 @@ function FaceMapContent({
     height: share(rectangle.heightMm, heightMm),
   });
   const r = points.length > 60 ? 4.5 : 6;
+  const sides = labelSides(labels ? points : points.filter((point) => point.id === selectedId), {
+    widthMm,
+    heightMm,
+    aspect: faceProportion(widthMm, heightMm).aspect,
+  });
   return (
     <>
       <defs>
@@ -126,8 +132,7 @@ function FaceMapContent({
             r={r}
             selected={point.id === selectedId}
             labelled={labels || point.id === selectedId}
-            nearRight={point.xMm > widthMm * 0.9}
-            nearTop={point.yMm > heightMm * 0.92}
+            side={sides.get(point.id) ?? { x: 1, y: -1 }}
           />
         </svg>
       ))}

@@ -36,7 +36,7 @@ export function ChecksScreen({ open, group }: { open: OpenSheet; group: string |
       {checks.length === 0 ? (
         <EmptyState title="No checks in this group">The plan of this pour asks for none.</EmptyState>
       ) : (
-        <ol className="grid gap-4">
+        <ol className="grid gap-4 md:grid-cols-2 md:items-start">
           {checks.map((check) => (
             <CheckCard key={check.item.id} open={open} check={check} />
           ))}

@@ -1,12 +1,11 @@
 'use client';
 
 import { useId, useState } from 'react';
-import { buttonClasses } from '@/components/ui/button-classes';
-import { classNames } from '@/components/ui/class-names';
 import { Notice } from '@/components/ui/notice';
 import { Spinner } from '@/components/ui/spinner';
 import type { OpenPour } from '@/lib/device/device-types';
 import type { SubjectRef } from '@/lib/inspection/entry-bodies';
+import { PhotoSource } from './photo-source';
 import { problemsOf } from './problems-of';
 import { fixListWords, type FixLanguage } from './fix-list-words';
 import { useDevice } from './use-device';
@@ -28,11 +27,11 @@ export function CrewPhoto({
   const [problem, setProblem] = useState<string | null>(null);
   const words = fixListWords[language];
 
-  const take = async (files: FileList | null) => {
+  const take = async (files: readonly File[]) => {
     setBusy(true);
     setProblem(null);
     try {
-      for (const file of files ?? []) {
+      for (const file of files) {
         const at = { projectId: open.project.id, pourId: open.pour.id };
         await device.addPhoto(at, file, { about, shot: 'after', caption: '' });
         setKept((count) => count + 1);
@@ -43,41 +42,12 @@ export function CrewPhoto({
       setBusy(false);
     }
   };
-  const input = (camera: boolean, label: string) => (
-    <label
-      htmlFor={`${id}-${camera ? 'camera' : 'files'}`}
-      className={classNames(
-        buttonClasses(camera ? 'primary' : 'secondary', true, 'relative min-h-15'),
-        busy && 'pointer-events-none opacity-60',
-        'has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-chalk',
-      )}
-    >
-      {label}
-      <input
-        id={`${id}-${camera ? 'camera' : 'files'}`}
-        type="file"
-        accept="image/*"
-        {...(camera ? { capture: 'environment' as const } : { multiple: true })}
-        disabled={busy}
-        className="absolute inset-0 size-full cursor-pointer opacity-0"
-        onChange={(event) => {
-          const { target } = event;
-          void take(target.files).finally(() => {
-            target.value = '';
-          });
-        }}
-      />
-    </label>
-  );
   return (
     <section aria-labelledby={`${id}-heading`} className="grid gap-3 border border-ink bg-sheet p-3">
       <h2 id={`${id}-heading`} className="font-label font-semibold">
         {words.photoOfIt}
       </h2>
-      <div className="grid grid-cols-[2fr_1fr] gap-2">
-        {input(true, words.photoTake)}
-        {input(false, words.photoFromFiles)}
-      </div>
+      <PhotoSource camera={words.photoTake} files={words.photoFromFiles} busy={busy} onTake={take} />
       {busy && <Spinner label={words.photoBusy} />}
       {kept > 0 && !busy && (
         <Notice tone="met" title={words.photoKept}>

@@ -28,7 +28,7 @@ export function DeviceNotices({ quiet }: { quiet: boolean }) {
   if (quiet && lost === 0) return null;
   if (!updateReady && !clock && lost === 0 && refused === 0 && !signIn && !choosePin) return null;
   return (
-    <div className="mx-auto grid w-full max-w-3xl gap-2 px-3 pt-3">
+    <div className="mx-auto grid w-full max-w-4xl gap-2 px-3 pt-3">
       {lost > 0 && (
         <Notice
           tone="hold"

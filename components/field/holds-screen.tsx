@@ -1,9 +1,10 @@
 'use client';
 
 import { EmptyState } from '@/components/ui/empty-state';
+import { classNames } from '@/components/ui/class-names';
 import { ToneGlyph } from '@/components/ui/tone-glyph';
 import { mayRecord } from '@/lib/inspection/entry-access';
-import { roles, roleWords } from '@/lib/inspection/roles';
+import { roles, roleWords, type Role } from '@/lib/inspection/roles';
 import type { Hold } from '@/lib/inspection/sheet-types';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
@@ -17,7 +18,28 @@ import { toneText } from '@/components/ui/tone';
 /** What stands between this pour and the concrete, by who clears it: your own first, each one tap from its work. */
 export function HoldsScreen({ open }: { open: OpenSheet }) {
   const { holds, pour, project, sheet } = open;
-  const order = [project.role, ...roles.filter((role) => role !== project.role)];
+  const section = (role: Role) => {
+    const ofRole = holds.filter((hold) => hold.clearedBy === role);
+    if (ofRole.length === 0) return null;
+    return (
+      <section key={role} className="grid gap-1.5">
+        <h2 className="flex items-baseline justify-between px-1 text-heading">
+          {role === project.role ? `You, as ${roleWords[role].toLowerCase()}` : roleWords[role]}
+          <span className="font-label text-label font-medium text-pencil">{ofRole.length}</span>
+        </h2>
+        <ul className="border border-ink bg-sheet">
+          {ofRole.map((hold) => (
+            <HoldLine key={hold.id} open={open} hold={hold} />
+          ))}
+        </ul>
+      </section>
+    );
+  };
+  const own = section(project.role);
+  const others = roles
+    .filter((role) => role !== project.role)
+    .map(section)
+    .filter((one) => one !== null);
   return (
     <Screen
       title={`${pour.number} holds`}
@@ -29,24 +51,11 @@ export function HoldsScreen({ open }: { open: OpenSheet }) {
           At the points read and for the items checked. The release is still given in the office.
         </EmptyState>
       ) : (
-        <div className="grid gap-6">
-          {order.map((role) => {
-            const own = holds.filter((hold) => hold.clearedBy === role);
-            if (own.length === 0) return null;
-            return (
-              <section key={role} className="grid gap-1.5">
-                <h2 className="flex items-baseline justify-between px-1 text-heading">
-                  {role === project.role ? `You, as ${roleWords[role].toLowerCase()}` : roleWords[role]}
-                  <span className="font-label text-label font-medium text-pencil">{own.length}</span>
-                </h2>
-                <ul className="border border-ink bg-sheet">
-                  {own.map((hold) => (
-                    <HoldLine key={hold.id} open={open} hold={hold} />
-                  ))}
-                </ul>
-              </section>
-            );
-          })}
+        <div
+          className={classNames('grid gap-6', own && others.length > 0 && 'md:grid-cols-2 md:items-start')}
+        >
+          {own}
+          {others.length > 0 && <div className="grid gap-6">{others}</div>}
         </div>
       )}
     </Screen>
@@ -81,7 +90,7 @@ function HoldLine({ open, hold }: { open: OpenSheet; hold: Hold }) {
             {hold.where}
             {hold.since && ` · since ${dayAndTime(hold.since, project.timeZone)}`}
           </span>
-          {hold.detail && <span className="line-clamp-2 text-label text-pencil">{hold.detail}</span>}
+          {hold.detail && <span className="block text-label text-pencil">{hold.detail}</span>}
           <span className="block text-label">{hold.need}</span>
         </span>
       </FieldLink>

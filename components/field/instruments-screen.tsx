@@ -43,7 +43,7 @@ export function InstrumentsScreen({ open }: { open: OpenSheet }) {
       back={{ href: fieldPaths.pour(sheet.pourId), words: pour.number }}
       form
     >
-      <div className="grid gap-4">
+      <div className="grid gap-4 md:grid-cols-2 md:items-start">
         {sheet.instruments.length === 0 && (
           <EmptyState title="No instrument yet">
             Add the tape or gauge in your hand. Readings without a known instrument are not verified.
@@ -59,7 +59,7 @@ export function InstrumentsScreen({ open }: { open: OpenSheet }) {
           />
         ))}
         {mayRecord('instrument-status', project.role) && (
-          <Button wide className="min-h-15" onClick={() => setAdding(true)}>
+          <Button wide className="min-h-15 md:col-span-2" onClick={() => setAdding(true)}>
             Add an instrument
           </Button>
         )}

@@ -1,6 +1,7 @@
 'use client';
 
 import { EmptyState } from '@/components/ui/empty-state';
+import { classNames } from '@/components/ui/class-names';
 import { MarkIcon } from '@/components/drawings/mark';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import { placesMeasured } from '@/lib/inspection/judge-measurements';
@@ -37,11 +38,12 @@ export function MeasurementsScreen({ open, itemId }: { open: OpenSheet; itemId: 
   return (
     <Screen
       title={item.title}
-      aside={`${Math.min(done, item.required)} of ${item.required} places`}
+      aside={`${Math.min(done, item.required)} of ${item.required} ${item.required === 1 ? 'place' : 'places'}`}
       back={back}
       form
     >
-      <div className="grid gap-5">
+      {/* A sample square takes the width of a tablet; any other form leaves half of it to what was measured. */}
+      <div className={classNames('grid gap-5', item.quantity !== 'share' && 'md:grid-cols-2 md:items-start')}>
         {mayRecord('measurement', open.project.role) && (
           <MeasurementForm
             key={item.id}
@@ -50,13 +52,15 @@ export function MeasurementsScreen({ open, itemId }: { open: OpenSheet; itemId: 
             limits={limitWords(item, sheet.plan.units)}
           />
         )}
-        <Places open={open} state={state} />
-        <Disclosure className="border border-ink bg-sheet px-3" summary="How is this judged?">
-          <p className="pb-2">
-            {limitWords(item, sheet.plan.units)}. Compared unrounded; limits belong to what is accepted.
-          </p>
-          <RequirementTrail trail={item.trail} />
-        </Disclosure>
+        <div className="grid gap-5">
+          <Places open={open} state={state} />
+          <Disclosure className="border border-ink bg-sheet px-3" summary="How is this judged?">
+            <p className="pb-2">
+              {limitWords(item, sheet.plan.units)}. Compared unrounded; limits belong to what is accepted.
+            </p>
+            <RequirementTrail trail={item.trail} />
+          </Disclosure>
+        </div>
       </div>
     </Screen>
   );

@@ -19,7 +19,7 @@ import { WaitingPour } from './waiting-pour';
 import { OthersWaiting } from './others-waiting';
 import { SignInLink } from './sign-in-link';
 import { StorageLine } from './storage-line';
-import { bytesWords, notSentCount, syncWords, waitingCount } from './sync-words';
+import { answeredWords, bytesWords, notSentCount, syncWords, waitingCount } from './sync-words';
 import { useDevice, useSnapshot } from './use-device';
 import { useNow } from './use-now';
 
@@ -86,9 +86,7 @@ function NotSent() {
         )}
         {notSentCount(sync) === 0 && (
           <EmptyState title="Everything is sent">
-            {sync.lastSuccessAt
-              ? `The server last answered ${timeAway(sync.lastSuccessAt, now)}.`
-              : 'Nothing waits on this device.'}
+            {sync.lastSuccessAt ? answeredWords(sync.lastSuccessAt, now) : 'Nothing waits on this device.'}
           </EmptyState>
         )}
         {waitingCount(sync) > 0 && (
@@ -102,7 +100,7 @@ function NotSent() {
             <li className="px-3 py-2 text-label text-pencil">
               {sync.waitingEntries} {sync.waitingEntries === 1 ? 'entry' : 'entries'}, {sync.waitingPhotos}{' '}
               {sync.waitingPhotos === 1 ? 'photo' : 'photos'}. Readings and answers go before photos.
-              {sync.lastSuccessAt && ` The server last answered ${timeAway(sync.lastSuccessAt, now)}.`}
+              {sync.lastSuccessAt && ` ${answeredWords(sync.lastSuccessAt, now)}`}
             </li>
           </SheetLines>
         )}

@@ -1,8 +1,6 @@
 'use client';
 
 import { useId, useState } from 'react';
-import { buttonClasses } from '@/components/ui/button-classes';
-import { classNames } from '@/components/ui/class-names';
 import { Notice } from '@/components/ui/notice';
 import { Select } from '@/components/ui/select';
 import { Spinner } from '@/components/ui/spinner';
@@ -12,6 +10,7 @@ import type { SubjectRef } from '@/lib/inspection/entry-bodies';
 import { problemsOf } from './problems-of';
 import type { OpenSheet } from './open-sheet';
 import { PhotoOverlay } from './photo-overlay';
+import { PhotoSource } from './photo-source';
 import { subjectChoices, subjectValue, subjectWords } from './subject-words';
 import { useDevice } from './use-device';
 
@@ -54,11 +53,11 @@ export function PhotoForm({
   const subject: SubjectRef = choices.find((one) => subjectValue(one.subject) === chosen)?.subject ?? first;
   const before = taken.find((photo) => photo.entry.body.shot === 'before') ?? taken[0];
 
-  const take = async (files: FileList | null) => {
+  const take = async (files: readonly File[]) => {
     setBusy(true);
     setSaid(null);
     try {
-      for (const file of files ?? []) {
+      for (const file of files) {
         const entry = await device.addPhoto({ projectId: open.project.id, pourId: open.sheet.pourId }, file, {
           about: subject,
           shot,
@@ -78,33 +77,6 @@ export function PhotoForm({
       setBusy(false);
     }
   };
-
-  const input = (camera: boolean, label: string, variant: 'primary' | 'secondary') => (
-    <label
-      htmlFor={`${id}-${camera ? 'camera' : 'files'}`}
-      className={classNames(
-        buttonClasses(variant, true, 'relative min-h-15'),
-        busy && 'pointer-events-none opacity-60',
-        'has-focus-visible:outline-3 has-focus-visible:outline-offset-2 has-focus-visible:outline-chalk',
-      )}
-    >
-      {label}
-      <input
-        id={`${id}-${camera ? 'camera' : 'files'}`}
-        type="file"
-        accept="image/*"
-        {...(camera ? { capture: 'environment' as const } : { multiple: true })}
-        disabled={busy}
-        className="absolute inset-0 size-full cursor-pointer opacity-0"
-        onChange={(event) => {
-          const { files } = event.target;
-          void take(files).finally(() => {
-            event.target.value = '';
-          });
-        }}
-      />
-    </label>
-  );
 
   return (
     <section aria-label="Take a photo" className="grid gap-3 border border-ink bg-sheet p-3">
@@ -146,12 +118,9 @@ export function PhotoForm({
         onChange={(event) => setCaption(event.target.value)}
       />
       {shot === 'after' && before && (
-        <PhotoOverlay photoId={before.entry.body.photoId} onTake={(file) => void take(fileList(file))} />
+        <PhotoOverlay photoId={before.entry.body.photoId} onTake={(file) => void take([file])} />
       )}
-      <div className="grid grid-cols-[2fr_1fr] gap-2">
-        {input(true, 'Take the photo', 'primary')}
-        {input(false, 'From files', 'secondary')}
-      </div>
+      <PhotoSource camera="Take the photo" files="From files" busy={busy} onTake={take} />
       {busy && <Spinner label="Making it smaller and keeping it" />}
       {said && (
         <Notice tone={said.kept ? 'met' : 'hold'} title={said.kept ? said.words : 'This photo was not kept'}>
@@ -160,10 +129,4 @@ export function PhotoForm({
       )}
     </section>
   );
-}
-
-function fileList(file: File): FileList {
-  const transfer = new DataTransfer();
-  transfer.items.add(file);
-  return transfer.files;
 }

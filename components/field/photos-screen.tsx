@@ -22,14 +22,14 @@ export function PhotosScreen({ open, about }: { open: OpenSheet; about: SubjectR
       back={{ href: fieldPaths.pour(sheet.pourId), words: pour.number }}
       form
     >
-      <div className="grid gap-6">
+      <div className="grid gap-6 md:grid-cols-2 md:items-start">
         {mayRecord('photo', open.project.role) && <PhotoForm open={open} about={about} />}
         {photos.length === 0 ? (
           <EmptyState title="No photo yet">
             {about ? 'Nothing has been photographed here.' : 'Photos of this pour stand here, newest first.'}
           </EmptyState>
         ) : (
-          <ul className="grid grid-cols-2 gap-3 sm:grid-cols-3">
+          <ul className="grid grid-cols-2 gap-3">
             {photos.map((photo) => (
               <PhotoTile key={photo.entry.id} open={open} photo={photo} />
             ))}

@@ -12,7 +12,7 @@ import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { dayAndTime, timeAway } from './field-time';
 import { pourStateTone } from './state-tone';
-import { useDevice } from './use-device';
+import { useDevice, useSnapshot } from './use-device';
 import { useNow } from './use-now';
 
 /** One pour of the list: what it is, when it is planned, how it stands, what waits, and whether it is kept here. */
@@ -27,6 +27,7 @@ export function PourRow({
   timeZone: string;
 }) {
   const device = useDevice();
+  const { sync } = useSnapshot();
   const now = useNow();
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<string | null>(null);
@@ -79,8 +80,8 @@ export function PourRow({
         <p className="flex items-start gap-2 px-3 pb-2 font-label text-label font-semibold text-watch">
           <ToneGlyph tone="watch" className="mt-0.5 shrink-0" />
           Plan rev {revisionLetter(pour.serverPlanRevision)} is on the server; this device has{' '}
-          {pour.planRevision === 0 ? 'none' : `rev ${revisionLetter(pour.planRevision)}`}. It is fetched when
-          there is a network.
+          {pour.planRevision === 0 ? 'none yet' : `rev ${revisionLetter(pour.planRevision)}`}.{' '}
+          {sync.phase === 'fetching' ? 'It is being fetched.' : 'It is fetched when there is a network.'}
         </p>
       )}
       {problem && (

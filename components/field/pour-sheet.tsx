@@ -59,11 +59,15 @@ export function PourSheet({ open }: { open: OpenSheet }) {
           <LeftForYou open={open} />
         </SheetFrame>
         <OthersOnPour pourId={sheet.pourId} />
-        <CheckLines open={open} />
-        <FaceLines open={open} />
-        <MeasurementLines open={open} />
-        <NonconformanceLines open={open} />
-        <SiteLines open={open} />
+        <div className="grid gap-6 md:grid-cols-2 md:items-start">
+          <CheckLines open={open} />
+          <div className="grid gap-6">
+            <FaceLines open={open} />
+            <MeasurementLines open={open} />
+            <NonconformanceLines open={open} />
+            <SiteLines open={open} />
+          </div>
+        </div>
       </div>
     </Screen>
   );

@@ -14,7 +14,7 @@ import { OthersWaiting } from './others-waiting';
 import { Screen } from './screen';
 import { SignOut } from './sign-out';
 import { useSnapshot } from './use-device';
-import { LeaveLink } from './leave-link';
+import { LeaveLink } from '@/components/ui/leave-link';
 
 const byPlannedTime = (a: DevicePour, b: DevicePour) =>
   (a.plannedAt ?? '9').localeCompare(b.plannedAt ?? '9') || a.number.localeCompare(b.number);

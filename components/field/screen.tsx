@@ -40,7 +40,7 @@ export function Screen({
       <DeviceNotices quiet={form || tight} />
       <main
         id="main"
-        className={classNames('w-full flex-1', tight ? 'min-h-0' : 'mx-auto max-w-3xl px-3 pt-4 pb-24')}
+        className={classNames('w-full flex-1', tight ? 'min-h-0' : 'mx-auto max-w-4xl px-3 pt-4 pb-24')}
       >
         {children}
       </main>

@@ -2,7 +2,7 @@
 
 import { usePathname } from 'next/navigation';
 import type { AnchorHTMLAttributes } from 'react';
-import { LeaveLink } from './leave-link';
+import { LeaveLink } from '@/components/ui/leave-link';
 
 /** To the sign-in, and back to this very screen. */
 export function SignInLink(rest: AnchorHTMLAttributes<HTMLAnchorElement>) {

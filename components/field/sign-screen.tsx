@@ -27,22 +27,24 @@ export function SignScreen({ open }: { open: OpenSheet }) {
       back={{ href: fieldPaths.pour(sheet.pourId), words: pour.number }}
       form
     >
-      <div className="grid gap-5">
-        <section className="border border-ink bg-sheet p-3">
-          <h2 className="mb-1 text-heading">What the sheet says now</h2>
-          <dl>
-            {signatureFigures(sheet, elementIds).map(({ label, value }) => (
-              <div
-                key={label}
-                className="grid grid-cols-[9rem_1fr] gap-2 border-b border-rule py-1.5 last:border-b-0"
-              >
-                <dt className="font-label font-semibold text-pencil">{label}</dt>
-                <dd>{value}</dd>
-              </div>
-            ))}
-          </dl>
-        </section>
-        <SignatureStanding open={open} />
+      <div className="grid gap-5 md:grid-cols-2 md:items-start">
+        <div className="grid gap-5">
+          <section className="border border-ink bg-sheet p-3">
+            <h2 className="mb-1 text-heading">What the sheet says now</h2>
+            <dl>
+              {signatureFigures(sheet, elementIds).map(({ label, value }) => (
+                <div
+                  key={label}
+                  className="grid grid-cols-[9rem_1fr] gap-2 border-b border-rule py-1.5 last:border-b-0"
+                >
+                  <dt className="font-label font-semibold text-pencil">{label}</dt>
+                  <dd>{value}</dd>
+                </div>
+              ))}
+            </dl>
+          </section>
+          <SignatureStanding open={open} />
+        </div>
         {as && !covered && (
           <SignForm open={open} as={as} elementIds={elementIds} onElements={setElementIds} />
         )}

@@ -1,3 +1,4 @@
+import { timeAway } from './field-time';
 import type { SyncState } from '@/lib/device/device-types';
 
 const phaseWords: Record<SyncState['phase'], string> = {
@@ -66,4 +67,10 @@ export function bytesWords(bytes: number): string {
   if (bytes < 1_000_000) return `${Math.round(bytes / 1000)} kB`;
   if (bytes < 1_000_000_000) return `${(bytes / 1_000_000).toFixed(1)} MB`;
   return `${(bytes / 1_000_000_000).toFixed(1)} GB`;
+}
+
+/** When the server last answered, in a sentence. */
+export function answeredWords(lastSuccessAt: string, nowMs: number): string {
+  const away = timeAway(lastSuccessAt, nowMs);
+  return `The server last answered ${away === 'now' ? 'just now' : away}.`;
 }

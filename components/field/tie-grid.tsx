@@ -84,6 +84,7 @@ function Stepper({
       <div className="mt-1 grid grid-cols-[1fr_auto_1fr] items-center border border-ink">
         <Button
           variant="quiet"
+          className="text-2xl no-underline"
           aria-label={`${label}: one less`}
           disabled={value <= 2}
           onClick={() => onChange(value - 1)}
@@ -93,6 +94,7 @@ function Stepper({
         <span className="px-2 font-figure text-lead font-medium">{value}</span>
         <Button
           variant="quiet"
+          className="text-2xl no-underline"
           aria-label={`${label}: one more`}
           disabled={value >= MOST_BARS}
           onClick={() => onChange(value + 1)}

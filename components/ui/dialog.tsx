@@ -16,7 +16,8 @@ export interface DialogProps {
   closeLabel?: string;
 }
 
-const firstControl = ':is([data-dialog-body], footer) :is(input, select, textarea, button, a[href])';
+const firstControl =
+  ':is([data-dialog-body], [data-dialog-foot]) :is(input, select, textarea, button, a[href])';
 
 /**
  * A modal sheet over the page, on the native element: the browser keeps the focus inside, makes the rest inert, and
@@ -69,7 +70,7 @@ export function Dialog({
     >
       {open && (
         <div className="flex max-h-[calc(100dvh-2.25rem)] flex-col">
-          <header className="flex items-center justify-between gap-4 border-b border-ink pl-4">
+          <div className="flex items-center justify-between gap-4 border-b border-ink pl-4">
             <h2 id={titleId} className="py-2 text-heading">
               {title}
             </h2>
@@ -90,14 +91,17 @@ export function Dialog({
                 <path d="M2 2l12 12M14 2 2 14" />
               </svg>
             </button>
-          </header>
+          </div>
           <div data-dialog-body="" className="min-h-0 flex-1 overflow-y-auto px-4 py-4">
             {children}
           </div>
           {footer && (
-            <footer className="flex flex-wrap justify-end gap-2 border-t border-rule px-4 py-3">
+            <div
+              data-dialog-foot=""
+              className="flex flex-wrap justify-end gap-2 border-t border-rule px-4 py-3"
+            >
               {footer}
-            </footer>
+            </div>
           )}
         </div>
       )}
