@@ -42,7 +42,7 @@ export function CrewCorrection({
   const back = { href: fieldPaths.pour(open.pour.id), words: open.pour.number };
   if (!item) {
     return (
-      <Screen title={words.heading} back={back}>
+      <Screen title={words.heading} back={back} language={language}>
         <EmptyState
           title={words.gone}
           action={
@@ -63,7 +63,7 @@ export function CrewCorrection({
     if (entry) setKept(true);
   };
   return (
-    <Screen title={words.report} aside={open.pour.number} back={back} form>
+    <Screen title={words.report} aside={open.pour.number} back={back} language={language} form>
       <div className="grid gap-5" lang={language}>
         <section className="border border-ink bg-sheet p-3">
           <h2 className="text-lead">{title}</h2>

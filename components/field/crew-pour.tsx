@@ -4,6 +4,7 @@ import { EmptyState } from '@/components/ui/empty-state';
 import type { CrewPour as CrewFacts, OpenPour } from '@/lib/device/device-types';
 import { subjectKey } from '@/lib/inspection/facts';
 import type { FixItem } from '@/lib/inspection/fix-list-item';
+import { barWords } from './bar-words';
 import { CrewCorrection } from './crew-correction';
 import { fieldPaths, type PourRoute } from './field-routes';
 import { FixListView } from './fix-list-view';
@@ -26,7 +27,8 @@ export function CrewPour({ open, crew, route }: { open: OpenPour; crew: CrewFact
     <Screen
       title={`${words.heading} ${pour.number}`}
       aside={pour.title}
-      back={{ href: fieldPaths.pours, words: 'pours' }}
+      back={{ href: fieldPaths.pours, words: barWords[language].pours }}
+      language={language}
     >
       {list ? (
         <FixListView

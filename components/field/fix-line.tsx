@@ -32,19 +32,22 @@ export function FixLine({
   const { title, lines } = fixItemWords(item, language);
   return (
     <li className="break-inside-avoid border-b border-rule last:border-b-0">
-      <div className="grid grid-cols-[2rem_1fr] px-3 py-2.5">
-        <span className="font-figure text-lead font-medium">{number}</span>
-        <div className="min-w-0">
-          <h2 className="text-lead">{title}</h2>
-          <p className="text-label text-pencil">{item.where}</p>
-          {lines.map((line) => (
-            <p key={line} className="font-figure text-label font-medium">
-              {line}
-            </p>
-          ))}
+      {/* On a tablet the place on the face stands beside the words. */}
+      <div className={item.face ? 'md:grid md:grid-cols-2' : undefined}>
+        <div className="grid grid-cols-[2rem_1fr] content-start px-3 py-2.5">
+          <span className="font-figure text-lead font-medium">{number}</span>
+          <div className="min-w-0">
+            <h2 className="text-lead">{title}</h2>
+            <p className="text-label text-pencil">{item.where}</p>
+            {lines.map((line) => (
+              <p key={line} className="font-figure text-label font-medium">
+                {line}
+              </p>
+            ))}
+          </div>
         </div>
+        {item.face && <OnFace face={item.face} language={language} units={units} />}
       </div>
-      {item.face && <OnFace face={item.face} language={language} units={units} />}
       {item.photoIds.length > 0 && (
         <ul className="grid grid-cols-2 gap-2 px-3 pb-3 sm:grid-cols-3">
           {item.photoIds.map((photoId, index) => (

@@ -9,7 +9,7 @@ import { fieldPaths } from './field-routes';
 import { useDevice, useSnapshot } from './use-device';
 
 /** Who holds the device, and the key that locks it for the next person. What is not sent is kept for its author. */
-export function HandOver() {
+export function HandOver({ words }: { words: string }) {
   const device = useDevice();
   const { person, pin } = useSnapshot();
   const [asking, setAsking] = useState(false);
@@ -22,7 +22,7 @@ export function HandOver() {
         className="flex min-w-target shrink-0 flex-col items-end justify-center border-l border-rule px-2.5 text-right font-label text-label leading-tight font-medium text-chalk"
       >
         <span className="max-w-20 truncate font-semibold text-ink">{person.name.split(' ')[0]}</span>
-        <span>Hand over</span>
+        <span>{words}</span>
       </button>
       <Dialog
         open={asking}

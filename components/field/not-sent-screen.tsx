@@ -10,6 +10,7 @@ import { problemsOf } from './problems-of';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
 import { timeAway } from './field-time';
+import { InstallOffer } from './install-offer';
 import { PhotoQueue } from './photo-queue';
 import { RefusedLine } from './refused-line';
 import { saveBlob } from './save-blob';
@@ -153,6 +154,7 @@ function NotSent() {
         </section>
         <OthersWaiting />
         <StorageLine />
+        <InstallOffer />
         <FieldLink
           href={fieldPaths.pours}
           className="flex min-h-target items-center font-label font-semibold text-chalk underline underline-offset-4"

@@ -9,6 +9,7 @@ import { buttonClasses } from '@/components/ui/button-classes';
 import type { DevicePour, DeviceSnapshot } from '@/lib/device/device-types';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
+import { InstallOffer } from './install-offer';
 import { PourRow } from './pour-row';
 import { OthersWaiting } from './others-waiting';
 import { Screen } from './screen';
@@ -62,6 +63,7 @@ export function PoursScreen() {
           );
         })}
         <OthersWaiting />
+        <InstallOffer />
         <footer className="grid gap-4 border-t border-rule pt-4">
           <ThemeSwitch />
           <nav aria-label="Elsewhere" className="flex flex-wrap gap-2">

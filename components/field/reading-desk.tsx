@@ -211,7 +211,7 @@ export function ReadingDesk({
           )}
           <ReadingContextBar
             instrument={instrument?.name ?? 'choose'}
-            instrumentNote={standing?.words ?? ''}
+            instrumentNote={standing?.short ?? ''}
             instrumentGood={standing?.good ?? false}
             steel={asFoundBar.trim() ? `${setup.steel} (found ${asFoundBar.trim()})` : setup.steel}
             unit={unit}

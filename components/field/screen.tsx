@@ -3,6 +3,7 @@
 import { useEffect, type ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
 import { DeviceNotices } from './device-notices';
+import type { FixLanguage } from './fix-list-words';
 import { useScreenFocus } from './field-router';
 import { TopBar } from './top-bar';
 
@@ -13,6 +14,7 @@ export function Screen({
   back,
   form = false,
   tight = false,
+  language = 'en',
   children,
 }: {
   title: string;
@@ -22,6 +24,8 @@ export function Screen({
   form?: boolean;
   /** The screen brings its own margins: the reading screen. */
   tight?: boolean;
+  /** What the bar over the screen is written in. */
+  language?: FixLanguage;
   children: ReactNode;
 }) {
   useScreenFocus();
@@ -36,7 +40,7 @@ export function Screen({
         tight ? 'h-dvh overflow-hidden' : 'min-h-dvh',
       )}
     >
-      <TopBar title={title} aside={aside} back={back} />
+      <TopBar title={title} aside={aside} back={back} language={language} />
       <DeviceNotices quiet={form || tight} />
       <main
         id="main"

@@ -1,15 +1,7 @@
 import { timeAway } from './field-time';
 import type { SyncState } from '@/lib/device/device-types';
-
-const phaseWords: Record<SyncState['phase'], string> = {
-  idle: 'up to date',
-  sending: 'sending',
-  fetching: 'fetching',
-  offline: 'no network',
-  'sign-in-needed': 'sign in to send',
-  'server-trouble': 'server does not answer',
-  'strange-network': 'network asks for a sign-in',
-};
+import { barWords } from './bar-words';
+import type { FixLanguage } from './fix-list-words';
 
 /** What waits to be sent by itself; what was refused waits for a person. */
 export const waitingCount = (sync: SyncState): number => sync.waitingEntries + sync.waitingPhotos;
@@ -21,19 +13,21 @@ export const notSentCount = (sync: SyncState): number => waitingCount(sync) + sy
  * Where sending stands, in two or three words. Something that waits is never called up to date, and something that
  * was refused is never called waiting.
  */
-export function syncWords(sync: SyncState): string {
+export function syncWords(sync: SyncState, language: FixLanguage = 'en'): string {
+  const words = barWords[language];
   const refused = sync.refusedEntries > 0 && waitingCount(sync) > 0;
-  if (refused) return `${sync.refusedEntries} refused`;
-  if (sync.phase !== 'idle') return phaseWords[sync.phase];
-  if (waitingCount(sync) > 0) return 'waits to be sent';
-  return sync.refusedEntries > 0 ? 'see why' : phaseWords.idle;
+  if (refused) return words.refused(sync.refusedEntries);
+  if (sync.phase !== 'idle') return words.phases[sync.phase];
+  if (waitingCount(sync) > 0) return words.waits;
+  return sync.refusedEntries > 0 ? words.seeWhy : words.phases.idle;
 }
 
 /** "3 not sent yet", "1 refused", "all sent". */
-export function notSentWords(sync: SyncState): string {
+export function notSentWords(sync: SyncState, language: FixLanguage = 'en'): string {
+  const words = barWords[language];
   const waiting = waitingCount(sync);
-  if (waiting > 0) return `${waiting} not sent yet`;
-  return sync.refusedEntries > 0 ? `${sync.refusedEntries} refused` : 'all sent';
+  if (waiting > 0) return words.notSent(waiting);
+  return sync.refusedEntries > 0 ? words.refused(sync.refusedEntries) : words.allSent;
 }
 
 export const DOUBTFUL_CLOCK_MINUTES = 5;

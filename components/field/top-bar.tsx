@@ -2,8 +2,10 @@
 
 import type { ReactNode } from 'react';
 import { classNames } from '@/components/ui/class-names';
+import { barWords } from './bar-words';
 import { FieldLink } from './field-router';
 import { fieldPaths } from './field-routes';
+import type { FixLanguage } from './fix-list-words';
 import { HandOver } from './hand-over';
 import { notSentCount, notSentWords, syncWords } from './sync-words';
 import { useSnapshot } from './use-device';
@@ -13,19 +15,24 @@ export function TopBar({
   title,
   aside,
   back,
+  language,
 }: {
   title: string;
   aside?: ReactNode;
   back?: { href: string; words: string };
+  language: FixLanguage;
 }) {
   const { sync, person } = useSnapshot();
   const trouble = sync.refusedEntries > 0 || sync.phase === 'sign-in-needed';
   return (
-    <header className="sticky top-0 z-20 flex min-h-[calc(var(--target)+1px)] items-stretch border-b border-ink bg-sheet print:static pt-[env(safe-area-inset-top)]">
+    <header
+      lang={language}
+      className="sticky top-0 z-20 flex min-h-[calc(var(--target)+1px)] items-stretch border-b border-ink bg-sheet print:static pt-[env(safe-area-inset-top)]"
+    >
       {back && (
         <FieldLink
           href={back.href}
-          aria-label={`Back to ${back.words}`}
+          aria-label={barWords[language].back(back.words)}
           className="grid w-target shrink-0 place-items-center border-r border-rule text-chalk"
         >
           <svg
@@ -52,7 +59,7 @@ export function TopBar({
         </h1>
         {aside && <div className="truncate font-label text-label font-medium text-pencil">{aside}</div>}
       </div>
-      <HandOver />
+      <HandOver words={barWords[language].handOver} />
       {person && (
         <FieldLink
           href={fieldPaths.notSent}
@@ -62,9 +69,9 @@ export function TopBar({
           )}
         >
           <span className="font-semibold" aria-live="polite">
-            {notSentWords(sync)}
+            {notSentWords(sync, language)}
           </span>
-          <span>{syncWords(sync)}</span>
+          <span>{syncWords(sync, language)}</span>
         </FieldLink>
       )}
     </header>

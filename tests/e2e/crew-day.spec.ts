@@ -23,7 +23,7 @@ test('crew see their list in Spanish without a signal, and report a correction w
   await expect(page.getByRole('heading', { level: 1, name: `Lista de correcciones ${POUR}` })).toBeVisible();
   await accessible(page);
   await page.evaluate(() => navigator.serviceWorker.ready.then(() => undefined));
-  await expect(notSent(page)).toContainText('all sent');
+  await expect(notSent(page)).toContainText('todo enviado');
   const pourId = new URL(page.url()).pathname.split('/').at(-1)!;
 
   await test.step('a low reading is shown where it is on the face', async () => {
@@ -50,12 +50,12 @@ test('crew see their list in Spanish without a signal, and report a correction w
     await expect(page.getByText('Foto guardada en este dispositivo.')).toBeVisible();
     await page.getByRole('link', { name: 'A la lista' }).click();
     await expect(page.getByText('Avisado. Se envía cuando haya red.')).toBeVisible();
-    await expect(notSent(page)).toContainText('3 not sent yet');
+    await expect(notSent(page)).toContainText('3 sin enviar');
   });
 
   await test.step('it goes out by itself, leaves the list, and waits for the inspector', async () => {
     await context.setOffline(false);
-    await expect(notSent(page)).toContainText('all sent', { timeout: 60_000 });
+    await expect(notSent(page)).toContainText('todo enviado', { timeout: 60_000 });
     await expect(page.getByText('Two chairs tipped')).toHaveCount(0);
     await expect(page.getByRole('heading', { name: 'Avisado, el inspector vuelve a revisar' })).toBeVisible();
     await keepScreenshot(page, 'crew-list-after');
