@@ -48,13 +48,7 @@ export function TopBar({
         </FieldLink>
       )}
       <div className="flex min-w-0 flex-1 flex-col justify-center px-3 py-1">
-        <h1
-          tabIndex={-1}
-          className={classNames(
-            'text-lead leading-tight outline-none',
-            aside ? 'line-clamp-2' : 'line-clamp-3',
-          )}
-        >
+        <h1 tabIndex={-1} className="line-clamp-3 text-lead leading-tight outline-none">
           {title}
         </h1>
         {aside && <div className="truncate font-label text-label font-medium text-pencil">{aside}</div>}

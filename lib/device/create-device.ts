@@ -1,6 +1,7 @@
 import type { Entry } from '@/lib/inspection/entry';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import { browserEnvironment } from './browser-environment';
+import { confirmSignature } from './confirm-signature';
 import type { DeviceEnvironment } from './device-environment';
 import {
   DeviceError,
@@ -16,7 +17,7 @@ import type { PersonWork } from './person-work';
 import { DevicePhotos } from './photos/device-photos';
 import { PhotoLane } from './photos/photo-lane';
 import { emptySnapshot, snapshotOf } from './snapshot-of';
-import { markName, personsMarked, readMark } from './store/high-water-mark';
+import { deviceIdOf } from './store/device-id';
 import { unlessFull } from './store/person-database';
 import { openSettingsStore, type SettingsStore } from './store/settings-store';
 import { askServer } from './sync/ask-server';
@@ -142,7 +143,8 @@ class FieldDevice {
         const [{ exportUnsent }, work] = await Promise.all([import('./export-unsent'), this.#openWork()]);
         return exportUnsent(work, this.env.now());
       },
-      confirmSignature: (signatureId, password) => this.#confirm(signatureId, password),
+      confirmSignature: async (signatureId, password) =>
+        confirmSignature(this.env, await this.#openWork(), this.#lane, { signatureId, password }),
       refreshPerson: async () => {
         await this.#ready;
         await this.#refreshPerson();
@@ -170,17 +172,8 @@ class FieldDevice {
   async #start(): Promise<void> {
     const settings = await openSettingsStore(this.env.databaseName('cagewright-device'));
     this.#settings = settings;
-    const marked = personsMarked(this.env.marks.names());
-    const marks = marked.map((id) => readMark(this.env.marks.read(markName(id))));
-    const known = await settings.read('deviceId');
-    // An emptied store has forgotten its id; the cookie has not, and order on this device hangs on it.
-    const deviceId = known ?? marks.find((mark) => mark)?.deviceId ?? this.env.newId();
-    if (!known) {
-      await settings.write('deviceId', deviceId);
-      const entries = marks.reduce((sum, mark) => sum + (mark?.unsent ?? 0), 0);
-      const photos = marks.reduce((sum, mark) => sum + (mark?.unsentPhotos ?? 0), 0);
-      this.#lostBefore = { lostEntries: entries || null, lostPhotos: photos || null };
-    }
+    const { deviceId, lost } = await deviceIdOf(this.env, settings);
+    this.#lostBefore = lost;
     await this.#holder.start(settings, deviceId);
     if (!this.#holder.work) this.env.after(ASK_AFTER_MS, () => this.#ask());
     this.#storeIs('open');
@@ -313,26 +306,6 @@ class FieldDevice {
     const read = readEntry(recorded);
     if (read.kind !== 'known') throw new Error(`An entry of type ${recorded.type} cannot be read back.`);
     return read.entry;
-  }
-
-  async #confirm(
-    signatureId: string,
-    password: string,
-  ): Promise<{ ok: true } | { ok: false; sentence: string }> {
-    const work = await this.#openWork();
-    if (work.outbox.has(signatureId) || !(await this.#lane.ownSession(work))) await this.#lane.run();
-    if (work.outbox.has(signatureId) || this.#lane.state.signedInAs !== null) {
-      const why = this.#lane.state.message ?? 'There is no connection to the server.';
-      return { ok: false, sentence: `The signature has not been sent yet. ${why}` };
-    }
-    const answer = await askServer(
-      this.env,
-      { method: 'POST', path: `/api/signatures/${signatureId}/confirm`, json: { password } },
-      'done',
-    );
-    if (answer.kind === 'trouble') return { ok: false, sentence: answer.sentence };
-    await this.#lane.run();
-    return { ok: true };
   }
 
   async #measureStorage(): Promise<void> {

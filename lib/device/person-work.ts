@@ -1,59 +1,35 @@
 import type { BodyOf } from '@/lib/inspection/entry';
-import type { CrewList } from '@/lib/inspection/fix-list-item';
 import type { RecordedEntry } from '@/lib/inspection/sheet';
 import type { DeviceIndex, PushOutcome } from '@/lib/inspection/wire';
 import type { DeviceEnvironment, TabChannel, TabMessage } from './device-environment';
-import { DeviceError, type DeviceEntryType, type DevicePerson } from './device-types';
+import type { DeviceEntryType, DevicePerson } from './device-types';
 import type { EntryPlace } from './entry-to-record';
 import { loadSchemas } from './load-schemas';
 import type { RecordSchemas } from './record-schemas';
 import { LossWatch } from './loss-watch';
-import { SheetMemory } from './sheet-memory';
-import { forgetPour } from './store/forget-pour';
+import { forgetPhoto, forgetPour } from './store/forget-pour';
 import {
-  isDeviceFull,
   openPersonDatabase,
   projectStream,
-  readMeta,
   streamOf,
   unlessFull,
   writeMeta,
   type OutboxRecord,
   type PersonDatabase,
   type PhotoRecord,
-  type RefusedRecord,
 } from './store/person-database';
-import type { WaitingHere } from './store/settings-store';
 import { settleOutcomes, type Settled } from './store/settle-outcomes';
+import { notSaved } from './store/not-saved';
 import { restartStream, storePage, type StoredPage, type StreamPage } from './store/store-page';
+import { streamsNotTheirs } from './store/streams-not-theirs';
 import { setRoomAside, writeEntry, type PhotoToStore } from './store/write-entry';
-
-/** What is kept in memory of an outbox record: enough to count and to say how old it is. */
-export interface Waiting {
-  deviceSeq: number;
-  stream: string;
-  recordedAt: string;
-}
-
-const KEPT_DAYS = 14;
+import { WorkInMemory } from './work-in-memory';
 
 /**
  * One person's work on this device while it is open: their store, and in memory what the screens show of it. Every
  * change is written first and then taken into memory, and other tabs of the same person are told.
  */
-export class PersonWork {
-  readonly memory = new SheetMemory();
-  readonly outbox = new Map<string, Waiting>();
-  readonly refused = new Map<string, RefusedRecord>();
-  readonly photos = new Map<string, PhotoRecord>();
-  /** Of crew only, by pour. */
-  readonly crewLists = new Map<string, CrewList>();
-  index: DeviceIndex | null = null;
-  keep: Record<string, boolean> = {};
-  lastSuccessAt: string | null = null;
-  clockOffsetMs: number | null = null;
-  /** Revision of the plan kept here, by pour. */
-  readonly planRevisions = new Map<string, number>();
+export class PersonWork extends WorkInMemory {
   readonly loss: LossWatch;
   /** Reads an entry by its schemas; null until they were wanted first. */
   reader: RecordSchemas['readEntry'] | null = null;
@@ -70,6 +46,7 @@ export class PersonWork {
     readonly db: PersonDatabase,
     private readonly changed: (wantsSending: boolean) => void,
   ) {
+    super();
     this.loss = new LossWatch(env, db, { personId: person.id, deviceId });
     this.#channel = env.channel(`cagewright-${person.id}`, (message) => void this.#heard(message));
   }
@@ -101,39 +78,14 @@ export class PersonWork {
   }
 
   async #readAll(): Promise<void> {
-    const [outbox, refused, photos, cursors, crewLists] = await Promise.all([
-      this.db.getAll('outbox'),
-      this.db.getAll('refused'),
-      this.db.getAll('photos'),
-      this.db.getAll('cursors'),
-      this.db.getAll('crewLists'),
-    ]);
-    this.crewLists.clear();
-    for (const { pourId, list } of crewLists) this.crewLists.set(pourId, list);
-    this.outbox.clear();
-    for (const record of outbox) this.#waits(record);
-    this.refused.clear();
-    for (const record of refused) this.refused.set(record.id, record);
-    this.photos.clear();
-    for (const photo of photos) this.photos.set(photo.photoId, photo);
-    this.index = (await readMeta(this.db, 'index')) ?? null;
-    this.keep = (await readMeta(this.db, 'keep')) ?? {};
-    this.lastSuccessAt = (await readMeta(this.db, 'lastSuccessAt')) ?? null;
-    this.clockOffsetMs = (await readMeta(this.db, 'clockOffsetMs')) ?? null;
-    this.planRevisions.clear();
-    for (const cursor of cursors) this.planRevisions.set(cursor.stream, cursor.planRevision);
+    await this.readFrom(this.db);
     await this.loss.read();
     this.#readRefused();
   }
 
   /** @throws DeviceError where that piece of the program is not on this device */
   async #schemas(): Promise<RecordSchemas> {
-    const schemas = await loadSchemas().catch(() => {
-      throw new DeviceError(
-        'store-failed',
-        'A piece of Cagewright is not on this device yet. Load this page again once there is a network.',
-      );
-    });
+    const schemas = await loadSchemas();
     this.reader = schemas.readEntry;
     return schemas;
   }
@@ -145,33 +97,6 @@ export class PersonWork {
       () => this.changed(false),
       () => undefined,
     );
-  }
-
-  /** How much waits here, and how old it is: what others on this device are told. */
-  waiting(): WaitingHere {
-    const refused = [...this.refused.values()];
-    const photos = [...this.photos.values()].filter(
-      (photo) => photo.progress !== 'stored' && photo.progress !== 'refused',
-    );
-    const pours: Record<string, number> = {};
-    for (const { stream } of this.outbox.values()) pours[stream] = (pours[stream] ?? 0) + 1;
-    for (const { envelope } of refused) pours[streamOf(envelope)] = (pours[streamOf(envelope)] ?? 0) + 1;
-    const times = [
-      ...[...this.outbox.values()].map((one) => one.recordedAt),
-      ...refused.map((one) => one.envelope.recordedAt),
-      ...photos.map((one) => one.takenAt),
-    ];
-    return {
-      entries: this.outbox.size + refused.length,
-      photos: photos.length,
-      oldestAt: times.reduce<string | null>((least, at) => (least === null || at < least ? at : least), null),
-      pours,
-    };
-  }
-
-  #waits(record: OutboxRecord): void {
-    const { deviceSeq, stream, envelope } = record;
-    this.outbox.set(record.id, { deviceSeq, stream, recordedAt: envelope.recordedAt });
   }
 
   #mark(): void {
@@ -247,19 +172,8 @@ export class PersonWork {
     return opening;
   }
 
-  /** The project of a pour, as last heard from the server. */
-  projectOf(pourId: string): DeviceIndex['projects'][number] | undefined {
-    return this.index?.projects.find((project) => project.pours.some((pour) => pour.id === pourId));
-  }
-
   isKept(pour: DeviceIndex['projects'][number]['pours'][number]): boolean {
-    const chosen = this.keep[pour.id];
-    if (chosen !== undefined) return chosen;
-    if (!pour.assigned) return false;
-    if (pour.plannedAt === null) return true;
-    // By the server's time as last heard: a wrong clock, or a month without a network, takes nothing off the device.
-    const heardAt = Date.parse(this.index?.serverTime ?? '') || this.env.now();
-    return Math.abs(Date.parse(pour.plannedAt) - heardAt) <= KEPT_DAYS * 86_400_000;
+    return this.keeps(pour, this.env.now());
   }
 
   /**
@@ -284,7 +198,7 @@ export class PersonWork {
       deviceId: this.deviceId,
       now: this.env.now(),
       clockOffsetMs: this.clockOffsetMs,
-      planRevision: place.pourId === null ? 0 : this.#planRevisionOf(place.pourId),
+      planRevision: place.pourId === null ? 0 : this.planRevisionOf(place.pourId),
       seenSeq: this.memory.headOf(stream) ?? 0,
     };
     try {
@@ -295,27 +209,15 @@ export class PersonWork {
         photo,
       );
       this.loss.made = Math.max(this.loss.made, written.entry.deviceSeq);
-      this.#waits(written.outbox);
+      this.waits(written.outbox);
       if (photo) this.photos.set(photo.record.photoId, photo.record);
       this.memory.merge(stream, [written.entry]);
       this.#mark();
       this.#tell({ streams: [stream], send: true });
       return written.entry;
     } catch (error) {
-      throw isDeviceFull(error)
-        ? new DeviceError(
-            'device-full',
-            'This device has no room left. This was not saved; everything saved before is kept. Send what waits or save it to a file, make room, and enter this again.',
-          )
-        : new DeviceError(
-            'store-failed',
-            'This could not be saved on the device. Everything saved before is kept. Load this page again and enter it once more.',
-          );
+      throw notSaved(error);
     }
-  }
-
-  #planRevisionOf(pourId: string): number {
-    return this.memory.planOf(pourId)?.revision ?? this.crewLists.get(pourId)?.planRevision ?? 0;
   }
 
   /** The next records to send, in the order in which they were made, at most `most`. */
@@ -326,28 +228,11 @@ export class PersonWork {
   async settle(sent: readonly OutboxRecord[], outcomes: readonly PushOutcome[]): Promise<Settled> {
     const at = new Date(this.env.now()).toISOString();
     const settled = await settleOutcomes(this.db, sent, outcomes, at);
-    const streams = new Set(sent.map((record) => record.stream));
-    for (const id of settled.confirmedIds) this.outbox.delete(id);
-    for (const record of settled.refused) {
-      this.outbox.delete(record.id);
-      this.refused.set(record.id, record);
-    }
+    const streams = [...new Set(sent.map((record) => record.stream))];
+    this.takeSettled(settled, streams);
     this.#readRefused();
-    for (const photo of settled.photos) this.photos.set(photo.photoId, photo);
-    for (const stream of streams) {
-      this.memory.merge(
-        stream,
-        settled.confirmed.filter((entry) => streamOf(entry) === stream),
-      );
-      const gone = settled.refused.filter((record) => streamOf(record.envelope) === stream);
-      if (gone.length > 0)
-        this.memory.remove(
-          stream,
-          gone.map((record) => record.id),
-        );
-    }
     this.#mark();
-    this.#tell({ streams: [...streams] });
+    this.#tell({ streams });
     return settled;
   }
 
@@ -361,12 +246,7 @@ export class PersonWork {
     await this.loss.found(page.entries);
     const missed = await this.#takeMissed(page.stream, stored);
     // From here on without a pause: what is being read from the store meanwhile is read again (see #loadStream).
-    this.memory.merge(page.stream, page.entries, page.head);
-    if (page.plan) this.memory.setPlan(page.plan);
-    if (page.crewList) this.crewLists.set(page.stream, page.crewList);
-    this.planRevisions.set(page.stream, stored.cursor.planRevision);
-    for (const photo of stored.photos) this.photos.set(photo.photoId, photo);
-    for (const record of stored.offeredAgain) this.#waits(record);
+    this.takeStored(page, stored);
     if (stored.offeredAgain.length + stored.photos.length > 0) this.#mark();
     const news =
       missed ||
@@ -394,7 +274,7 @@ export class PersonWork {
       personId: this.person.id,
       deviceId: this.deviceId,
     });
-    for (const record of restarted.offeredAgain) this.#waits(record);
+    for (const record of restarted.offeredAgain) this.waits(record);
     this.memory.remove(stream, restarted.strays, 0);
     this.memory.merge(stream, restarted.waiting);
     this.#mark();
@@ -405,30 +285,9 @@ export class PersonWork {
     // What cannot be noted on a full device is asked again after the next start; sending goes on, and makes room.
     await writeMeta(this.db, 'index', index).catch(unlessFull);
     this.index = index;
-    for (const stream of await this.#notTheirs(index)) await this.#forget(stream);
+    const notTheirs = await streamsNotTheirs(this.db, index, [...this.crewLists.keys()]);
+    for (const stream of notTheirs) await this.#forget(stream);
     this.#tell({ streams: [] });
-  }
-
-  /**
-   * Streams of which this device holds what the person's role does not give them (any more): a record where they are
-   * crew now, a crew's list where they are not, anything of a pour that crew are no longer assigned to.
-   */
-  async #notTheirs({ projects }: DeviceIndex): Promise<string[]> {
-    const crewOf = new Map(
-      projects.flatMap(({ role, pours }) => pours.map(({ id }) => [id, role === 'crew'] as const)),
-    );
-    const cursors = await this.db.getAll('cursors');
-    const followed = new Set(cursors.filter(({ after }) => after > 0).map(({ stream }) => stream));
-    const withPlan = await this.db.getAllKeys('plans');
-    return [
-      ...withPlan.filter((pourId) => crewOf.get(pourId) === true),
-      ...[...this.crewLists.keys()].filter((pourId) => crewOf.get(pourId) !== true),
-      // Crew are given nothing of the project's own stream.
-      ...projects
-        .filter(({ role }) => role === 'crew')
-        .map(({ id }) => projectStream(id))
-        .filter((stream) => followed.has(stream)),
-    ];
   }
 
   async setClockOffset(offsetMs: number | null): Promise<void> {
@@ -464,12 +323,7 @@ export class PersonWork {
   }
 
   async forgetPhoto(photoId: string): Promise<void> {
-    const tx = this.db.transaction(['photos', 'photoBytes'], 'readwrite');
-    await Promise.all([
-      tx.objectStore('photos').delete(photoId),
-      tx.objectStore('photoBytes').delete(photoId),
-      tx.done,
-    ]);
+    await forgetPhoto(this.db, photoId);
     this.photos.delete(photoId);
     this.#mark();
     this.#tell({ streams: [] });

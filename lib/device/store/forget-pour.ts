@@ -33,3 +33,13 @@ export async function forgetPour(db: PersonDatabase, pourId: string): Promise<st
     return gone;
   });
 }
+
+/** Deletes a photo with its bytes. */
+export async function forgetPhoto(db: PersonDatabase, photoId: string): Promise<void> {
+  const tx = db.transaction(['photos', 'photoBytes'], 'readwrite');
+  await Promise.all([
+    tx.objectStore('photos').delete(photoId),
+    tx.objectStore('photoBytes').delete(photoId),
+    tx.done,
+  ]);
+}
