@@ -206,31 +206,3 @@ test('a screen whose piece did not arrive says so, and opens once it can be fetc
   await expect(page.getByRole('heading', { name: 'Left for you' })).toBeVisible();
   await context.close();
 });
-
-test('a device without room says that the reading was not kept, and has it still', async ({ browser }) => {
-  const { context, page } = await signedIn(browser, 'inspector', phone, '/field');
-  await openPour(page, 'P-017');
-  await context.setOffline(true);
-  await openTop(page);
-  await readWith(page, 'DG-1');
-  // The browser's own answer where the disk is full; what it keeps for such a moment is too little for this.
-  await page.evaluate(() => {
-    const full = window as unknown as { makeRoom: () => void };
-    const { put, add } = IDBObjectStore.prototype;
-    const refuse = () => {
-      throw new DOMException('The disk is full.', 'QuotaExceededError');
-    };
-    Object.assign(IDBObjectStore.prototype, { put: refuse, add: refuse });
-    full.makeRoom = () => Object.assign(IDBObjectStore.prototype, { put, add });
-  });
-  await type(page, '46');
-  await expect(page.getByRole('alert').filter({ hasText: 'This device has no room left' })).toBeVisible();
-  await expect(page.getByRole('banner')).toContainText('0 of 9 read');
-  await expect(page.getByLabel('Reading', { exact: true })).toContainText('46');
-  await fitsEveryShape(page, 'a reading on a full device', false);
-  await keepScreenshot(page, 'field-state-full');
-  await page.evaluate(() => (window as unknown as { makeRoom: () => void }).makeRoom());
-  await page.getByRole('button', { name: /^Keep/ }).tap();
-  await expect(page.getByRole('banner')).toContainText('1 of 9 read');
-  await context.close();
-});
