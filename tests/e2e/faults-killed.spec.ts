@@ -24,7 +24,7 @@ test.beforeAll(async () => {
 });
 test.afterAll(() => site.close());
 
-const KILLS = everything ? 20 : 3;
+const KILLS = everything ? 20 : 2;
 
 test(`the browser is killed ${KILLS} times right after "kept": each reading is there again, and is sent once`, async () => {
   test.setTimeout(60_000 + KILLS * 20_000);

@@ -12,8 +12,8 @@ import { everything } from '../faults/world/seeded';
 
 // Its negative control, what the checker says of a record that lost or doubled one of thousands, is in
 // tests/faults/check-history.test.ts.
-const READINGS = everything ? 10_000 : 700;
-const PHOTOS = everything ? 500 : 4;
+const READINGS = everything ? 10_000 : 600;
+const PHOTOS = everything ? 500 : 2;
 const MINUTE = 60_000;
 
 let site: BuildingSite;

@@ -2,6 +2,7 @@ import { expect, test, type BrowserContext } from '@playwright/test';
 import { openBuildingSite, sessionCookie, type BuildingSite } from '../faults/browser/building-site';
 import { keepReading, notSent, openFace, openField, takeGauge } from '../faults/browser/field-page';
 import { SeenHistory } from '../faults/browser/on-the-line';
+import { thoroughTest } from '../faults/browser/thorough-test';
 
 let site: BuildingSite;
 test.beforeEach(async () => {
@@ -51,28 +52,29 @@ test('of three tabs one sends, and each shows what the others recorded', async (
   expect(await history.violations([{ page, person: first }])).toEqual([]);
 });
 
-test('without the lock all three send, and nothing is doubled even so (negative control)', async ({
-  context,
-}) => {
-  const { first } = site.people;
-  await context.addCookies([sessionCookie(site, first)]);
-  await context.addInitScript(() =>
-    Object.defineProperty(Navigator.prototype, 'locks', { value: undefined }),
-  );
-  const page = await context.newPage();
-  await openField(page, site);
-  await takeGauge(page);
-  const tabs = [page, await context.newPage(), await context.newPage()];
-  for (const tab of tabs.slice(1)) await openFace(tab, site);
-  const counted = await countPushes(context);
-  const history = new SeenHistory(site);
-  await context.setOffline(true);
-  await keepReading(page, 54);
-  await history.note(page, first);
-  for (const tab of tabs) await expect(notSent(tab)).toContainText('1 not sent yet');
-  await context.setOffline(false);
-  await Promise.all(tabs.map((tab) => tab.evaluate(() => void window.dispatchEvent(new Event('online')))));
-  for (const tab of tabs) await expect(notSent(tab)).toContainText('all sent', { timeout: 30_000 });
-  expect(counted().most).toBeGreaterThan(1);
-  expect(await history.violations([{ page, person: first }])).toEqual([]);
-});
+thoroughTest(
+  'without the lock all three send, and nothing is doubled even so (negative control)',
+  async ({ context }) => {
+    const { first } = site.people;
+    await context.addCookies([sessionCookie(site, first)]);
+    await context.addInitScript(() =>
+      Object.defineProperty(Navigator.prototype, 'locks', { value: undefined }),
+    );
+    const page = await context.newPage();
+    await openField(page, site);
+    await takeGauge(page);
+    const tabs = [page, await context.newPage(), await context.newPage()];
+    for (const tab of tabs.slice(1)) await openFace(tab, site);
+    const counted = await countPushes(context);
+    const history = new SeenHistory(site);
+    await context.setOffline(true);
+    await keepReading(page, 54);
+    await history.note(page, first);
+    for (const tab of tabs) await expect(notSent(tab)).toContainText('1 not sent yet');
+    await context.setOffline(false);
+    await Promise.all(tabs.map((tab) => tab.evaluate(() => void window.dispatchEvent(new Event('online')))));
+    for (const tab of tabs) await expect(notSent(tab)).toContainText('all sent', { timeout: 30_000 });
+    expect(counted().most).toBeGreaterThan(1);
+    expect(await history.violations([{ page, person: first }])).toEqual([]);
+  },
+);

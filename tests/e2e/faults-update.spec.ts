@@ -45,7 +45,7 @@ const versions = (page: Page) =>
     const told = new MessageChannel();
     const worker = new Promise<string>((heard) => {
       told.port1.onmessage = ({ data }: MessageEvent<string>) => heard(data);
-      setTimeout(() => heard('the first'), 1000);
+      setTimeout(() => heard('the first'), 300);
     });
     navigator.serviceWorker.controller?.postMessage('version', [told.port2]);
     const shell = document.querySelector('meta[name=shell]')?.getAttribute('content') ?? 'the first';
