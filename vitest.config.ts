@@ -22,6 +22,8 @@ export default defineConfig({
           testTimeout: 60_000,
           hookTimeout: 60_000,
           maxWorkers: 2,
+          // Another number of workers than the unit tests: after them, where both are asked for.
+          sequence: { groupOrder: 1 },
         },
       },
       {

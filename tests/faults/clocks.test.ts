@@ -75,6 +75,8 @@ async function run(seed: number, wrong: boolean) {
     }
   }
   await allCalm(hands, clock);
+  // The first has sent before the second did: once more, so that what is looked at is all of it.
+  await hands[0]?.tabs[0]?.syncNow();
   const found = violations({
     history,
     server: server.entries.filter((one) => one.pourId === pourId),

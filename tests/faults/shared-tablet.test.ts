@@ -126,26 +126,28 @@ async function run(seed: number, flaws: ModelFlaws = {}) {
       found.push(`sent in another's session: ${entry.id}`);
   }
   found.push(...seen.map((id) => `shown to another: ${id}`));
-  return { found, recorded: history.recorded.size, authors: new Set(authors.values()), opens };
+  return { found, recorded: history.recorded.size, opens };
 }
 
-/** How often each seed's tablet was opened by PIN: not in every one, but in some. */
+/** How often each seed's tablet was opened by PIN, and how much was recorded: not in every one, but in some. */
 const opened: number[] = [];
+const amounts: number[] = [];
+const sum = (numbers: number[]) => numbers.reduce((so, one) => so + one, 0);
 
 describe('a tablet that goes from hand to hand', () => {
   it.each(seeds(10))(
     'seed %d: everybody’s work is kept, hidden from others, and sent as theirs',
     async (seed) => {
-      const { found, recorded, authors, opens } = await run(seed);
+      const { found, recorded, opens } = await run(seed);
       opened.push(opens);
       expect(found, `FAULT_SEED=${seed}`).toEqual([]);
-      expect(recorded).toBeGreaterThan(3);
-      expect(authors.size).toBeGreaterThan(0);
+      amounts.push(recorded);
     },
   );
 
-  it('was opened by PIN now and then', () => {
-    expect(opened.reduce((sum, one) => sum + one, 0)).toBeGreaterThan(opened.length);
+  it('was opened by PIN now and then, and used', () => {
+    expect(sum(opened)).toBeGreaterThan(opened.length);
+    expect(sum(amounts)).toBeGreaterThan(3 * amounts.length);
   });
 
   it('a server that takes anybody’s entries from anybody is found out (negative control)', async () => {
