@@ -181,10 +181,10 @@ function TimelineRow({
         <MarkIcon kind={pour.mark} size={22} />
       </span>
       <div
-        className={`min-w-0 @2xl:absolute @2xl:inset-y-0 @2xl:grid @2xl:max-w-[40%] @2xl:content-center ${
+        className={`min-w-0 @2xl:absolute @2xl:inset-y-0 @2xl:grid @2xl:content-center ${
           leftward
-            ? '@2xl:right-[calc(100%_-_min(var(--x),var(--d))_+_12px)] @2xl:text-right'
-            : '@2xl:left-[calc(var(--x)_+_16px)]'
+            ? '@2xl:right-[calc(100%_-_min(var(--x),var(--d))_+_12px)] @2xl:left-0 @2xl:text-right'
+            : '@2xl:right-0 @2xl:left-[calc(var(--x)_+_16px)]'
         }`}
         style={{ '--d': `${deadlineX}%` } as CSSProperties}
       >

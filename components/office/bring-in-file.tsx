@@ -51,7 +51,7 @@ export function BringInFile({ personId, timeZone }: { personId: string; timeZone
           {...fieldAria(id, { error: problem ?? undefined })}
           type="file"
           accept="application/json,.json"
-          className="min-h-target"
+          className="max-w-full text-body file:mr-3 file:min-h-target file:border file:border-solid file:border-ink file:bg-sheet file:px-pad file:font-label file:font-semibold file:text-ink hover:file:border-chalk hover:file:text-chalk"
           onChange={(event) => void choose(event.target.files?.[0])}
         />
         <FieldError id={id} error={problem ?? undefined} />

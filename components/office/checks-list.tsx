@@ -26,13 +26,17 @@ const settled = (check: CheckState): boolean =>
 export function ChecksList({ sheet, viewer }: { sheet: Sheet; viewer: OfficeViewer }) {
   if (sheet.checks.length === 0) return <p className="text-pencil">The plan asks for no checks.</p>;
   return (
-    <div className="grid items-start gap-x-8 gap-y-2 lg:grid-cols-2">
+    <div className="gap-x-8 lg:columns-2">
       {checkGroups.map((group) => {
         const checks = sheet.checks.filter((check) => check.item.group === group);
         if (checks.length === 0) return null;
         const left = checks.filter((check) => !settled(check)).length;
         return (
-          <section key={group} aria-label={checkGroupWords[group]} className="min-w-0">
+          <section
+            key={group}
+            aria-label={checkGroupWords[group]}
+            className="min-w-0 break-inside-avoid pb-2"
+          >
             <Fold
               open={left > 0}
               summary={checkGroupWords[group]}
@@ -57,7 +61,7 @@ function Check({ check, viewer }: { check: CheckState; viewer: OfficeViewer }) {
   return (
     <li
       id={`check-${check.item.id}`}
-      className="grid scroll-mt-14 grid-cols-[auto_1fr] gap-x-2.5 border-b border-rule py-1.5 target:bg-paper"
+      className="grid grid-cols-[auto_1fr] gap-x-2.5 border-b border-rule py-1.5 target:bg-paper"
     >
       <MarkIcon kind={shown.mark} className="mt-0.5" />
       <div>

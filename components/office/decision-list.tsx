@@ -1,7 +1,9 @@
+import { LeaveLink } from '@/components/ui/leave-link';
 import type { NonconformanceState } from '@/lib/inspection/sheet-types';
 import type { OfficeViewer } from './office-viewer';
 import { personName, subjectWords, type WordContext } from './entry-words';
 import { fullTime } from './project-time';
+import { entryHref } from './record-page';
 import { decisionWords, stageWords } from './state-words';
 
 /** The decisions on a nonconformance, the one in force first, earlier ones struck through. */
@@ -9,8 +11,10 @@ export function DecisionList({
   state,
   context,
   viewer,
+  pourId,
 }: {
   state: NonconformanceState;
+  pourId: string;
   context: WordContext;
   viewer: OfficeViewer;
 }) {
@@ -43,7 +47,13 @@ export function DecisionList({
             ))}
             <p className="text-label text-pencil">
               {personName(entry.authorId, viewer.people)}, licence {body.licence},{' '}
-              {fullTime(entry.recordedAt, viewer.timeZone)}, entry no. {entry.seq ?? '–'}
+              {fullTime(entry.recordedAt, viewer.timeZone)}, entry{' '}
+              <LeaveLink
+                href={entryHref(pourId, entry.id)}
+                className="underline decoration-rule underline-offset-4 hover:text-chalk"
+              >
+                no. {entry.seq ?? '–'}
+              </LeaveLink>
             </p>
           </li>
         );

@@ -54,7 +54,7 @@ export function DecisionSheet({
           }}
         >
           <summary className="flex min-h-target flex-wrap items-center justify-between gap-x-4 px-4 py-2">
-            <span className="text-heading font-semibold font-label">{heads[key]}</span>
+            <h2 className="text-heading">{heads[key]}</h2>
             <span className="font-label text-label font-medium text-pencil">
               {counts[key]}
               {opened.has(key) ? ', opened' : <span className="text-chalk">, open to look</span>}

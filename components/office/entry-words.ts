@@ -167,10 +167,13 @@ const wording: Wording = {
         { before: 'Before load', under: "Under a person's weight", after: 'After load' }[body.stage],
     ),
   }),
-  photo: (body, context) => ({
-    title: `Photo ${shotWords[body.shot]}`,
-    lines: given(`Of ${subjectWords(context, body.about)}`, body.caption),
-  }),
+  photo: (body, context) => {
+    const about = subjectWords(context, body.about);
+    return {
+      title: `Photo ${shotWords[body.shot]}`,
+      lines: given(`Of: ${about}`, body.caption !== about && body.caption),
+    };
+  },
   note: (body, context) => ({
     title: 'Note',
     lines: [body.text, `About ${subjectWords(context, body.about)}`],

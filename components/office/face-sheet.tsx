@@ -33,7 +33,6 @@ export function FaceSheet({
   return (
     <SheetFrame
       id={`face-${face.id}`}
-      className="scroll-mt-14"
       heading={name}
       aside={`drawn ${state.drawnRead} of ${state.drawnTotal}, chosen ${state.chosenRead} of ${state.chosenTotal} read${state.spots.length ? `, ${state.spots.length} spot` : ''}`}
     >

@@ -42,12 +42,7 @@ export function HoldsList({
   return (
     <div className="grid gap-4">
       {holdsByRole(holds, viewer.role).map(({ role, holds: group }) => (
-        <section
-          key={role}
-          id={`holds-${role}`}
-          aria-label={`Cleared by ${roleWords[role].toLowerCase()}`}
-          className="scroll-mt-14"
-        >
+        <section key={role} id={`holds-${role}`} aria-label={`Cleared by ${roleWords[role].toLowerCase()}`}>
           <h3 className="flex items-baseline justify-between gap-4 border-b border-ink pb-0.5 text-lead">
             <span>
               {roleWords[role]}
@@ -70,7 +65,10 @@ function HoldRow({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: Of
   const place = holdPlace(hold, sheet);
   const standing = hold.since && `Standing for ${timeAway(hold.since, viewer.now).replace(' ago', '')}`;
   return (
-    <li className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 xl:grid-cols-[auto_1fr_minmax(0,17rem)]">
+    <li
+      id={`hold-${hold.id}`}
+      className="grid grid-cols-[auto_1fr] gap-x-3 border-b border-rule py-2 target:bg-paper xl:grid-cols-[auto_1fr_minmax(0,17rem)]"
+    >
       <MarkIcon kind={markOfHold[hold.kind] ?? 'not-met-low'} className="mt-1" />
       <div className="min-w-0">
         <p className="font-label text-lead font-semibold break-words">{hold.title}</p>

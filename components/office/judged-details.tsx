@@ -69,7 +69,7 @@ function Source({ source }: { source: JudgedWords['sources'][number] | { kept: s
   if (!shown) return null;
   return (
     <section className="grid gap-1">
-      <h4 className="font-label text-label font-semibold">{shown.heading}</h4>
+      <p className="font-label text-label font-semibold">{shown.heading}</p>
       {shown.warnings.map((warning) => (
         <p key={warning} className="border-l-[6px] border-watch pl-2 text-label">
           {warning}

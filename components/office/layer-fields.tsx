@@ -21,7 +21,7 @@ export function LayerFields({ elementIndex }: { elementIndex: number }) {
   const layers = useFieldArray({ control, name: path, keyName: 'key' });
   return (
     <div className="grid gap-3 border-t border-rule pt-3">
-      <h4 className="text-lead">Layers</h4>
+      <h3 className="text-lead">Layers</h3>
       {layers.fields.map((field, index) => (
         <fieldset key={field.key} className="border-b border-rule pb-3">
           <legend className="sr-only">Layer {index + 1}</legend>

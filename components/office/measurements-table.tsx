@@ -48,12 +48,14 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
           return [
             {
               key: state.item.id,
+              id: `measurement-${state.item.id}`,
               cells: { ...head, place: '–', value: '–', verdict: <Mark verdict={null} reason="" /> },
             },
           ];
         }
         return state.places.map((place, index) => ({
           key: place.entry.id,
+          id: index === 0 ? `measurement-${state.item.id}` : undefined,
           cells: {
             ...(index === 0 ? head : { what: <span className="sr-only">{state.item.title}</span> }),
             place: [

@@ -15,7 +15,7 @@ export function NavLink({ href, label }: { href: string; label: string }) {
       prefetch={false}
       aria-current={current ? 'page' : undefined}
       className={classNames(
-        'inline-flex min-h-target items-center border-b-[3px] px-2 font-label text-body font-semibold whitespace-nowrap -outline-offset-3',
+        'inline-flex min-h-target items-center border-b-[3px] px-1 font-label text-body font-semibold whitespace-nowrap -outline-offset-3 md:px-2',
         current ? 'border-ink text-ink' : 'border-transparent text-chalk hover:border-chalk',
       )}
     >

@@ -42,8 +42,8 @@ export function OfficeHeader({
             </p>
           )
         )}
-        <nav aria-label="Main" className="order-last -mx-1 w-full overflow-x-auto md:order-none md:w-auto">
-          <ul className="flex gap-1">
+        <nav aria-label="Main" className="order-last -mx-1 w-[calc(100%+0.5rem)] md:order-none md:w-auto">
+          <ul className="flex flex-wrap justify-between md:gap-1">
             {links.map((link) => (
               <li key={link.href}>
                 <NavLink {...link} />

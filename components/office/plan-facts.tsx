@@ -28,7 +28,7 @@ export function PlanFacts({
   const layers = plan.elements.flatMap((element) => element.layers.map((layer) => ({ element, layer })));
   return (
     <div className="grid gap-4 *:min-w-0">
-      <dl className="grid gap-x-6 gap-y-1 sm:grid-cols-[max-content_1fr]">
+      <dl className="grid gap-x-6 sm:grid-cols-[max-content_1fr] sm:gap-y-1">
         <Fact label="Acceptance basis">{basisWords[plan.basis]}</Fact>
         <Fact label="Decision rule">{decisionRuleWords(plan.decisionRule)}</Fact>
         <Fact label="Validity of a release">{plan.validityHours} h, until the start of placing</Fact>
@@ -103,8 +103,8 @@ export function PlanFacts({
 function Fact({ label, children }: { label: string; children: React.ReactNode }) {
   return (
     <>
-      <dt className="font-label font-medium text-pencil">{label}</dt>
-      <dd>{children}</dd>
+      <dt className="font-label font-medium text-pencil max-sm:text-label">{label}</dt>
+      <dd className="min-w-0 max-sm:pb-1.5">{children}</dd>
     </>
   );
 }

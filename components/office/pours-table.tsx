@@ -67,6 +67,7 @@ export function PoursTable({
     const current = query.sort === key;
     return {
       key,
+      words,
       ...more,
       sort: current ? (query.order === 'up' ? 'ascending' : 'descending') : undefined,
       head: (
@@ -87,11 +88,11 @@ export function PoursTable({
       captionHidden
       columns={[
         head('number', 'Pour'),
-        head('title', 'Element and location', { className: 'min-w-44' }),
+        head('title', 'Element and location', { className: 'min-w-44', beside: true }),
         head('planned', 'Planned', { className: 'whitespace-nowrap' }),
         { key: 'plan', head: 'Plan' },
         head('state', 'State', { className: 'min-w-32 max-sm:hidden' }),
-        head('holds', 'Holds and who clears them', { className: 'min-w-48' }),
+        head('holds', 'Holds and who clears them', { className: 'min-w-48', words: 'Holds' }),
         head('read', 'Points read', { figure: true }),
         { key: 'notMet', head: 'Not met', figure: true },
       ]}
@@ -112,7 +113,7 @@ export function PoursTable({
             <>
               {pour.title}
               <span className="block text-label text-pencil">{pour.location}</span>
-              {/* On a phone the column of states would lie outside the screen. */}
+              {/* On a phone the state stands under what is placed, where it is looked for. */}
               <span className="flex items-center gap-1.5 text-label sm:hidden">
                 <MarkIcon kind={pourStanding(pour).mark} />
                 {pourStateWords[pour.state]}

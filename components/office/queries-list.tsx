@@ -1,9 +1,11 @@
 import { MarkIcon } from '@/components/drawings/mark';
+import { LeaveLink } from '@/components/ui/leave-link';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { Sheet } from '@/lib/inspection/sheet-types';
 import { personName, subjectWords, type WordContext } from './entry-words';
 import type { OfficeViewer } from './office-viewer';
 import { dayAndTime } from './project-time';
+import { entryHref } from './record-page';
 import { RowAction } from './row-action';
 
 /** Questions about entries with their answers, the open ones first. */
@@ -34,8 +36,14 @@ export function QueriesList({
             <p>
               <span className="font-label font-semibold">{entry.body.text}</span>{' '}
               <span className="text-label text-pencil">
-                About: {subjectWords(context, { kind: 'entry', id: entry.body.entryId })}.{' '}
-                {by(entry.authorId, entry.recordedAt)}
+                About:{' '}
+                <LeaveLink
+                  href={entryHref(sheet.pourId, entry.body.entryId)}
+                  className="underline decoration-rule underline-offset-4 hover:text-chalk"
+                >
+                  {subjectWords(context, { kind: 'entry', id: entry.body.entryId })}
+                </LeaveLink>
+                . {by(entry.authorId, entry.recordedAt)}
               </span>
             </p>
             {answer ? (

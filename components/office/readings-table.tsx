@@ -53,8 +53,8 @@ export function ReadingsTable({
       captionHidden
       columns={[
         { key: 'point', head: 'Point' },
-        { key: 'cover', head: 'Cover', figure: true },
-        { key: 'verdict', head: 'Verdict', className: 'min-w-40' },
+        { key: 'cover', head: 'Cover', figure: true, beside: true },
+        { key: 'verdict', head: 'Verdict', className: 'min-w-40 max-sm:flex-1', beside: true },
         { key: 'steel', head: 'To', className: 'whitespace-nowrap' },
         { key: 'measured', head: 'Measured', className: 'whitespace-nowrap' },
       ]}

@@ -1,3 +1,4 @@
+import { LeaveLink } from '@/components/ui/leave-link';
 import { isAmendable } from '@/lib/inspection/amendments';
 import { mayRecord } from '@/lib/inspection/entry-access';
 import type { Sheet } from '@/lib/inspection/sheet-types';
@@ -6,6 +7,7 @@ import { unknownEntryWords } from './entry-words';
 import type { OfficeViewer } from './office-viewer';
 import { fullTime } from './project-time';
 import { byWords, type AmendmentLine, type RecordLine } from './record-lines';
+import { entryHref } from './record-page';
 import { RowAction } from './row-action';
 
 /** Types that nobody queries: the server's own words, and what is itself a question. */
@@ -47,10 +49,19 @@ export function RecordList({
         <li
           key={line.id}
           id={`entry-${line.id}`}
-          className="grid scroll-mt-14 gap-x-4 border-b border-rule py-2 target:bg-paper sm:grid-cols-[8.5rem_1fr_auto]"
+          className="grid gap-x-4 border-b border-rule py-2 target:bg-paper sm:grid-cols-[8.5rem_1fr_auto]"
         >
           <div className="font-figure text-label text-pencil">
-            {line.seq === null ? 'not received' : `no. ${line.seq}`}{' '}
+            {line.seq === null ? (
+              'not received'
+            ) : (
+              <LeaveLink
+                href={entryHref(sheet.pourId, line.id)}
+                className="inline-block min-h-6 decoration-rule underline-offset-4 hover:text-chalk [&:not(:hover)]:no-underline"
+              >
+                no. {line.seq}
+              </LeaveLink>
+            )}{' '}
             <span className="sm:block">{line.hash ? line.hash.slice(0, 10) : ''}</span>
             {line.ofProject && <span className="font-label sm:block"> of the project</span>}
           </div>

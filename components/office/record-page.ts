@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { EntryType } from '@/lib/inspection/entry';
+import { recordId } from '@/lib/inspection/primitives';
 import type { RecordLine } from './record-lines';
 
 /** Parts of a record that can be looked at by themselves. */
@@ -51,13 +52,14 @@ const partNames = Object.keys(recordParts) as [RecordPart, ...RecordPart[]];
 export const recordQuery = z.object({
   part: z.enum(partNames).optional().catch(undefined),
   before: z.coerce.number().int().positive().optional().catch(undefined),
+  entry: recordId.optional().catch(undefined),
 });
 export type RecordQuery = z.infer<typeof recordQuery>;
 
 const PAGE = 50;
 
 /**
- * One page of a record, newest first.
+ * One page of a record, newest first; where an entry is asked for, the page of the whole record that it stands on.
  * @param lines every line, oldest first
  * @returns the lines, and the number that an earlier page starts below, or null on the last
  */
@@ -66,15 +68,23 @@ export function recordPage(
   query: RecordQuery,
   size = PAGE,
 ): { lines: RecordLine[]; earlier: number | null; total: number } {
-  const types: readonly string[] | null = query.part ? recordParts[query.part].types : null;
+  const at = lines.findIndex((line) => line.id === query.entry);
+  const types: readonly string[] | null = query.part && at < 0 ? recordParts[query.part].types : null;
   const wanted = lines.filter((line) => types === null || types.includes(line.type));
   const { before } = query;
+  const newer = at < 0 ? 0 : Math.floor((lines.length - 1 - at) / size) * size;
   const from =
-    before === undefined ? wanted : wanted.filter((line) => line.seq !== null && line.seq < before);
+    at < 0 && before !== undefined
+      ? wanted.filter((line) => line.seq !== null && line.seq < before)
+      : wanted.slice(0, wanted.length - newer);
   const page = from.slice(-size).reverse();
   const last = page.at(-1)?.seq ?? null;
   return { lines: page, earlier: from.length > page.length ? last : null, total: wanted.length };
 }
+
+/** The address of one entry in the record of its pour. */
+export const entryHref = (pourId: string, entryId: string): string =>
+  `/pours/${pourId}/record?entry=${entryId}#entry-${entryId}`;
 
 /** The address of a page of a record. */
 export function recordHref(pourId: string, query: RecordQuery): string {

@@ -5,6 +5,7 @@ import { useState } from 'react';
 import { z } from 'zod';
 import { Button } from '@/components/ui/button';
 import { Checkbox } from '@/components/ui/checkbox';
+import { LeaveLink } from '@/components/ui/leave-link';
 import { LinkButton } from '@/components/ui/link-button';
 import { Notice } from '@/components/ui/notice';
 import { Textarea } from '@/components/ui/textarea';
@@ -12,6 +13,7 @@ import { holdsInScope } from '@/lib/inspection/holds';
 import { roleWords } from '@/lib/inspection/roles';
 import { inScope } from '@/lib/inspection/scope';
 import type { Hold } from '@/lib/inspection/sheet-types';
+import { holdHref } from './hold-place';
 import { postJson, type Posted } from './post-json';
 import { ProblemNotice } from './problem-notice';
 
@@ -183,7 +185,12 @@ export function ReleaseForm({
                   className="grid gap-x-4 border-b border-rule py-1.5 sm:grid-cols-[1fr_auto]"
                 >
                   <span>
-                    <span className="font-label font-semibold">{hold.title}</span>
+                    <LeaveLink
+                      href={holdHref(pourId, hold.id)}
+                      className="inline-block min-h-6 font-label font-semibold underline decoration-rule underline-offset-4 hover:text-chalk"
+                    >
+                      {hold.title}
+                    </LeaveLink>
                     <span className="block text-label text-pencil">
                       {hold.where}. {hold.need}
                     </span>

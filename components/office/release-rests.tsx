@@ -27,7 +27,7 @@ export function ReleaseRests({
   const decided = sheet.nonconformances.filter((one) => one.disposition && !one.withdrawn);
   const during = sheet.conditions.filter((one) => one.condition.stage === 'during-placing');
   return (
-    <dl className="grid gap-x-6 gap-y-1 sm:grid-cols-[max-content_1fr]">
+    <dl className="grid gap-x-6 sm:grid-cols-[max-content_1fr] sm:gap-y-1">
       <Line label="Plan">rev {revisionLetter(sheet.plan.revision)}</Line>
       <Line label="Drawings">{drawings.join(', ')}</Line>
       <Line label="Mix">{sheet.plan.mix?.name ?? 'not named'}</Line>
@@ -78,8 +78,8 @@ export function ReleaseRests({
 function Line({ label, children }: { label: string; children: React.ReactNode }) {
   return (
     <>
-      <dt className="font-label font-medium text-pencil">{label}</dt>
-      <dd className="min-w-0">{children}</dd>
+      <dt className="font-label font-medium text-pencil max-sm:text-label">{label}</dt>
+      <dd className="min-w-0 max-sm:pb-1.5">{children}</dd>
     </>
   );
 }

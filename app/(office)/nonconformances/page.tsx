@@ -169,14 +169,21 @@ export default async function NonconformancesPage({ searchParams }: { searchPara
               </EmptyState>
             }
           />
-          {list.next && (
-            <div>
-              <LinkButton
-                href={`/nonconformances?${new URLSearchParams({ ...(query.show ? { show: query.show } : {}), after: list.next }).toString()}`}
-              >
-                Earlier ones
-              </LinkButton>
-            </div>
+          {(list.next || query.after) && (
+            <nav aria-label="Pages of the list" className="flex flex-wrap gap-3">
+              {query.after && (
+                <LinkButton href={`/nonconformances${query.show ? `?show=${query.show}` : ''}`}>
+                  Latest ones
+                </LinkButton>
+              )}
+              {list.next && (
+                <LinkButton
+                  href={`/nonconformances?${new URLSearchParams({ ...(query.show ? { show: query.show } : {}), after: list.next }).toString()}`}
+                >
+                  Earlier ones
+                </LinkButton>
+              )}
+            </nav>
           )}
         </div>
       </SheetFrame>

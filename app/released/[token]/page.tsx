@@ -38,7 +38,7 @@ export default async function ReleasedPage({ params }: { params: Promise<{ token
       >
         <div className="grid gap-4">
           <p className="text-lead">{standing.sentence}</p>
-          <dl className="grid gap-x-6 gap-y-1.5 sm:grid-cols-[max-content_1fr]">
+          <dl className="grid gap-x-6 sm:grid-cols-[max-content_1fr] sm:gap-y-1.5">
             <Line label="For">
               {page.pour.title}, {page.pour.location}
             </Line>
@@ -92,7 +92,7 @@ export default async function ReleasedPage({ params }: { params: Promise<{ token
               ? `Chain checked now: ${chain.entries} entries of this pour, each following from the one before, unbroken.`
               : `The chain is broken. ${chain.problem ?? ''}`}
           </p>
-          <dl className="grid gap-x-6 gap-y-1.5 sm:grid-cols-[max-content_1fr]">
+          <dl className="grid gap-x-6 sm:grid-cols-[max-content_1fr] sm:gap-y-1.5">
             <Line label="Digest of the sheet">
               <Hash>{page.body.sheetDigest}</Hash>
             </Line>
@@ -158,8 +158,8 @@ function standingOf(
 function Line({ label, children }: { label: string; children: React.ReactNode }) {
   return (
     <>
-      <dt className="font-label font-medium text-pencil">{label}</dt>
-      <dd className="min-w-0">{children}</dd>
+      <dt className="font-label font-medium text-pencil max-sm:text-label">{label}</dt>
+      <dd className="min-w-0 max-sm:pb-1.5">{children}</dd>
     </>
   );
 }

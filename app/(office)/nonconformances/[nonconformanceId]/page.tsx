@@ -106,7 +106,10 @@ export default async function DecisionPage({ params }: { params: Promise<{ nonco
           <p>
             Raised by {personName(state.entry.authorId, viewer.people)},{' '}
             {fullTime(state.entry.recordedAt, timeZone)}
-            {body.neededBy && `. A decision is needed ${timeAway(body.neededBy, viewer.now)}`}.
+            {body.neededBy &&
+              !state.disposition &&
+              `. A decision ${body.neededBy < viewer.now ? 'was' : 'is'} needed ${timeAway(body.neededBy, viewer.now)}`}
+            .
           </p>
           {body.proposal && (
             <p>
@@ -152,7 +155,7 @@ export default async function DecisionPage({ params }: { params: Promise<{ nonco
 
       <SheetFrame heading="Decisions so far">
         <div className="grid gap-4">
-          <DecisionList {...{ state, context, viewer }} />
+          <DecisionList {...{ state, context, viewer }} pourId={sheet.pourId} />
           {state.conditions.length > 0 && (
             <div>
               <h3 className="text-lead">Conditions</h3>

@@ -34,7 +34,6 @@ export const metadata: Metadata = { title: 'Pour' };
 
 /** How much of the record stands here; the rest has a page of its own. */
 const LATEST = 6;
-const part = 'scroll-mt-14';
 
 /** One pour: first whether concrete may come and what holds it, then what was read, checked, decided and recorded. */
 export default async function PourPage({ params }: { params: Promise<{ pourId: string }> }) {
@@ -82,7 +81,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
       />
 
       <div className="grid items-start gap-6 *:min-w-0 lg:grid-cols-[21rem_minmax(0,1fr)]">
-        <SheetFrame id="release" heading="Release" className={`${part} lg:sticky lg:top-12`}>
+        <SheetFrame id="release" heading="Release" className="lg:sticky lg:top-12">
           <div className="grid gap-4">
             <ReleaseStanding
               {...{ sheet, holds, state, viewer }}
@@ -106,13 +105,13 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
           </div>
         </SheetFrame>
         <div className="grid gap-6 *:min-w-0">
-          <SheetFrame id="holds" heading="Holds" aside="by who clears them" className={part}>
+          <SheetFrame id="holds" heading="Holds" aside="by who clears them">
             <HoldsList {...{ sheet, holds, viewer }} />
           </SheetFrame>
-          <SheetFrame id="nonconformances" heading="Nonconformances and decisions" className={part}>
+          <SheetFrame id="nonconformances" heading="Nonconformances and decisions">
             <div className="grid gap-4">
               <NonconformanceRows nonconformances={sheet.nonconformances} viewer={viewer} />
-              <div id="conditions" className={part}>
+              <div id="conditions">
                 <h3 className="text-lead">Conditions</h3>
                 <ConditionsList
                   conditions={sheet.conditions}
@@ -122,7 +121,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
                 />
               </div>
               {sheet.queries.length > 0 && (
-                <div id="queries" className={part}>
+                <div id="queries">
                   <h3 className="text-lead">Queries</h3>
                   <QueriesList {...{ sheet, context, viewer }} />
                 </div>
@@ -133,7 +132,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
       </div>
 
       <JudgedSources sources={namedSources(sheet.plan)}>
-        <div id="faces" className={`grid gap-6 *:min-w-0 ${part}`}>
+        <div id="faces" className="grid gap-6 *:min-w-0">
           {sheet.plan.elements.flatMap((element) =>
             element.faces.map((face) => {
               const faceState = sheet.faces.find((one) => one.faceId === face.id);
@@ -157,23 +156,22 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
         id="checks"
         heading="Checks"
         aside={`${sheet.plan.checklist.template}, version ${sheet.plan.checklist.version}`}
-        className={part}
       >
         <ChecksList sheet={sheet} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame id="measurements" heading="Measurements" className={part}>
+      <SheetFrame id="measurements" heading="Measurements">
         <MeasurementsTable sheet={sheet} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame id="photos" heading="Photos" className={part}>
+      <SheetFrame id="photos" heading="Photos">
         <PhotoStrip photos={photos} />
       </SheetFrame>
-      <SheetFrame id="signatures" heading="Signatures" aside="two different persons" className={part}>
+      <SheetFrame id="signatures" heading="Signatures" aside="two different persons">
         <SignaturesPanel {...{ sheet, context, viewer }} />
       </SheetFrame>
       <SheetFrame
         id="plan"
         heading="Plan"
-        className={part}
+
         aside={
           <span className="flex flex-wrap gap-2 print:hidden">
             {allowed('plan.revise', viewer.role) && placing === 'before' && (
@@ -189,12 +187,7 @@ export default async function PourPage({ params }: { params: Promise<{ pourId: s
       >
         <PlanFacts plan={sheet.plan} revisions={header.revisions} viewer={viewer} />
       </SheetFrame>
-      <SheetFrame
-        id="record"
-        heading="The record"
-        aside="the latest; nothing is ever taken out"
-        className={part}
-      >
+      <SheetFrame id="record" heading="The record" aside="the latest; nothing is ever taken out">
         <div className="grid gap-3">
           <ChainState chain={chain} />
           <RecordList {...{ sheet, viewer }} lines={recordPage(lines, {}, LATEST).lines} />

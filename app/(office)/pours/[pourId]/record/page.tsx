@@ -86,7 +86,7 @@ export default async function RecordPage({
             <RecordList sheet={sheet} lines={page.lines} viewer={viewer} />
           )}
           <nav aria-label="Pages of the record" className="flex flex-wrap items-center gap-3 print:hidden">
-            {query.before !== undefined && (
+            {(query.before !== undefined || query.entry !== undefined) && (
               <LinkButton href={recordHref(sheet.pourId, { part: query.part })}>Latest entries</LinkButton>
             )}
             {page.earlier !== null && (

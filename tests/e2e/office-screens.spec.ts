@@ -1,0 +1,73 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, test, type Page } from '@playwright/test';
+import { overflow } from './field-checks';
+import { keepScreenshot } from './keep-screenshot';
+import { demoAddresses, openScreens, screens, type DemoAddresses, type Screen } from './office-screens';
+import { appAddress, signIn, type demo } from './sign-in';
+
+/** `OFFICE_SCREENS=all` keeps every look of every screen and asks axe for all of its rules in each. */
+const everything = process.env.OFFICE_SCREENS === 'all';
+
+/** The looks that every screen has, and what axe is asked of each: by night, whether its own colours can be read. */
+const looks = [
+  { width: 390, theme: 'day', axe: 'all' },
+  { width: 390, theme: 'night', axe: null },
+  { width: 1280, theme: 'day', axe: null },
+  { width: 1280, theme: 'night', axe: 'colours' },
+] as const;
+
+// Hundreds of looks are taken of pages as long as they come: each would be kept a second time in the trace.
+test.use({ trace: 'off' });
+
+let at: DemoAddresses;
+test.beforeAll(async ({ browser }) => {
+  at = await demoAddresses(browser);
+});
+
+/** What every screen owes to whoever uses it: a name, no rule of the web broken, nothing pushed off the side. */
+async function look(page: Page, screen: Screen): Promise<void> {
+  const said: string[] = [];
+  page.removeAllListeners('console');
+  page.on('console', (message) => {
+    // What is not there answers 404, and the browser says so of the page itself.
+    if (message.type() === 'error' && !/status of 40[0134]/.test(message.text())) said.push(message.text());
+  });
+  await page.setViewportSize({ width: looks[0].width, height: 844 });
+  await page.emulateMedia({ colorScheme: 'light', reducedMotion: 'reduce' });
+  await page.goto(appAddress(screen.path(at)));
+  await expect(page.getByRole('heading', { level: 1 }), screen.name).toHaveText(screen.heading);
+  await screen.then?.(page);
+  for (const { width, theme, axe } of looks) {
+    const kept = `${screen.name}-${width}-${theme}`;
+    await page.setViewportSize({ width, height: width === 390 ? 844 : 800 });
+    await page.emulateMedia({ colorScheme: theme === 'night' ? 'dark' : 'light', reducedMotion: 'reduce' });
+    expect.soft(await overflow(page), `${kept} scrolls sideways by so many px`).toBe(0);
+    if (axe === null && !everything) continue;
+    await keepScreenshot(page, `office/${kept}`);
+    // No page has frames of another site, for which axe would open a page of its own.
+    const builder = new AxeBuilder({ page }).setLegacyMode();
+    if (axe === 'colours' && !everything) builder.withRules(['color-contrast']);
+    const { violations } = await builder.analyze();
+    const found = violations.map(
+      ({ id, nodes }) => `${id}: ${nodes.map((node) => node.target.join(' ')).join(', ')}`,
+    );
+    expect.soft(found, kept).toEqual([]);
+  }
+  expect.soft(await page.title(), screen.name).toMatch(/. · Cagewright$/);
+  expect.soft(said, `${screen.name}: said by the browser's console`).toEqual([]);
+}
+
+for (const [who, list] of Object.entries(screens) as [keyof typeof demo, Screen[]][]) {
+  test(`what the ${who} sees in the office, on a phone and a laptop, by day and by night`, async ({
+    page,
+  }) => {
+    await signIn(page, who, '/account');
+    for (const screen of list) await look(page, screen);
+  });
+}
+
+test('what anybody sees without signing in, on a phone and a laptop, by day and by night', async ({
+  page,
+}) => {
+  for (const screen of openScreens) await look(page, screen);
+});
