@@ -35,7 +35,7 @@ export function ChecksList({ sheet, viewer }: { sheet: Sheet; viewer: OfficeView
           <section
             key={group}
             aria-label={checkGroupWords[group]}
-            className="min-w-0 break-inside-avoid pb-2"
+            className="min-w-0 break-inside-avoid pb-2 print:break-inside-auto"
           >
             <Fold
               open={left > 0}

@@ -44,7 +44,7 @@ export function ConditionsList({
             </p>
           </div>
           {verified?.body.outcome !== 'met' && mayRecord('condition-verified', viewer.role) && (
-            <div className="col-start-2 -ml-pad sm:col-start-3">
+            <div className="col-start-2 -ml-pad sm:col-start-3 print:hidden">
               <RowAction
                 kind="verify"
                 id={condition.id}

@@ -172,7 +172,7 @@ export function ExtentPart({
         {body.description && <p>{body.description}</p>}
         <p className="text-pencil">About: {body.about.map((one) => subjectWords(context, one)).join('; ')}</p>
       </div>
-      <div className="grid gap-6 md:grid-cols-2">
+      <div className="grid gap-6 md:grid-cols-2 print:max-w-md print:grid-cols-1">
         {concerned.map((one) => {
           const place = placeOf(sheet, one);
           return (

@@ -57,7 +57,11 @@ export function DecisionSheet({
             <h2 className="text-heading">{heads[key]}</h2>
             <span className="font-label text-label font-medium text-pencil">
               {counts[key]}
-              {opened.has(key) ? ', opened' : <span className="text-chalk">, open to look</span>}
+              {opened.has(key) ? (
+                <span className="print:hidden">, opened</span>
+              ) : (
+                <span className="text-chalk print:hidden">, open to look</span>
+              )}
             </span>
           </summary>
           <div className="border-t border-rule px-4 py-3">{content[key]}</div>

@@ -60,7 +60,7 @@ export function FaceSheet({
             <RequirementTrail requirement={requirement} units={units} />
           </div>
         ))}
-        <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,26rem)_minmax(0,1fr)]">
+        <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,26rem)_minmax(0,1fr)] print:grid-cols-[minmax(0,22rem)_minmax(0,1fr)]">
           <FacePlan face={face} state={state} name={name} units={units} />
           <div className="grid gap-3 *:min-w-0">
             <PointsToSee sheet={sheet} face={state} />

@@ -19,13 +19,13 @@ export function Fold({
   return (
     <details open={open} className="group min-w-0 print:[&::details-content]:[content-visibility:visible]">
       <summary className="flex min-h-target list-none flex-wrap items-center justify-between gap-x-4 border-b border-rule font-label font-semibold [&::-webkit-details-marker]:hidden">
-        <span className="inline-flex items-center gap-2 text-chalk underline underline-offset-4">
+        <span className="inline-flex items-center gap-2 text-chalk underline underline-offset-4 print:text-ink print:no-underline">
           <svg
             viewBox="0 0 10 10"
             width="10"
             height="10"
             aria-hidden="true"
-            className="shrink-0 group-open:rotate-90"
+            className="shrink-0 group-open:rotate-90 print:hidden"
             fill="currentColor"
           >
             <path d="M2 0l7 5-7 5z" />

@@ -85,7 +85,7 @@ function HoldRow({ sheet, hold, viewer }: { sheet: Sheet; hold: Hold; viewer: Of
       </div>
       <div className="col-start-2 xl:col-start-3">
         <p>{hold.need}</p>
-        <div className="*:[button]:-ml-pad">
+        <div className="*:[button]:-ml-pad print:hidden">
           <HoldAnswer {...{ sheet, hold, viewer }} />
         </div>
       </div>

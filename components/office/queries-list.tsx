@@ -56,7 +56,7 @@ export function QueriesList({
             )}
           </div>
           {!answer && mayRecord('query-answered', viewer.role) && (
-            <div className="col-start-2 -ml-pad sm:col-start-3">
+            <div className="col-start-2 -ml-pad sm:col-start-3 print:hidden">
               <RowAction
                 kind="answer-query"
                 id={entry.id}

@@ -46,7 +46,7 @@ export function ReleaseStanding({
       <HoldsAgainst {...{ holds, viewer }} />
       <Planned {...{ sheet, holds, plannedAt, viewer }} />
       {mayGive && (
-        <div>
+        <div className="print:hidden">
           <LinkButton
             href={`/pours/${sheet.pourId}/release`}
             variant={holds.length === 0 && state !== 'released' ? 'primary' : 'secondary'}

@@ -18,7 +18,7 @@ export function RequirementTrail({
     <details
       open={open || undefined}
       onToggle={onToggle ? (event) => onToggle(event.currentTarget.open) : undefined}
-      className="text-body"
+      className="text-body print:not-open:hidden"
     >
       <summary className="min-h-6 w-fit font-label text-label font-semibold text-chalk">
         Where these limits come from

@@ -36,7 +36,7 @@ const headOnPhone = {
 const rowOnPhone =
   'max-sm:flex max-sm:flex-wrap max-sm:gap-x-3 max-sm:gap-y-1 max-sm:border-b max-sm:border-rule max-sm:py-2';
 const cellOnPhone =
-  'max-sm:min-w-0 max-sm:border-0 max-sm:p-0 max-sm:text-left max-sm:wrap-anywhere max-sm:whitespace-normal';
+  'print:min-w-0 print:whitespace-normal max-sm:min-w-0 max-sm:border-0 max-sm:p-0 max-sm:text-left max-sm:wrap-anywhere max-sm:whitespace-normal';
 const underHeading =
   'max-sm:grid max-sm:basis-full max-sm:grid-cols-[7rem_minmax(0,1fr)] max-sm:gap-x-3 max-sm:before:pt-px max-sm:before:font-label max-sm:before:text-label max-sm:before:font-medium max-sm:before:text-pencil max-sm:before:content-[attr(data-head)]';
 

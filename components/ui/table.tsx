@@ -23,7 +23,12 @@ export function Table({ caption, captionHidden, aside, className, children, ...r
           {aside && <div className="ml-auto font-label text-label">{aside}</div>}
         </div>
       )}
-      <div role="region" aria-label={caption} tabIndex={0} className="relative min-w-0 overflow-x-auto">
+      <div
+        role="region"
+        aria-label={caption}
+        tabIndex={0}
+        className="relative min-w-0 overflow-x-auto print:overflow-visible"
+      >
         <table {...rest} className={classNames('w-full border-collapse text-left text-body', className)}>
           <caption className="sr-only">{caption}</caption>
           {children}

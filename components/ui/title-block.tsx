@@ -29,7 +29,7 @@ export function TitleBlock({
   className?: string;
 }) {
   return (
-    <dl aria-label={label} className={classNames('flex flex-wrap gap-px bg-ink', className)}>
+    <dl aria-label={label} className={classNames('title-block flex flex-wrap gap-px bg-ink', className)}>
       {cells.map((cell) => (
         <div
           key={cell.label}

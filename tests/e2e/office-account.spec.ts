@@ -1,6 +1,6 @@
 import { expect, test, type Page } from '@playwright/test';
 import pg from 'pg';
-import { appAddress, demo, DEMO_PASSWORD, laptop, phone, signedIn, signIn } from './sign-in';
+import { appAddress, demo, DEMO_PASSWORD, laptop, phone, signedIn } from './sign-in';
 
 const fillIn = async (page: Page, email: string, password: string) => {
   await page.getByLabel('E-mail').fill(email);
@@ -116,36 +116,4 @@ test('a page that cannot be drawn gives an incident to quote, and nothing of the
   await page.getByRole('button', { name: 'Try again' }).click();
   await expect(page.getByRole('heading', { level: 1, name: 'Nonconformances' })).toBeVisible();
   await context.close();
-});
-
-test('the keyboard goes past the head of the page, and through a long sheet by its parts', async ({
-  page,
-}) => {
-  await signIn(page, 'superintendent', '/pours');
-  await page.getByRole('table').getByRole('link', { name: 'P-014' }).click();
-  await expect(page.getByRole('heading', { level: 1, name: /P-014/ })).toBeVisible();
-  await page.reload();
-  await page.keyboard.press('Tab');
-  await expect(page.getByRole('link', { name: 'Skip to the sheet' })).toBeFocused();
-  await page.keyboard.press('Enter');
-  await expect(page).toHaveURL(/#main$/);
-
-  const parts = page.getByRole('navigation', { name: 'On this sheet' });
-  await parts.getByRole('link', { name: /^Checks/ }).press('Enter');
-  const heading = page.getByRole('heading', { name: 'Checks', exact: true });
-  await expect(heading).toBeInViewport();
-  const bar = await parts.boundingBox();
-  const top = await heading.boundingBox();
-  expect(top!.y, 'the bar that stays does not cover what it leads to').toBeGreaterThanOrEqual(
-    bar!.y + bar!.height,
-  );
-
-  // A hold leads to its check, and opens the group that it is folded into.
-  const place = page.locator('#holds a[href^="#check-"]').first();
-  const target = (await place.getAttribute('href'))!;
-  await page.locator(`#checks details:has(${target})`).evaluate((group: HTMLDetailsElement) => {
-    group.open = false;
-  });
-  await place.press('Enter');
-  await expect(page.locator(target)).toBeInViewport();
 });
