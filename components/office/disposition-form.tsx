@@ -91,7 +91,7 @@ export function DispositionForm(props: DispositionFormProps) {
         <p className="text-pencil">A further decision takes the place of the one in force.</p>
       )}
       {failure && <ProblemNotice failure={failure} title="Nothing was signed" />}
-      <fieldset className="grid gap-1">
+      <fieldset aria-describedby={errors.decision && 'decision-error'} className="grid gap-1">
         <legend className="font-label text-label font-semibold">What is to be done</legend>
         {decisions.map(([value, word]) => (
           <Checkbox
@@ -108,7 +108,7 @@ export function DispositionForm(props: DispositionFormProps) {
       <Textarea label="Reason" error={errors.reason?.message} {...register('reason')} />
       <Textarea label="How far it reaches" rows={2} error={errors.extent?.message} {...register('extent')} />
       {mayAccept(decision) && (
-        <fieldset className="grid gap-1">
+        <fieldset aria-describedby={errors.accepts && 'accepts-error'} className="grid gap-1">
           <legend className="font-label text-label font-semibold">What it accepts</legend>
           <p className="text-label text-pencil">
             Only what is ticked, and nothing worse. The verdicts themselves stay as they are.

@@ -52,8 +52,14 @@ export function ReadingsTable({
       caption={`Readings of ${name}`}
       captionHidden
       columns={[
-        { key: 'point', head: 'Point' },
-        { key: 'cover', head: 'Cover', figure: true, beside: true },
+        { key: 'point', head: 'Point', className: 'max-sm:shrink-0 max-sm:basis-20' },
+        {
+          key: 'cover',
+          head: 'Cover',
+          figure: true,
+          beside: true,
+          className: 'max-sm:shrink-0 max-sm:basis-16',
+        },
         { key: 'verdict', head: 'Verdict', className: 'min-w-40 max-sm:flex-1', beside: true },
         { key: 'steel', head: 'To', className: 'whitespace-nowrap' },
         { key: 'measured', head: 'Measured', className: 'whitespace-nowrap' },

@@ -37,6 +37,8 @@ const rowOnPhone =
   'max-sm:flex max-sm:flex-wrap max-sm:gap-x-3 max-sm:gap-y-1 max-sm:border-b max-sm:border-rule max-sm:py-2';
 const cellOnPhone =
   'print:min-w-0 print:whitespace-normal max-sm:min-w-0 max-sm:border-0 max-sm:p-0 max-sm:text-left max-sm:wrap-anywhere max-sm:whitespace-normal';
+/** What the row is about, over the rest. */
+const firstOnPhone = 'max-sm:font-label max-sm:font-semibold max-sm:[&_.text-pencil]:font-normal';
 const underHeading =
   'max-sm:grid max-sm:basis-full max-sm:grid-cols-[7rem_minmax(0,1fr)] max-sm:gap-x-3 max-sm:before:pt-px max-sm:before:font-label max-sm:before:text-label max-sm:before:font-medium max-sm:before:text-pencil max-sm:before:content-[attr(data-head)]';
 
@@ -109,6 +111,7 @@ export function RuledTable({
                   className={classNames(
                     column.className,
                     cellOnPhone,
+                    index === 0 && firstOnPhone,
                     isEmpty(cell) ? 'max-sm:hidden' : !beside && underHeading,
                   )}
                 >

@@ -49,6 +49,21 @@ test.describe.serial('a decision and what it asks for after the pour', () => {
     await page.keyboard.press('Enter');
     await expect(sign).toBeEnabled();
 
+    // What is missing is said beside each field, and nothing that was typed is lost.
+    await page.getByLabel('How far it reaches').fill('One bar over 650 mm');
+    await page.getByLabel('Licence number').fill('');
+    await page.getByRole('button', { name: 'Add a condition' }).press('Enter');
+    await sign.press('Enter');
+    await expect(page.getByText('Choose what is to be done.')).toBeVisible();
+    await expect(page.getByText('Your password signs it.')).toBeVisible();
+    for (const field of ['Reason', 'Licence number', 'What', 'Met when'])
+      await expect(page.getByLabel(field, { exact: true })).toHaveAccessibleDescription(
+        'Write something here.',
+      );
+    await expect(page.getByLabel('How far it reaches')).toHaveValue('One bar over 650 mm');
+    await page.getByRole('button', { name: 'Remove condition 1' }).press('Enter');
+    await page.getByLabel('Licence number').fill('SE 40 117');
+
     await page.getByRole('radio', { name: 'Use as is' }).focus();
     await page.keyboard.press('Space');
     await page.getByLabel('Reason').fill('Strength is not touched at 34 mm.');
@@ -59,6 +74,11 @@ test.describe.serial('a decision and what it asks for after the pour', () => {
     await condition.getByLabel('What', { exact: true }).fill('Coat the top');
     await condition.getByLabel('Met when').fill('Two coats, thickness on record');
     await condition.getByLabel('Stage').selectOption({ label: 'after the pour' });
+    await context.setOffline(true);
+    await page.getByLabel('Your password').fill(DEMO_PASSWORD);
+    await sign.press('Enter');
+    await expect(page.getByText('What you typed is kept here; try again.')).toBeVisible();
+    await context.setOffline(false);
     await page.getByLabel('Your password').fill('not the password');
     await sign.press('Enter');
     await expect(page.getByText('That password is not right. Nothing was signed.')).toBeVisible();
@@ -68,6 +88,7 @@ test.describe.serial('a decision and what it asks for after the pour', () => {
     await expect(page.getByText('accepted', { exact: true }).first()).toBeVisible();
     await expect(page.getByRole('heading', { name: 'Decisions so far' })).toBeVisible();
     await expect(page.getByText('Use as is', { exact: true })).toBeVisible();
+    await expect(page.getByText('Reaches: One bar over 650 mm')).toBeVisible();
     await context.close();
   });
 
