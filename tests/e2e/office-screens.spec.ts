@@ -22,6 +22,7 @@ const looks = [
 
 // Hundreds of looks are taken of pages as long as they come: each would be kept a second time in the trace.
 test.use({ trace: 'off' });
+if (everything) test.setTimeout(900_000);
 
 let at: DemoAddresses;
 test.beforeAll(async ({ browser }) => {

@@ -1,11 +1,12 @@
 import type { Metadata } from 'next';
 import { cookies } from 'next/headers';
 import { BringInFile } from '@/components/office/bring-in-file';
-import { deviceWords } from '@/components/office/device-words';
+import { Fold } from '@/components/office/fold';
 import { PageMain } from '@/components/office/page-main';
 import { chosenProject, PROJECT_COOKIE } from '@/components/office/project-choice';
 import { fullTime } from '@/components/office/project-time';
 import { RuledTable } from '@/components/office/ruled-table';
+import { SessionsTable } from '@/components/office/sessions-table';
 import { SignOutEverywhere } from '@/components/office/sign-out-everywhere';
 import { SheetFrame } from '@/components/ui/sheet-frame';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
@@ -16,14 +17,24 @@ import { withAccess } from '@/lib/server/with-access';
 
 export const metadata: Metadata = { title: 'Account' };
 
+/** How many sessions stand in sight; the others are a press away. */
+const IN_SIGHT = 8;
+
 /** Who one is here, in which projects, and where one is signed in. */
 export default async function AccountPage() {
   const kept = (await cookies()).get(PROJECT_COOKIE)?.value;
-  const { person, projects, sessions, devices } = await withAccess(async ({ tx, person: signedIn, now }) => ({
+  const {
+    person,
+    projects,
+    sessions: open,
+    devices,
+  } = await withAccess(async ({ tx, person: signedIn, now }) => ({
     person: signedIn,
     projects: await readProjectsOfPerson(tx, signedIn),
     ...(await readPersonSessions(tx, signedIn.id, now)),
   }));
+  const [sessions, older] = [open.slice(0, IN_SIGHT), open.slice(IN_SIGHT)];
+  const current = person.sessionId;
   const timeZone = chosenProject(projects, kept)?.timeZone ?? 'UTC';
   return (
     <PageMain narrow>
@@ -52,25 +63,12 @@ export default async function AccountPage() {
       </SheetFrame>
       <SheetFrame heading="Where you are signed in" aside={`times of ${timeZone.replaceAll('_', ' ')}`}>
         <div className="grid gap-4 *:min-w-0">
-          <RuledTable
-            caption="Sessions"
-            captionHidden
-            columns={[
-              { key: 'what', head: 'Browser', className: 'min-w-40' },
-              { key: 'seen', head: 'Last seen', className: 'whitespace-nowrap' },
-              { key: 'since', head: 'Since', className: 'whitespace-nowrap' },
-              { key: 'from', head: 'From' },
-            ]}
-            rows={sessions.map((session) => ({
-              key: session.id,
-              cells: {
-                what: `${deviceWords(session.userAgent)}${session.id === person.sessionId ? ' (this one)' : ''}`,
-                seen: fullTime(session.lastSeenAt, timeZone),
-                since: fullTime(session.createdAt, timeZone),
-                from: session.address,
-              },
-            }))}
-          />
+          <SessionsTable caption="Sessions" {...{ sessions, current, timeZone }} />
+          {older.length > 0 && (
+            <Fold summary="Longer ago" aside={`${older.length} still signed in`}>
+              <SessionsTable caption="Sessions not seen lately" sessions={older} {...{ current, timeZone }} />
+            </Fold>
+          )}
           <SignOutEverywhere />
         </div>
       </SheetFrame>
