@@ -6,10 +6,11 @@ import { SheetFrame } from '@/components/ui/sheet-frame';
 /** A page that could not be drawn: what happened, what is kept, what to do, and the incident to quote. */
 export default function ErrorPage({
   error,
-  reset,
+  retry,
 }: {
   error: Error & { digest?: string };
-  reset: () => void;
+  /** Asks the server for the page once more; clearing the error alone would draw the same answer again. */
+  retry: () => void;
 }) {
   return (
     <main id="main" className="mx-auto max-w-xl px-4 py-10">
@@ -25,7 +26,7 @@ export default function ErrorPage({
             </p>
           )}
           <div>
-            <Button variant="primary" onClick={reset}>
+            <Button variant="primary" onClick={retry}>
               Try again
             </Button>
           </div>
