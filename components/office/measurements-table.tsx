@@ -29,7 +29,7 @@ export function MeasurementsTable({ sheet, viewer }: { sheet: Sheet; viewer: Off
         { key: 'value', head: 'Measured', figure: true },
         { key: 'verdict', head: 'Verdict', className: 'min-w-40' },
         { key: 'place', head: 'Place' },
-        { key: 'by', head: 'By', className: 'whitespace-nowrap' },
+        { key: 'by', head: 'By', className: 'whitespace-nowrap print:whitespace-normal' },
       ]}
       rows={sheet.measurements.flatMap((state): RuledRow[] => {
         const head = {

@@ -79,7 +79,7 @@ export function PlanFacts({
           captionHidden
           columns={[
             { key: 'revision', head: 'Revision' },
-            { key: 'when', head: 'Issued', className: 'whitespace-nowrap' },
+            { key: 'when', head: 'Issued', className: 'whitespace-nowrap print:whitespace-normal' },
             { key: 'by', head: 'By' },
             { key: 'reason', head: 'Why', className: 'min-w-48' },
             { key: 'digest', head: 'Digest', figure: true },

@@ -36,7 +36,7 @@ const headOnPhone = {
 const rowOnPhone =
   'max-sm:flex max-sm:flex-wrap max-sm:gap-x-3 max-sm:gap-y-1 max-sm:border-b max-sm:border-rule max-sm:py-2';
 const cellOnPhone =
-  'print:min-w-0 print:whitespace-normal max-sm:min-w-0 max-sm:border-0 max-sm:p-0 max-sm:text-left max-sm:wrap-anywhere max-sm:whitespace-normal';
+  'print:min-w-0 max-sm:min-w-0 max-sm:border-0 max-sm:p-0 max-sm:text-left max-sm:wrap-anywhere max-sm:whitespace-normal';
 /** What the row is about, over the rest. */
 const firstOnPhone = 'max-sm:font-label max-sm:font-semibold max-sm:[&_.text-pencil]:font-normal';
 const underHeading =
