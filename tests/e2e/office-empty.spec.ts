@@ -43,7 +43,7 @@ test('a project in which nothing has happened says what will stand there, and ho
     for (const words of [
       'No instrument is registered.',
       'No drawing has been received.',
-      'No mix is registered.',
+      'No plan names a mix, and no change of one was recorded.',
     ])
       await expect(page.getByText(words)).toBeVisible();
     await look('project');
