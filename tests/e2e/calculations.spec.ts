@@ -81,7 +81,15 @@ const walks: Walk[] = [
   {
     slug: 'clear-distance',
     title: 'Clear distance between bars',
-    link: { units: 'mm', basis: 'en-1992', bar: '25 mm', aggregate: '20', k1: '1', k2: '5' },
+    link: {
+      units: 'mm',
+      basis: 'en-1992',
+      bar: '25 mm',
+      aggregate: '20',
+      k1: '1',
+      k2: '5',
+      layout: 'none',
+    },
     says: 'Least clear distance: 25 mm',
     change: { label: 'Largest aggregate', name: 'aggregate', to: '32', says: 'Least clear distance: 37 mm' },
     wrong: { label: 'Largest bar', to: '17 mm', says: /no bar size known here/ },
