@@ -1,4 +1,4 @@
-import { expect, test } from '@playwright/test';
+import { expect, test, type Page } from '@playwright/test';
 import { openBuildingSite, sessionCookie, type BuildingSite } from '../faults/browser/building-site';
 import {
   keepReading,
@@ -19,6 +19,14 @@ test.beforeEach(async () => {
   site = await openBuildingSite(process.env.E2E_APP ?? '', process.env.E2E_DATABASE ?? '');
 });
 test.afterEach(() => site.close());
+
+/** Confirms signing out, and waits until the page was loaded afresh for the next person. */
+async function confirmSignOut(page: Page): Promise<void> {
+  const afresh = page.waitForEvent('load');
+  await page.getByRole('dialog').getByRole('button', { name: 'Sign out' }).click();
+  await afresh;
+  await expect(page.getByRole('link', { name: 'Sign in' }).first()).toBeVisible();
+}
 
 thoroughTest(
   'a session that ends while offline: kept, one can go on, and all is sent after signing in again',
@@ -66,8 +74,7 @@ test('signing out with unsent work: it is said and kept, hidden from the next pe
   await page.getByRole('button', { name: 'Sign out' }).click();
   const dialog = page.getByRole('dialog', { name: `Sign out ${first.name}` });
   await expect(dialog).toContainText('2 not sent yet. It stays on this device, hidden from others');
-  await dialog.getByRole('button', { name: 'Sign out' }).click();
-  await expect(page.getByRole('link', { name: 'Sign in' }).first()).toBeVisible();
+  await confirmSignOut(page);
   await context.unroute('**/api/sync/push');
 
   await signIn(page, site, second);
@@ -86,8 +93,7 @@ test('signing out with unsent work: it is said and kept, hidden from the next pe
 
   await page.goto(`${site.app}/field`);
   await page.getByRole('button', { name: 'Sign out' }).click();
-  await page.getByRole('dialog').getByRole('button', { name: 'Sign out' }).click();
-  await expect(page.getByRole('link', { name: 'Sign in' }).first()).toBeVisible();
+  await confirmSignOut(page);
   await signIn(page, site, first);
   await expect(notSent(page)).toContainText('all sent', { timeout: 30_000 });
   const readings = (await site.record()).filter((entry) => entry.type === 'reading');

@@ -39,7 +39,9 @@ test.describe('a device that is full', () => {
     const used = async () => (await session.send('Storage.getUsageAndQuota', { origin: site.app })).usage;
     await give(10_000_000);
     return async (bytes: number) => {
+      // Coarsely, then finely: what the store believes is left must be too little for a photo.
       await fillUp(page, 1_000_000);
+      await fillUp(page, 20_000);
       let last = 0;
       const settled = async () => last === (last = await used());
       await expect.poll(settled, { intervals: [500] }).toBe(true);
