@@ -10,7 +10,7 @@ test.describe.serial('a decision and what it asks for after the pour', () => {
     browser,
   }) => {
     const boss = await signedIn(browser, 'superintendent', laptop, '/pours');
-    pourId = await planPour(boss.page, 'P-921', 'Ticket hall slab');
+    pourId = await planPour(boss.page, 'P-941', 'Ticket hall slab');
     await inspectAndSign(browser, pourId);
     await boss.context.close();
     const site = await signedIn(browser, 'inspector', laptop, `/pours/${pourId}`);
