@@ -8,8 +8,8 @@ import type { SignatureState } from './sheet-types';
 
 /**
  * Does this entry change what was signed for? A failed block check does so only where readings rest on the instrument:
- * they are then not verified, which holds, and reading them again is what sets a signature aside. Photographs, notes, requests, signatures and releases do not; a passed
- * last walk and a condition found met say nothing against it.
+ * they are then not verified, which holds, and reading them again is what sets a signature aside. Photographs, notes,
+ * requests, signatures and releases do not; a passed last walk and a condition found met say nothing against it.
  */
 export function isMaterial(entry: Entry, plan: Plan): boolean {
   switch (entry.type) {
@@ -48,7 +48,7 @@ export function isMaterial(entry: Entry, plan: Plan): boolean {
 const overlaps = (a: string[] | null, b: string[] | null): boolean =>
   a === null || b === null || a.some((id) => b.includes(id));
 
-/** Signatures with what sets them aside: any later material entry in their scope. */
+/** Signatures with what sets them aside: the first material entry in their scope that the signer had not seen. */
 export function judgeSignatures(facts: Facts, plan: Plan): SignatureState[] {
   return listOf(facts, 'signature').map((entry) => {
     const setAsideBy =
