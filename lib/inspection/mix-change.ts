@@ -1,4 +1,4 @@
-import type { Entry, EntryOf } from './entry';
+import type { EntryOf } from './entry';
 import { listOf, type Facts } from './facts';
 import type { Plan } from './plan';
 
@@ -16,19 +16,22 @@ export function namesAnotherMix({ body }: EntryOf<'mix-changed'>, plan: Plan): b
 }
 
 /**
- * The last change of mix that nobody has answered with a revision of the plan: what was judged with the planned mix and
- * its aggregate may not hold with the new one. A plan that names no mix has nothing judged by one.
+ * The change of mix that stands and that nobody has answered with a revision of the plan: what was judged with the
+ * planned mix and its aggregate may not hold with the new one. Changes are followed from mix to mix, so that only one
+ * back to the planned mix answers by itself. A plan that names no mix has nothing judged by one.
  */
 export function unansweredMixChange(facts: Facts, plan: Plan): EntryOf<'mix-changed'> | null {
   if (plan.mix === null) return null;
   const issued = listOf(facts, 'plan-issued').findLast(({ body }) => body.revision === plan.revision);
-  const after = (entry: Entry) => (entry.seq ?? Infinity) > (issued?.seq ?? 0);
-  const last = listOf(facts, 'mix-changed').findLast(
-    ({ body }) => body.pourId === null || body.pourId === plan.pourId,
-  );
-  // A later change back to the planned mix answers an earlier one.
-  if (last && same(last.body.name, plan.mix.name)) return null;
-  return (
-    listOf(facts, 'mix-changed').findLast((entry) => after(entry) && namesAnotherMix(entry, plan)) ?? null
-  );
+  let current = plan.mix.name;
+  let standing: EntryOf<'mix-changed'> | null = null;
+  for (const entry of listOf(facts, 'mix-changed')) {
+    const { pourId, name, replaces } = entry.body;
+    if (pourId !== null && pourId !== plan.pourId) continue;
+    if ((entry.seq ?? Infinity) <= (issued?.seq ?? 0)) continue;
+    if (replaces !== '' && !same(replaces, current)) continue;
+    current = name;
+    standing = same(name, plan.mix.name) ? null : entry;
+  }
+  return standing;
 }

@@ -41,8 +41,20 @@ describe('a change of mix', () => {
   it('is answered by a change back', () => {
     const story = new PourStory().inspected();
     story.tells('coordinator', 'mix-changed', change());
+    // Another mix gives way to the planned one: that says nothing of this pour.
+    story.tells('coordinator', 'mix-changed', change({ name: 'Marine 40/20', replaces: 'Stair mix' }));
+    expect(mixHolds(story)).toHaveLength(1);
     story.tells('coordinator', 'mix-changed', change({ name: 'Marine 40/20', replaces: 'Marine 45/10' }));
     expect(mixHolds(story)).toEqual([]);
+  });
+
+  it('is followed from mix to mix', () => {
+    const story = new PourStory().inspected();
+    story.tells('coordinator', 'mix-changed', change({ replaces: 'Marine 40/20' }));
+    story.tells('coordinator', 'mix-changed', change({ name: 'Marine 50/10', replaces: 'Marine 45/10' }));
+    expect(mixHolds(story)).toMatchObject([
+      { title: 'Mix changed to Marine 50/10; the plan names Marine 40/20' },
+    ]);
   });
 
   it('holds nothing where the plan names no mix', () => {
